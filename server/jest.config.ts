@@ -1,0 +1,26 @@
+import type { Config } from 'jest';
+
+const config: Config = {
+  rootDir: '.',
+  roots: ['<rootDir>/src', '<rootDir>/test'],
+  testRegex: '\\.(e2e-)?spec\\.ts$',
+  testEnvironment: 'node',
+  testEnvironmentOptions: { customExportConditions: ['pegwell-source', 'node', 'node-addons'] },
+  transform: {
+    '^.+\\.(t|j)s$': [
+      '@swc/jest',
+      {
+        jsc: {
+          parser: { syntax: 'typescript', decorators: true },
+          transform: { legacyDecorator: true, decoratorMetadata: true },
+          target: 'es2023',
+        },
+        module: { type: 'commonjs' },
+      },
+    ],
+  },
+  maxWorkers: 2,
+  testTimeout: 30_000,
+};
+
+export default config;
