@@ -1,0 +1,55 @@
+import { z } from 'zod';
+
+/** `?page=1&pageSize=50`, counted from 1, at most 200 a page. */
+export const pageQuerySchema = z.strictObject({
+  page: z.coerce.number().int().min(1).max(1_000_000).default(1),
+  pageSize: z.coerce.number().int().min(1).max(200).default(50),
+});
+
+export type PageQuery = z.infer<typeof pageQuerySchema>;
+
+export function pageOf<T extends z.ZodType>(item: T) {
+  return z.object({
+    items: z.array(item),
+    total: z.number().int(),
+    page: z.number().int(),
+    pageSize: z.number().int(),
+  });
+}
+
+export interface Page<T> {
+  readonly items: readonly T[];
+  readonly total: number;
+  readonly page: number;
+  readonly pageSize: number;
+}
+
+/** A UUID in any version, compared in lower case. */
+export const idSchema = z.guid({ error: 'This is not an id.' }).transform((id) => id.toLowerCase());
+
+/** One line of text as people type it: trimmed, without control characters. */
+export function lineSchema(max: number, what: string) {
+  return (
+    z
+      .string({ error: `${what} is missing.` })
+      .trim()
+      .min(1, `${what} is missing.`)
+      .max(max, `${what} is longer than ${max} characters.`)
+      // eslint-disable-next-line no-control-regex -- control characters are what is refused
+      .regex(/^[^\u0000-\u001f\u007f]*$/, `${what} has characters that cannot be shown.`)
+  );
+}
+
+/** Several lines of text, possibly empty. */
+export function textSchema(max: number, what: string) {
+  return (
+    z
+      .string()
+      .max(max, `${what} is longer than ${max} characters.`)
+      // eslint-disable-next-line no-control-regex -- NUL cannot be stored, the rest cannot be shown
+      .regex(
+        /^[^\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f]*$/,
+        `${what} has characters that cannot be shown.`,
+      )
+  );
+}

@@ -1,0 +1,127 @@
+import { z } from 'zod';
+import { keySchema, modeSchema } from './keys';
+import { idSchema, lineSchema, pageOf, pageQuerySchema, textSchema } from './page';
+
+/** Bytes of an import file. */
+export const IMPORT_MAX_BYTES = 10 * 1024 * 1024;
+export const MAX_ACCEPTED = 20;
+export const MAX_CAPO = 12;
+
+/** `GDAE`, `gDGBD`, `A3 E4 A4 E5`, or `any` alone. Whether it can be read is the kind's to say (422). */
+export const acceptedTuningSchema = z.strictObject({
+  tuning: z.string({ error: 'A tuning is missing.' }).trim().min(1, 'A tuning is missing.').max(80),
+  capo: z.number().int().min(0).max(MAX_CAPO, `A capo stands at fret 0 to ${MAX_CAPO}.`).default(0),
+});
+
+export const kindTuningsSchema = z.strictObject({
+  kind: z.string({ error: 'An instrument is missing.' }).trim().min(1, 'An instrument is missing.').max(40),
+  accepted: z.array(acceptedTuningSchema).max(MAX_ACCEPTED, `At most ${MAX_ACCEPTED} tunings an instrument.`),
+});
+export type KindTunings = z.infer<typeof kindTuningsSchema>;
+
+export const tuningsSchema = z.array(kindTuningsSchema).max(40);
+
+const rhythmSchema = z
+  .string()
+  .trim()
+  .max(40, 'A rhythm is longer than 40 characters.')
+  .nullish()
+  .transform((word) => word || null);
+
+const optionalText = (max: number, what: string) =>
+  textSchema(max, what)
+    .trim()
+    .nullish()
+    .transform((text) => text || null);
+
+const tuneFields = {
+  title: lineSchema(200, 'A title'),
+  key: keySchema,
+  mode: modeSchema,
+  rhythm: rhythmSchema,
+  parts: optionalText(40, 'Parts'),
+  composer: optionalText(200, 'A composer'),
+  source: optionalText(500, 'A source'),
+  notes: optionalText(5000, 'Notes'),
+};
+
+export const createTuneSchema = z.strictObject({ ...tuneFields, tunings: tuningsSchema.default([]) });
+export type CreateTune = z.infer<typeof createTuneSchema>;
+
+/** Every field is optional; what is absent stays. `tunings` replaces the usual setting's. */
+export const updateTuneSchema = z.strictObject({ ...tuneFields, tunings: tuningsSchema }).partial();
+export type UpdateTune = z.infer<typeof updateTuneSchema>;
+
+export const shownTuningSchema = z.object({
+  /** As shown: short name, full form, or `any`. */
+  tuning: z.string(),
+  pitches: z.array(z.string()).nullable(),
+  capo: z.number().int(),
+});
+export type ShownTuning = z.infer<typeof shownTuningSchema>;
+
+export const tuneSchema = z.object({
+  id: idSchema,
+  /** The usual setting's. */
+  settingId: idSchema,
+  title: z.string(),
+  key: z.string(),
+  mode: modeSchema,
+  rhythm: z.string().nullable(),
+  parts: z.string().nullable(),
+  composer: z.string().nullable(),
+  source: z.string().nullable(),
+  notes: z.string().nullable(),
+  /** What the usual setting says. */
+  tunings: z.array(z.object({ kind: z.string(), accepted: z.array(shownTuningSchema) })),
+  /** What the circle's usual tunings say for kinds on which the setting is silent; `any` is left out. */
+  assumed: z.array(z.object({ kind: z.string(), accepted: z.array(shownTuningSchema) })),
+  createdAt: z.string(),
+  updatedAt: z.string(),
+  can: z.array(z.string()),
+});
+export type Tune = z.infer<typeof tuneSchema>;
+export const tunePageSchema = pageOf(tuneSchema);
+
+/** `tuning` needs `kind`. `sort` is `title`, `key`, `rhythm` or `updated`, with `-` before it to turn it round. */
+export const tuneQuerySchema = pageQuerySchema.extend({
+  search: z.string().max(200).optional(),
+  kind: z.string().max(40).optional(),
+  tuning: z.string().max(80).optional(),
+  key: keySchema.optional(),
+  mode: modeSchema.optional(),
+  rhythm: z.string().max(40).optional(),
+  sort: z
+    .enum(['title', '-title', 'key', '-key', 'rhythm', '-rhythm', 'updated', '-updated'])
+    .default('title'),
+});
+export type TuneQuery = z.infer<typeof tuneQuerySchema>;
+
+export const importQuerySchema = z.strictObject({
+  dryRun: z
+    .enum(['true', 'false'])
+    .default('false')
+    .transform((word) => word === 'true'),
+});
+
+export const importActionSchema = z.enum(['create', 'update', 'unchanged', 'skip']);
+export const importReportSchema = z.object({
+  format: z.enum(['abc', 'csv']),
+  read: z.number().int(),
+  created: z.number().int(),
+  updated: z.number().int(),
+  unchanged: z.number().int(),
+  skipped: z.number().int(),
+  problems: z.array(z.object({ line: z.number().int(), tune: z.string().nullable(), message: z.string() })),
+  tunes: z.array(
+    z.object({
+      line: z.number().int(),
+      title: z.string(),
+      action: importActionSchema,
+      id: idSchema.optional(),
+    }),
+  ),
+});
+export type ImportReport = z.infer<typeof importReportSchema>;
+
+export const exportQuerySchema = z.strictObject({ format: z.enum(['csv', 'abc']).default('csv') });
