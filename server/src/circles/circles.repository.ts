@@ -1,0 +1,87 @@
+import { Injectable } from '@nestjs/common';
+import { and, asc, eq, isNotNull, isNull } from 'drizzle-orm';
+import type { Role } from '@pegwell/shared/contract/circles';
+import { accounts } from '../accounts/accounts.table';
+import type { Database } from '../database/database';
+import { circles, events, members, usualTunings } from './circles.table';
+
+export type CircleRow = typeof circles.$inferSelect;
+export type UsualTuningRow = typeof usualTunings.$inferSelect;
+
+@Injectable()
+export class CirclesRepository {
+  async insert(db: Database, values: typeof circles.$inferInsert): Promise<CircleRow> {
+    const [row] = await db.insert(circles).values(values).returning();
+    if (!row) throw new Error('a circle was not stored');
+    return row;
+  }
+
+  async byId(db: Database, circleId: string): Promise<CircleRow | null> {
+    const [row] = await db
+      .select()
+      .from(circles)
+      .where(and(eq(circles.id, circleId), isNull(circles.removedAt)));
+    return row ?? null;
+  }
+
+  async ofAccount(db: Database, accountId: string): Promise<{ id: string; name: string; role: Role }[]> {
+    return db
+      .select({ id: circles.id, name: circles.name, role: members.role })
+      .from(members)
+      .innerJoin(circles, eq(circles.id, members.circleId))
+      .where(and(eq(members.accountId, accountId), isNull(members.removedAt), isNull(circles.removedAt)))
+      .orderBy(asc(circles.name), asc(circles.id));
+  }
+
+  async roleOf(db: Database, circleId: string, accountId: string): Promise<Role | null> {
+    const [row] = await db
+      .select({ role: members.role })
+      .from(members)
+      .innerJoin(circles, eq(circles.id, members.circleId))
+      .where(
+        and(
+          eq(members.circleId, circleId),
+          eq(members.accountId, accountId),
+          isNull(members.removedAt),
+          isNull(circles.removedAt),
+        ),
+      );
+    return row?.role ?? null;
+  }
+
+  /** False when the account is a member already. A member who left comes back in the new role. */
+  async addMember(db: Database, circleId: string, accountId: string, role: Role): Promise<boolean> {
+    const rows = await db
+      .insert(members)
+      .values({ circleId, accountId, role })
+      .onConflictDoUpdate({
+        target: [members.circleId, members.accountId],
+        set: { role, removedAt: null, joinedAt: new Date() },
+        setWhere: isNotNull(members.removedAt),
+      })
+      .returning({ accountId: members.accountId });
+    return rows.length === 1;
+  }
+
+  async members(db: Database, circleId: string) {
+    return db
+      .select({ accountId: accounts.id, displayName: accounts.displayName, email: accounts.email, role: members.role })
+      .from(members)
+      .innerJoin(accounts, eq(accounts.id, members.accountId))
+      .where(and(eq(members.circleId, circleId), isNull(members.removedAt)))
+      .orderBy(asc(members.joinedAt), asc(accounts.displayName));
+  }
+
+  async usualTunings(db: Database, circleId: string): Promise<UsualTuningRow[]> {
+    return db.select().from(usualTunings).where(eq(usualTunings.circleId, circleId));
+  }
+
+  async replaceUsualTunings(db: Database, circleId: string, rows: (typeof usualTunings.$inferInsert)[]): Promise<void> {
+    await db.delete(usualTunings).where(eq(usualTunings.circleId, circleId));
+    if (rows.length > 0) await db.insert(usualTunings).values(rows);
+  }
+
+  async insertEvent(db: Database, values: typeof events.$inferInsert): Promise<void> {
+    await db.insert(events).values(values);
+  }
+}

@@ -1,0 +1,23 @@
+import { existsSync } from 'node:fs';
+import { join } from 'node:path';
+import type { NestExpressApplication } from '@nestjs/platform-express';
+import express, { type NextFunction, type Request, type Response } from 'express';
+
+/** The built pages, beside the server in a checkout and in a release. */
+const PAGES = join(__dirname, '../../client/dist');
+
+/**
+ * Serves the built pages, when there are any, from the same process as the API: files with a hash in
+ * their name for a year, everything else afresh, and every address that is no file as the application.
+ */
+export function servePages(app: NestExpressApplication): void {
+  const index = join(PAGES, 'index.html');
+  if (!existsSync(index)) return;
+  app.use('/assets', express.static(join(PAGES, 'assets'), { immutable: true, maxAge: '365d', fallthrough: false }));
+  app.use(express.static(PAGES, { index: false, maxAge: 0 }));
+  app.use((request: Request, response: Response, next: NextFunction) => {
+    if (request.method !== 'GET' && request.method !== 'HEAD') return next();
+    if (request.path === '/api' || request.path.startsWith('/api/')) return next();
+    response.set('Cache-Control', 'no-cache').sendFile(index);
+  });
+}

@@ -1,0 +1,13 @@
+import { Injectable } from '@nestjs/common';
+import type { Database } from '../database/database';
+import { PlayableRepository, type PlayableTune } from './playable.repository';
+
+/** What evenings, phones and sheets need to know of tunes. */
+@Injectable()
+export class PlayableService {
+  constructor(private readonly playable: PlayableRepository) {}
+
+  byIds(db: Database, circleId: string, ids: readonly string[]): Promise<Map<string, PlayableTune>> {
+    return this.playable.byIds(db, circleId, ids);
+  }
+}
