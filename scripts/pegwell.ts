@@ -1,0 +1,35 @@
+// The words of ./docker-free-dev.sh.
+import { end, endOnSignals } from './ending';
+import { say, Sentence } from './sentence';
+import { test } from './test';
+
+const HELP = `./docker-free-dev.sh          develop: database, server and pages, with the demo circle; Ctrl-C stops all
+./docker-free-dev.sh start    built, as in production: one process for API and pages, no demo unless PEGWELL_DEMO=yes
+./docker-free-dev.sh test     every check; "test --only lint,shared,client,build,server,e2e" for some
+./docker-free-dev.sh stop     stop what runs, the database included
+./docker-free-dev.sh reset    remove the database and everything else in .data/ (asks first)`;
+
+async function main([word, ...words]: readonly string[]): Promise<number> {
+  switch (word) {
+    case 'test':
+      endOnSignals({ interrupted: 130, terminated: 143 });
+      return test(words);
+    case 'help':
+    case '--help':
+    case '-h':
+      say(HELP);
+      return 0;
+    default:
+      throw new Sentence(`There is no word "${word ?? ''}" here. These are:\n${HELP}`);
+  }
+}
+
+main(process.argv.slice(2)).then(end, (error: unknown) => {
+  process.stderr.write(`${error instanceof Sentence ? error.message : describe(error)}\n`);
+  if (process.argv[2] === 'test') say('0 passed, 1 failed');
+  return end(1);
+});
+
+function describe(error: unknown): string {
+  return error instanceof Error ? (error.stack ?? error.message) : String(error);
+}
