@@ -1,0 +1,9 @@
+import { Page, PageHeading } from '../ui/page';
+
+export function BoardPage() {
+  return (
+    <Page>
+      <PageHeading title="Evening" />
+    </Page>
+  );
+}

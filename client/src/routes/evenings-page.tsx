@@ -1,0 +1,9 @@
+import { Page, PageHeading } from '../ui/page';
+
+export function EveningsPage() {
+  return (
+    <Page>
+      <PageHeading title="Evenings" />
+    </Page>
+  );
+}

@@ -1,0 +1,9 @@
+import { Page, PageHeading } from '../ui/page';
+
+export function RoomPage() {
+  return (
+    <Page>
+      <PageHeading title="Follow the evening" />
+    </Page>
+  );
+}

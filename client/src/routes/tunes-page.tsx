@@ -1,0 +1,9 @@
+import { Page, PageHeading } from '../ui/page';
+
+export function TunesPage() {
+  return (
+    <Page>
+      <PageHeading title="Tunes" />
+    </Page>
+  );
+}

@@ -1,0 +1,9 @@
+import { Page, PageHeading } from '../ui/page';
+
+export function TuningsPage() {
+  return (
+    <Page>
+      <PageHeading title="Tunings" />
+    </Page>
+  );
+}
