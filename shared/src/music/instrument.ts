@@ -1,4 +1,4 @@
-import { midiOf } from './pitch';
+import { midiOf, noteOf } from './pitch';
 
 /** One string, or the strings that are tuned together and played as one. */
 export interface Course {
@@ -31,120 +31,101 @@ export interface InstrumentKind {
   readonly courses: readonly Course[];
 }
 
-type CourseRow = readonly [standard: string, ordinal: string, leastMargin?: 'least margin'];
-
-/** Names are the letters of the standard pitches; `pegs` is per course, one number for all or one each. */
-function kind(
-  id: string,
-  name: string,
-  pegs: number | readonly number[],
-  rows: readonly CourseRow[],
-): InstrumentKind {
-  const courses = rows.map(([standard, ordinal, margin], index) => ({
-    standard,
-    pegs: typeof pegs === 'number' ? pegs : pegs[index]!,
-    name: standard.slice(0, -1),
-    ordinal,
-    leastMargin: margin !== undefined,
-  }));
-  return { id, name, plural: name === 'Bass' ? 'Basses' : `${name}s`, courses };
+/** A course named by the letter of its standard pitch, with one peg and a margin, unless `more` says other. */
+function course(standard: string, ordinal: string, more: Partial<Course> = {}): Course {
+  return { standard, pegs: 1, name: noteOf(standard), ordinal, leastMargin: false, ...more };
 }
 
+const TOP: Partial<Course> = { leastMargin: true };
+const DOUBLED: Partial<Course> = { pegs: 2 };
+
 /**
- * Standard pitches are common practice in the trade; the bouzouki's tuning and the dulcimer's octaves are
- * written from memory.
+ * Those the application knows without being told. Standard pitches are common practice in the trade; the
+ * bouzouki's tuning and the dulcimer's octaves are written from memory.
  */
-const FIDDLE = kind('fiddle', 'Fiddle', 1, [
-  ['G3', '4th'],
-  ['D4', '3rd'],
-  ['A4', '2nd'],
-  ['E5', '1st', 'least margin'],
-]);
-
-/** Five strings, the short fifth first; it stands nearest its limit beside the first. */
-const BANJO = kind('banjo', 'Banjo', 1, [
-  ['G4', '5th', 'least margin'],
-  ['D3', '4th'],
-  ['G3', '3rd'],
-  ['B3', '2nd'],
-  ['D4', '1st', 'least margin'],
-]);
-
-const GUITAR = kind('guitar', 'Guitar', 1, [
-  ['E2', '6th'],
-  ['A2', '5th'],
-  ['D3', '4th'],
-  ['G3', '3rd'],
-  ['B3', '2nd'],
-  ['E4', '1st', 'least margin'],
-]);
-
-const MANDOLIN = kind('mandolin', 'Mandolin', 2, [
-  ['G3', '4th'],
-  ['D4', '3rd'],
-  ['A4', '2nd'],
-  ['E5', '1st', 'least margin'],
-]);
-
-/** As in Irish use. */
-const TENOR_BANJO = kind('tenor-banjo', 'Tenor banjo', 1, [
-  ['G2', '4th'],
-  ['D3', '3rd'],
-  ['A3', '2nd'],
-  ['E4', '1st', 'least margin'],
-]);
-
-/** Irish bouzouki. */
-const BOUZOUKI = kind('bouzouki', 'Bouzouki', 2, [
-  ['G2', '4th'],
-  ['D3', '3rd'],
-  ['A3', '2nd'],
-  ['D4', '1st', 'least margin'],
-]);
-
-const UKULELE = kind('ukulele', 'Ukulele', 1, [
-  ['G4', '4th'],
-  ['C4', '3rd'],
-  ['E4', '2nd'],
-  ['A4', '1st'],
-]);
-
-/** Mountain dulcimer: the melody course is doubled. */
-const DULCIMER = kind(
-  'dulcimer',
-  'Dulcimer',
-  [1, 1, 2],
-  [
-    ['D3', 'bass'],
-    ['A3', 'middle'],
-    ['D4', 'melody', 'least margin'],
-  ],
-);
-
-/** Double bass. */
-const BASS = kind('bass', 'Bass', 1, [
-  ['E1', '4th'],
-  ['A1', '3rd'],
-  ['D2', '2nd'],
-  ['G2', '1st'],
-]);
-
-/** A banjo's fifth is written in lower case, `gDGBD`. */
-const BANJO_AS_WRITTEN: InstrumentKind = {
-  ...BANJO,
-  courses: BANJO.courses.map((course) => (course.ordinal === '5th' ? { ...course, name: 'g' } : course)),
-};
-
 export const BUILT_IN_KINDS: readonly InstrumentKind[] = [
-  FIDDLE,
-  BANJO_AS_WRITTEN,
-  GUITAR,
-  MANDOLIN,
-  TENOR_BANJO,
-  BOUZOUKI,
-  UKULELE,
-  DULCIMER,
-  BASS,
+  {
+    id: 'fiddle',
+    name: 'Fiddle',
+    plural: 'Fiddles',
+    courses: [course('G3', '4th'), course('D4', '3rd'), course('A4', '2nd'), course('E5', '1st', TOP)],
+  },
+  {
+    // Five strings, the short fifth first.
+    id: 'banjo',
+    name: 'Banjo',
+    plural: 'Banjos',
+    courses: [
+      course('G4', '5th', { ...TOP, name: 'g' }),
+      course('D3', '4th'),
+      course('G3', '3rd'),
+      course('B3', '2nd'),
+      course('D4', '1st', TOP),
+    ],
+  },
+  {
+    id: 'guitar',
+    name: 'Guitar',
+    plural: 'Guitars',
+    courses: [
+      course('E2', '6th'),
+      course('A2', '5th'),
+      course('D3', '4th'),
+      course('G3', '3rd'),
+      course('B3', '2nd'),
+      course('E4', '1st', TOP),
+    ],
+  },
+  {
+    id: 'mandolin',
+    name: 'Mandolin',
+    plural: 'Mandolins',
+    courses: [
+      course('G3', '4th', DOUBLED),
+      course('D4', '3rd', DOUBLED),
+      course('A4', '2nd', DOUBLED),
+      course('E5', '1st', { ...DOUBLED, ...TOP }),
+    ],
+  },
+  {
+    // As in Irish use.
+    id: 'tenor-banjo',
+    name: 'Tenor banjo',
+    plural: 'Tenor banjos',
+    courses: [course('G2', '4th'), course('D3', '3rd'), course('A3', '2nd'), course('E4', '1st', TOP)],
+  },
+  {
+    // Irish bouzouki.
+    id: 'bouzouki',
+    name: 'Bouzouki',
+    plural: 'Bouzoukis',
+    courses: [
+      course('G2', '4th', DOUBLED),
+      course('D3', '3rd', DOUBLED),
+      course('A3', '2nd', DOUBLED),
+      course('D4', '1st', { ...DOUBLED, ...TOP }),
+    ],
+  },
+  {
+    id: 'ukulele',
+    name: 'Ukulele',
+    plural: 'Ukuleles',
+    courses: [course('G4', '4th'), course('C4', '3rd'), course('E4', '2nd'), course('A4', '1st')],
+  },
+  {
+    // Mountain dulcimer; only its melody course is doubled.
+    id: 'dulcimer',
+    name: 'Dulcimer',
+    plural: 'Dulcimers',
+    courses: [course('D3', 'bass'), course('A3', 'middle'), course('D4', 'melody', { ...DOUBLED, ...TOP })],
+  },
+  {
+    // Double bass.
+    id: 'bass',
+    name: 'Bass',
+    plural: 'Basses',
+    courses: [course('E1', '4th'), course('A1', '3rd'), course('D2', '2nd'), course('G2', '1st')],
+  },
 ];
 
 /** @example builtInKind('mandolin')?.courses.length // 4 */

@@ -3,6 +3,9 @@
  *
  * Middle C is C4 = MIDI 60, A4 = MIDI 69 = 440 Hz (ISO 16:1975); f = 440 * 2^((m - 69) / 12)
  * (J. Wolfe, UNSW Physics, "Note names, MIDI numbers and frequencies").
+ *
+ * Written out rather than taken from tonal, which cannot be taken in parts: 8.4 kB compressed on the phone's
+ * page, for these lines. The tests hold every spelling against tonal.
  */
 export type Letter = 'C' | 'D' | 'E' | 'F' | 'G' | 'A' | 'B';
 export type Accidental = '' | '#' | 'b' | '##' | 'bb';

@@ -1,9 +1,14 @@
 import type { InstrumentKind } from './instrument';
 import type { Accidental, Letter, Pitch } from './pitch';
-import { midiOf, pitchOf, pitchOffset, spell } from './pitch';
+import { midiOf, plainAccidentals, pitchOf, pitchOffset, spell } from './pitch';
 
 /** A letter of a short name with what alters it: `['C', '#']`. */
 export type Note = readonly [letter: Letter, accidental: Accidental];
+
+/** @example spelled(['C', '#']) // 'C#' */
+export function spelled([letter, accidental]: Note): string {
+  return letter + accidental;
+}
 
 /** Either the notes, or how far reading came and the part that stopped it. */
 export type NoteReading =
@@ -26,15 +31,15 @@ export function readNotes(text: string, count: number): NoteReading {
   return other ? { ok: true, notes: other } : greedy;
 }
 
-const GREEDY = /[\s-]*([A-Ga-g])([#b]?)/y;
+const NOTE = /[\s-]*([A-Ga-g])([#♯b♭]?)/y;
 
 function readGreedily(text: string): NoteReading {
   const notes: Note[] = [];
-  GREEDY.lastIndex = 0;
+  NOTE.lastIndex = 0;
   let end = 0;
-  for (let match = GREEDY.exec(text); match; match = GREEDY.exec(text)) {
+  for (let match = NOTE.exec(text); match; match = NOTE.exec(text)) {
     notes.push(noteFrom(match[1]!, match[2]!));
-    end = GREEDY.lastIndex;
+    end = NOTE.lastIndex;
   }
   const rest = text.slice(end).replace(/^[\s-]+|[\s-]+$/g, '');
   if (rest === '') return { ok: true, notes };
@@ -43,24 +48,29 @@ function readGreedily(text: string): NoteReading {
   return { ok: false, before: notes, unread };
 }
 
-/** Depth first, a `b` altering before it is a note; a rest that cannot give `count` notes is cut off. */
-function readExactly(text: string, count: number): readonly Note[] | null {
-  const rest = text.startsWith(' ') ? text.slice(1) : text;
+/**
+ * Depth first, a `b` altering before it is a note. What is left and how many notes it must give decide
+ * whether it can be read, so each such pair is tried once.
+ * @param text notes with single spaces between at most
+ */
+function readExactly(text: string, count: number, failed = new Set<string>()): readonly Note[] | null {
+  const rest = text.trimStart();
   if (rest === '') return count === 0 ? [] : null;
-  // Each note takes at most a letter, an accidental and a space.
-  if (count === 0 || rest.length > 3 * count) return null;
-  const sign = rest[1] === '#' || rest[1] === 'b' ? rest[1] : '';
-  if (sign !== '') {
-    const altered = readExactly(rest.slice(2), count - 1);
-    if (altered) return [noteFrom(rest[0]!, sign), ...altered];
+  const key = `${rest.length} ${count}`;
+  if (count === 0 || failed.has(key)) return null;
+  const letter = rest.charAt(0);
+  const sign = /[#♯b♭]/.exec(rest.charAt(1))?.[0] ?? '';
+  // Only a small b can be read either way.
+  for (const taken of sign === 'b' ? [sign, ''] : [sign]) {
+    const following = readExactly(rest.slice(1 + taken.length), count - 1, failed);
+    if (following) return [noteFrom(letter, taken), ...following];
   }
-  if (sign === '#') return null;
-  const plain = readExactly(rest.slice(1), count - 1);
-  return plain && [noteFrom(rest[0]!, ''), ...plain];
+  failed.add(key);
+  return null;
 }
 
 function noteFrom(letter: string, sign: string): Note {
-  return [letter.toUpperCase() as Letter, sign as Accidental];
+  return [letter.toUpperCase() as Letter, plainAccidentals(sign) as Accidental];
 }
 
 /**

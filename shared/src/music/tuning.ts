@@ -3,7 +3,7 @@ import { NAMED_TUNINGS } from './named-tunings';
 import type { Parsed } from './parsed';
 import { read, refused } from './parsed';
 import { midiOf, parsePitch, plainAccidentals } from './pitch';
-import { lettersOf, nearestPitch, readNotes } from './short-name';
+import { lettersOf, nearestPitch, readNotes, spelled } from './short-name';
 import { cannotRead, hasStrings, tellCapo, tellCount, tellPitch } from './tuning-refusals';
 
 /** How an instrument stands: its strings, and where its capo is. */
@@ -31,8 +31,9 @@ const FULL_PITCH = /[\s-]*([A-Ga-g](?:##?|bb?)?\d)(?!\d)/y;
  * @example parseTuning(fiddle, 'GDA') // refused: A fiddle has 4 strings; GDA names 3: G D A.
  */
 export function parseTuning(kind: InstrumentKind, text: string, statedCapo = 0): Parsed<Tuned> {
-  const plain = plainAccidentals(text).trim();
+  const plain = text.trim();
   if (plain.length > LONGEST_TEXT) return refused(cannotRead(kind, plain, plain, []));
+  if (/^any$/i.test(plain)) return refused('A tuning is needed here; any names none.');
   const capo = readCapo(plain);
   if (!capo.ok) return capo;
   if (!isCapo(statedCapo)) return refused(tellCapo(String(statedCapo)));
@@ -41,7 +42,7 @@ export function parseTuning(kind: InstrumentKind, text: string, statedCapo = 0):
     return refused(`The capo is said twice: ${fret} in ${plain}, and ${statedCapo} beside it.`);
   }
   const stated = fret ?? (statedCapo === 0 ? null : statedCapo);
-  if (/\d/.test(strings)) return withCapo(readFullForm(kind, strings), stated ?? 0);
+  if (/\d/.test(strings)) return withCapo(readFullForm(kind, plainAccidentals(strings)), stated ?? 0);
   const pitches = readShortName(kind, strings);
   if (!pitches.ok) return pitches;
   return read(
@@ -81,7 +82,11 @@ function readFullForm(kind: InstrumentKind, text: string): Parsed<readonly strin
     end = FULL_PITCH.lastIndex;
   }
   const rest = text.slice(end).replace(/^[\s-]+|[\s-]+$/g, '');
-  if (rest !== '') return refused(cannotRead(kind, text, /^\S+/.exec(rest)?.[0] ?? rest, names));
+  if (rest !== '') {
+    const part = /^\S+/.exec(rest)![0];
+    const hint = /^[A-G][#b]?$/i.test(part) ? ' Give every string its octave, or none.' : '';
+    return refused(cannotRead(kind, text, part, names) + hint);
+  }
   return names.length === kind.courses.length ? read(names) : refused(tellCount(kind, text, names));
 }
 
@@ -89,16 +94,8 @@ function readFullForm(kind: InstrumentKind, text: string): Parsed<readonly strin
 function readShortName(kind: InstrumentKind, text: string): Parsed<readonly string[]> {
   if (text === '') return refused(`${hasStrings(kind)}; nothing is written.`);
   const reading = readNotes(text, kind.courses.length);
-  if (!reading.ok)
-    return refused(
-      cannotRead(
-        kind,
-        text,
-        reading.unread,
-        reading.before.map((note) => note.join('')),
-      ),
-    );
-  const letters = reading.notes.map((note) => note.join(''));
+  if (!reading.ok) return refused(cannotRead(kind, text, reading.unread, reading.before.map(spelled)));
+  const letters = reading.notes.map(spelled);
   if (letters.length !== kind.courses.length) return refused(tellCount(kind, text, letters));
   const names: string[] = [];
   for (const [index, note] of reading.notes.entries()) {
