@@ -1,6 +1,10 @@
 // The words of ./docker-free-dev.sh.
-import { end, endOnSignals } from './ending';
+import { end, endOnSignals, isEnding } from './ending';
 import { say, Sentence } from './sentence';
+import { develop } from './develop';
+import { reset } from './reset';
+import { start } from './start';
+import { stop } from './stop';
 import { test } from './test';
 
 const HELP = `./docker-free-dev.sh          develop: database, server and pages, with the demo circle; Ctrl-C stops all
@@ -11,6 +15,16 @@ const HELP = `./docker-free-dev.sh          develop: database, server and pages,
 
 async function main([word, ...words]: readonly string[]): Promise<number> {
   switch (word) {
+    case undefined:
+      endOnSignals({ interrupted: 0, terminated: 0 });
+      return develop();
+    case 'start':
+      endOnSignals({ interrupted: 0, terminated: 0 });
+      return start();
+    case 'stop':
+      return stop();
+    case 'reset':
+      return reset();
     case 'test':
       endOnSignals({ interrupted: 130, terminated: 143 });
       return test(words);
@@ -20,13 +34,16 @@ async function main([word, ...words]: readonly string[]): Promise<number> {
       say(HELP);
       return 0;
     default:
-      throw new Sentence(`There is no word "${word ?? ''}" here. These are:\n${HELP}`);
+      throw new Sentence(`There is no word "${word}" here. These are:\n${HELP}`);
   }
 }
 
 main(process.argv.slice(2)).then(end, (error: unknown) => {
-  process.stderr.write(`${error instanceof Sentence ? error.message : describe(error)}\n`);
-  if (process.argv[2] === 'test') say('0 passed, 1 failed');
+  // After Ctrl-C whatever was under way fails; that is no news.
+  if (!isEnding()) {
+    process.stderr.write(`${error instanceof Sentence ? error.message : describe(error)}\n`);
+    if (process.argv[2] === 'test') say('0 passed, 1 failed');
+  }
   return end(1);
 });
 

@@ -1,0 +1,64 @@
+// What develop and start have in common: one checkout, one database, one address.
+import path from 'node:path';
+import { openDataFolder, secret } from './data-folder';
+import { atEnd } from './ending';
+import { ownDatabase } from './own-database';
+import { DATA } from './places';
+import { parsePort } from './ports';
+import { commands, forgetCommand, lives, noteCommand } from './running';
+import { say, Sentence } from './sentence';
+
+/** A variable that was really set: an empty one is as good as none. */
+export function setting(name: string): string | undefined {
+  return process.env[name]?.trim() || undefined;
+}
+
+/** Opens .data/ and the database. With DATABASE_URL set it is that one, and nothing is made or stopped. */
+export async function openSite(): Promise<{ readonly databaseUrl: string }> {
+  await openDataFolder();
+  const given = setting('DATABASE_URL');
+  if (given === undefined) refuseSecondRun();
+  noteCommand(given === undefined);
+  atEnd(() => forgetCommand());
+  if (given !== undefined) say('Using the database of DATABASE_URL.');
+  return { databaseUrl: given ?? (await ownDatabase()) };
+}
+
+function refuseSecondRun(): void {
+  const other = commands().find((command) => command.ownDatabase && lives(command));
+  if (!other) return;
+  throw new Sentence(
+    `Pegwell already runs from this folder (process ${other.pid}). ` +
+      'Stop it with Ctrl-C where it runs, or with ./docker-free-dev.sh stop.',
+  );
+}
+
+export function askedPort(): { readonly port: number; readonly by: string } | undefined {
+  const text = setting('PORT');
+  return text === undefined ? undefined : { port: parsePort(text, 'PORT'), by: 'PORT' };
+}
+
+type Serving = {
+  readonly mode: 'development' | 'production';
+  readonly databaseUrl: string;
+  readonly port: number;
+  readonly host: string;
+  /** The address people open, used in links and for the Origin check. */
+  readonly url: string;
+  readonly demo: 'yes' | 'no';
+};
+
+/** The server's environment: the person's own settings first, then ours. */
+export function serverEnvironment({ mode, databaseUrl, port, host, url, demo }: Serving): NodeJS.ProcessEnv {
+  return {
+    ...process.env,
+    NODE_ENV: mode,
+    DATABASE_URL: databaseUrl,
+    PORT: String(port),
+    PEGWELL_HOST: host,
+    PEGWELL_URL: url,
+    PEGWELL_SECRET: setting('PEGWELL_SECRET') ?? secret('secret'),
+    PEGWELL_DATA_DIR: setting('PEGWELL_DATA_DIR') ?? path.join(DATA, 'files'),
+    PEGWELL_DEMO: setting('PEGWELL_DEMO') ?? demo,
+  };
+}
