@@ -13,7 +13,16 @@ export const MODES = [
 
 export type Mode = (typeof MODES)[number];
 
-/** Whether the third is minor or missing: modal, dorian, minor and aeolian go together in the usual tunings. */
-export function modeFamily(mode: Mode): 'major' | 'minor' {
-  return mode === 'modal' || mode === 'dorian' || mode === 'minor' || mode === 'aeolian' ? 'minor' : 'major';
+/** Two halves of a table of usual tunings, named by the commonest mode of each. */
+export type ModeFamily = 'major' | 'minor';
+
+const MINOR_FAMILY: readonly Mode[] = ['modal', 'dorian', 'minor', 'aeolian'];
+
+/**
+ * Modal, dorian, minor and aeolian go together in the usual tunings; every other mode goes with major.
+ * @example modeFamily('dorian') // 'minor'
+ * @example modeFamily('mixolydian') // 'major'
+ */
+export function modeFamily(mode: Mode): ModeFamily {
+  return MINOR_FAMILY.includes(mode) ? 'minor' : 'major';
 }

@@ -41,20 +41,12 @@ export function parseTuning(kind: InstrumentKind, text: string, statedCapo = 0):
   if (fret !== null && statedCapo !== 0 && fret !== statedCapo) {
     return refused(`The capo is said twice: ${fret} in ${plain}, and ${statedCapo} beside it.`);
   }
-  const stated = fret ?? (statedCapo === 0 ? null : statedCapo);
-  if (/\d/.test(strings)) return withCapo(readFullForm(kind, plainAccidentals(strings)), stated ?? 0);
-  const pitches = readShortName(kind, strings);
+  const capoStated = fret ?? (statedCapo === 0 ? null : statedCapo);
+  const full = /\d/.test(strings);
+  const pitches = full ? readFullForm(kind, plainAccidentals(strings)) : readShortName(kind, strings);
   if (!pitches.ok) return pitches;
-  return read(
-    (stated === null ? capoSpelling(kind, pitches.value) : null) ?? {
-      pitches: pitches.value,
-      capo: stated ?? 0,
-    },
-  );
-}
-
-function withCapo(pitches: Parsed<readonly string[]>, capo: number): Parsed<Tuned> {
-  return pitches.ok ? read({ pitches: pitches.value, capo }) : pitches;
+  const spelling = full || capoStated !== null ? null : capoSpelling(kind, pitches.value);
+  return read(spelling ?? { pitches: pitches.value, capo: capoStated ?? 0 });
 }
 
 function isCapo(fret: number): boolean {
