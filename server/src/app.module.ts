@@ -1,4 +1,4 @@
-import { Module, type DynamicModule } from '@nestjs/common';
+import { Module, type DynamicModule, type Type } from '@nestjs/common';
 import { APP_FILTER, APP_PIPE } from '@nestjs/core';
 import { LoggerModule } from 'nestjs-pino';
 import { AccessModule } from './access/access.module';
@@ -7,6 +7,7 @@ import { CirclesModule } from './circles/circles.module';
 import { ProblemFilter } from './common/problem.filter';
 import { ZodPipe } from './common/zod.pipe';
 import { DatabaseModule } from './database/database.module';
+import { DemoModule } from './demo/demo.module';
 import { ENV, type Env } from './env';
 import { HealthController } from './health/health.controller';
 import { logging } from './logging';
@@ -17,7 +18,7 @@ import { TunesModule } from './tunes/tunes.module';
 /** Holds the parsed environment, so that every module can ask for it. */
 @Module({})
 export class AppModule {
-  static with(env: Env): DynamicModule {
+  static with(env: Env, controllers: Type[] = []): DynamicModule {
     return {
       module: AppModule,
       imports: [
@@ -34,9 +35,10 @@ export class AppModule {
         TunesModule,
         SessionsModule,
         OrderingModule,
+        DemoModule,
         AccessModule,
       ],
-      controllers: [HealthController],
+      controllers: [HealthController, ...controllers],
       providers: [
         { provide: APP_FILTER, useClass: ProblemFilter },
         { provide: APP_PIPE, useClass: ZodPipe },

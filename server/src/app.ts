@@ -1,4 +1,4 @@
-import { RequestMethod } from '@nestjs/common';
+import { RequestMethod, type Type } from '@nestjs/common';
 import { NestFactory } from '@nestjs/core';
 import type { NestExpressApplication } from '@nestjs/platform-express';
 import cookieParser from 'cookie-parser';
@@ -12,8 +12,8 @@ import { serveOpenApi } from './openapi';
 import { servePages } from './pages';
 
 /** The whole server, not yet listening: what main.ts starts and the tests call over HTTP. */
-export async function createApp(env: Env): Promise<NestExpressApplication> {
-  const app = await NestFactory.create<NestExpressApplication>(AppModule.with(env), {
+export async function createApp(env: Env, controllers: Type[] = []): Promise<NestExpressApplication> {
+  const app = await NestFactory.create<NestExpressApplication>(AppModule.with(env, controllers), {
     bodyParser: false,
     bufferLogs: true,
     abortOnError: false,

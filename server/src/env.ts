@@ -12,7 +12,10 @@ const yesNo = (name: string) =>
 
 const webAddress = z
   .string()
-  .regex(/^https?:\/\/[^/\s?#]+\/?$/, 'PEGWELL_URL is an address without a path, as https://tunes.example.org.')
+  .regex(
+    /^https?:\/\/[^/\s?#]+\/?$/,
+    'PEGWELL_URL is an address without a path, as https://tunes.example.org.',
+  )
   .transform((text) => new URL(text).origin);
 
 const envSchema = z.object({
@@ -28,14 +31,22 @@ const envSchema = z.object({
   PEGWELL_PROXIES: z
     .string()
     .default('')
-    .transform((text) => text.split(',').map((part) => part.trim()).filter(Boolean)),
+    .transform((text) =>
+      text
+        .split(',')
+        .map((part) => part.trim())
+        .filter(Boolean),
+    ),
   DATABASE_URL: z
     .string({ error: 'DATABASE_URL is missing: the address of a PostgreSQL database.' })
     .regex(/^postgres(ql)?:\/\//, 'DATABASE_URL begins with postgresql://.'),
   PEGWELL_DATA_DIR: z.string().min(1).default('.data'),
   PEGWELL_URL: webAddress.optional(),
   PEGWELL_SECRET: z.string().min(32, 'PEGWELL_SECRET has at least 32 characters.').optional(),
-  PEGWELL_MAIL_URL: z.string().regex(/^smtps?:\/\//, 'PEGWELL_MAIL_URL begins with smtp:// or smtps://.').optional(),
+  PEGWELL_MAIL_URL: z
+    .string()
+    .regex(/^smtps?:\/\//, 'PEGWELL_MAIL_URL begins with smtp:// or smtps://.')
+    .optional(),
   PEGWELL_DEMO: yesNo('PEGWELL_DEMO'),
   PEGWELL_INSECURE_LAN: yesNo('PEGWELL_INSECURE_LAN'),
   PEGWELL_LOG: z.enum(['silent', 'error', 'warn', 'info', 'debug']).default('info'),
@@ -62,7 +73,9 @@ export function parseEnv(source: Readonly<Record<string, string | undefined>>): 
   const given = Object.fromEntries(Object.entries(source).filter(([, value]) => value !== ''));
   const parsed = envSchema.safeParse(given);
   if (!parsed.success) {
-    throw new EnvError(parsed.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`).join('\n'));
+    throw new EnvError(
+      parsed.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`).join('\n'),
+    );
   }
   const env = parsed.data;
   const production = env.NODE_ENV === 'production';
@@ -71,7 +84,12 @@ export function parseEnv(source: Readonly<Record<string, string | undefined>>): 
   if (production && env.PEGWELL_SECRET === undefined) {
     throw new EnvError('PEGWELL_SECRET is missing: production needs at least 32 random characters.');
   }
-  if (production && !LOOPBACK.has(env.PEGWELL_HOST) && !url.startsWith('https:') && !env.PEGWELL_INSECURE_LAN) {
+  if (
+    production &&
+    !LOOPBACK.has(env.PEGWELL_HOST) &&
+    !url.startsWith('https:') &&
+    !env.PEGWELL_INSECURE_LAN
+  ) {
     throw new EnvError(
       'PEGWELL_HOST is not loopback and PEGWELL_URL is not https: put HTTPS in front, or say PEGWELL_INSECURE_LAN=yes for a laptop in a hall.',
     );

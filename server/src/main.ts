@@ -11,7 +11,9 @@ async function start(): Promise<void> {
   const app = await createApp(env);
   if (env.PEGWELL_DEMO && wasEmpty) await app.get(DemoService).seed();
   await app.listen(env.PORT, env.PEGWELL_HOST);
-  process.stdout.write(`Pegwell listens on http://${env.PEGWELL_HOST}:${env.PORT}; pages open at ${env.PEGWELL_URL}\n`);
+  process.stdout.write(
+    `Pegwell listens on http://${env.PEGWELL_HOST}:${env.PORT}; pages open at ${env.PEGWELL_URL}\n`,
+  );
 }
 
 function readEnv(): Env {
@@ -39,6 +41,7 @@ function stop(sentence: string): never {
 
 start().catch((error: unknown) => {
   const { code, message } = error as { code?: string; message?: string };
-  if (code === 'EADDRINUSE') stop(`Port ${process.env['PORT'] ?? '3001'} is taken by another program. Set PORT to a free one.`);
+  if (code === 'EADDRINUSE')
+    stop(`Port ${process.env['PORT'] ?? '3001'} is taken by another program. Set PORT to a free one.`);
   stop(message ?? String(error));
 });

@@ -12,7 +12,7 @@ export function serveOpenApi(app: NestExpressApplication): void {
     .addCookieAuth('pegwell')
     .build();
   let document: string | undefined;
-  app.getHttpAdapter().get('/api/openapi.json', (_request: Request, response: Response) => {
+  app.use('/api/openapi.json', (_request: Request, response: Response) => {
     // Made at the first asking: reading every route takes longer than starting the server.
     document ??= JSON.stringify(cleanupOpenApiDoc(SwaggerModule.createDocument(app, config)));
     response.type('application/json').send(document);

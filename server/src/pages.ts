@@ -13,7 +13,10 @@ const PAGES = join(__dirname, '../../client/dist');
 export function servePages(app: NestExpressApplication): void {
   const index = join(PAGES, 'index.html');
   if (!existsSync(index)) return;
-  app.use('/assets', express.static(join(PAGES, 'assets'), { immutable: true, maxAge: '365d', fallthrough: false }));
+  app.use(
+    '/assets',
+    express.static(join(PAGES, 'assets'), { immutable: true, maxAge: '365d', fallthrough: false }),
+  );
   app.use(express.static(PAGES, { index: false, maxAge: 0 }));
   app.use((request: Request, response: Response, next: NextFunction) => {
     if (request.method !== 'GET' && request.method !== 'HEAD') return next();

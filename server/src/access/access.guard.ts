@@ -27,7 +27,8 @@ export class AccessGuard implements CanActivate {
       // Said before anything is looked up, and before the body is judged.
       const account = await this.signIns.accountOf(request, response);
       if (!account) throw new ProblemException('not-signed-in');
-      if (!access) throw new ProblemException('not-allowed', 'This route says of nobody that they may call it.');
+      if (!access)
+        throw new ProblemException('not-allowed', 'This route says of nobody that they may call it.');
       request.account = account;
       if (access.who === 'member') request.member = await this.memberOf(account, access, request);
     }
@@ -35,13 +36,20 @@ export class AccessGuard implements CanActivate {
     return true;
   }
 
-  private async memberOf(account: Account, access: Access & { who: 'member' }, request: Request): Promise<Member> {
+  private async memberOf(
+    account: Account,
+    access: Access & { who: 'member' },
+    request: Request,
+  ): Promise<Member> {
     const circleId = await this.circleOf(access, request);
     const role = circleId ? await this.circles.roleOf(circleId, account.id) : null;
     // Not there, and not yours to see, are the same words.
     if (!circleId || !role) throw notFound();
     if (!may(role, access.action)) {
-      throw new ProblemException('not-allowed', `As a ${role} of this circle you cannot do this. Ask a host.`);
+      throw new ProblemException(
+        'not-allowed',
+        `As a ${role} of this circle you cannot do this. Ask a host.`,
+      );
     }
     return { account, circleId, role } as Member;
   }

@@ -20,7 +20,11 @@ export class AccountsController {
   @Post('register')
   @ForAnyone()
   @ApiResponse({ status: 201, type: SignedInDto.Output })
-  async register(@Body() body: RegisterDto, @Req() request: Request, @Res({ passthrough: true }) response: Response): Promise<SignedIn> {
+  async register(
+    @Body() body: RegisterDto,
+    @Req() request: Request,
+    @Res({ passthrough: true }) response: Response,
+  ): Promise<SignedIn> {
     const user = await this.accounts.register(body);
     await this.signIns.begin(user.id, request, response);
     return { user };
@@ -30,7 +34,11 @@ export class AccountsController {
   @HttpCode(200)
   @ForAnyone()
   @ApiResponse({ status: 200, type: SignedInDto.Output })
-  async login(@Body() body: LoginDto, @Req() request: Request, @Res({ passthrough: true }) response: Response): Promise<SignedIn> {
+  async login(
+    @Body() body: LoginDto,
+    @Req() request: Request,
+    @Res({ passthrough: true }) response: Response,
+  ): Promise<SignedIn> {
     const user = await this.accounts.checkPassword(body);
     await this.signIns.begin(user.id, request, response);
     return { user };

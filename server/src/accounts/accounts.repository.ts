@@ -10,12 +10,21 @@ export type SignInRow = typeof signIns.$inferSelect;
 export class AccountsRepository {
   /** Null when the address is taken. */
   async insert(db: Database, values: typeof accounts.$inferInsert): Promise<AccountRow | null> {
-    const [row] = await db.insert(accounts).values(values).onConflictDoNothing({ target: accounts.emailKey }).returning();
+    const [row] = await db
+      .insert(accounts)
+      .values(values)
+      .onConflictDoNothing({ target: accounts.emailKey })
+      .returning();
     return row ?? null;
   }
 
   async byEmailKey(db: Database, emailKey: string): Promise<AccountRow | null> {
     const [row] = await db.select().from(accounts).where(eq(accounts.emailKey, emailKey));
+    return row ?? null;
+  }
+
+  async byId(db: Database, accountId: string): Promise<AccountRow | null> {
+    const [row] = await db.select().from(accounts).where(eq(accounts.id, accountId));
     return row ?? null;
   }
 
@@ -26,7 +35,10 @@ export class AccountsRepository {
   }
 
   /** The sign-in with its account, unless it was ended. */
-  async openSignIn(db: Database, signInId: string): Promise<{ signIn: SignInRow; account: AccountRow } | null> {
+  async openSignIn(
+    db: Database,
+    signInId: string,
+  ): Promise<{ signIn: SignInRow; account: AccountRow } | null> {
     const [row] = await db
       .select({ signIn: signIns, account: accounts })
       .from(signIns)

@@ -29,7 +29,12 @@ export class AccountsService {
       throw new ProblemException('not-valid', message, { errors: [{ path: 'password', message }] });
     }
     const passwordHash = await hash(password, BCRYPT_COST);
-    const row = await this.accounts.insert(db, { email, emailKey: emailKeyOf(email), displayName, passwordHash });
+    const row = await this.accounts.insert(db, {
+      email,
+      emailKey: emailKeyOf(email),
+      displayName,
+      passwordHash,
+    });
     if (!row) {
       const message = 'An account with this e-mail exists. Sign in instead.';
       throw new ProblemException('email-taken', message, { errors: [{ path: 'email', message }] });
@@ -42,6 +47,10 @@ export class AccountsService {
     const right = await compare(password, row?.passwordHash ?? NOBODY);
     if (!row || !right) throw new ProblemException('wrong-credentials');
     return toUser(row);
+  }
+
+  async displayName(db: Database, accountId: string): Promise<string | null> {
+    return (await this.accounts.byId(db, accountId))?.displayName ?? null;
   }
 
   async byEmail(db: Database, email: string): Promise<User | null> {

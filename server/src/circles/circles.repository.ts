@@ -65,7 +65,12 @@ export class CirclesRepository {
 
   async members(db: Database, circleId: string) {
     return db
-      .select({ accountId: accounts.id, displayName: accounts.displayName, email: accounts.email, role: members.role })
+      .select({
+        accountId: accounts.id,
+        displayName: accounts.displayName,
+        email: accounts.email,
+        role: members.role,
+      })
       .from(members)
       .innerJoin(accounts, eq(accounts.id, members.accountId))
       .where(and(eq(members.circleId, circleId), isNull(members.removedAt)))
@@ -76,7 +81,11 @@ export class CirclesRepository {
     return db.select().from(usualTunings).where(eq(usualTunings.circleId, circleId));
   }
 
-  async replaceUsualTunings(db: Database, circleId: string, rows: (typeof usualTunings.$inferInsert)[]): Promise<void> {
+  async replaceUsualTunings(
+    db: Database,
+    circleId: string,
+    rows: (typeof usualTunings.$inferInsert)[],
+  ): Promise<void> {
     await db.delete(usualTunings).where(eq(usualTunings.circleId, circleId));
     if (rows.length > 0) await db.insert(usualTunings).values(rows);
   }

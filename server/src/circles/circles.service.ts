@@ -61,7 +61,9 @@ export class CirclesService {
     return this.db.transaction(async (tx) => {
       const user = await this.accounts.byEmail(tx, email);
       if (!user) {
-        throw cannotBe([{ path: 'email', message: 'Nobody has an account with this e-mail yet. Ask them to register.' }]);
+        throw cannotBe([
+          { path: 'email', message: 'Nobody has an account with this e-mail yet. Ask them to register.' },
+        ]);
       }
       if (!(await this.circles.addMember(tx, member.circleId, user.id, role))) {
         throw new ProblemException('already-member', `${user.displayName} is in this circle already.`, {

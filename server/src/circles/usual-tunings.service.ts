@@ -5,7 +5,8 @@ import type { Mode } from '@pegwell/shared/contract/keys';
 import { BUILT_IN_KINDS, builtInKind } from '@pegwell/shared/music/instrument';
 import { parseTonic } from '@pegwell/shared/music/pitch';
 import { parseTuning, showTuned, type Tuned } from '@pegwell/shared/music/tuning';
-import { builtInUsual, modeFamily } from '@pegwell/shared/music/usual-tunings';
+import { modeFamily } from '@pegwell/shared/music/mode';
+import { builtInUsual } from '@pegwell/shared/music/usual-tunings';
 import { announceCircle } from '../common/announce';
 import type { Member } from '../common/access';
 import { cannotBe } from '../common/problem';
@@ -39,7 +40,11 @@ export class UsualTuningsService {
       const before = await this.circles.usualTunings(tx, member.circleId);
       const stored = rows.map((row) => ({ ...row, circleId: member.circleId }));
       await this.circles.replaceUsualTunings(tx, member.circleId, stored);
-      await this.notes.note(tx, member, { what: 'usual-tunings.changed', before: present(before), after: present(rows) });
+      await this.notes.note(tx, member, {
+        what: 'usual-tunings.changed',
+        before: present(before),
+        after: present(rows),
+      });
       await announceCircle(tx, member.circleId);
     });
     return { items: present(rows) };
@@ -74,7 +79,8 @@ function parseRows({ items }: SetUsualTunings): OwnRow[] {
     };
     const kind = builtInKind(item.kind);
     if (!kind) return at('kind', `${item.kind} is no instrument that Pegwell knows.`);
-    if ((item.key === null) !== (item.family === null)) return at('family', 'A key and major or minor go together.');
+    if ((item.key === null) !== (item.family === null))
+      return at('family', 'A key and major or minor go together.');
     const name = `${item.kind} ${pitchClassOf(item.key) ?? ''} ${item.family ?? ''}`;
     if (seen.has(name)) return at('key', 'This key is said twice.');
     seen.add(name);

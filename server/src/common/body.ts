@@ -20,7 +20,8 @@ const parse = json({ limit: JSON_LIMIT, strict: false });
  */
 export function readBody(request: Request, response: Response, next: NextFunction): void {
   const type = request.headers['content-type']?.split(';')[0]?.trim().toLowerCase();
-  const hasBody = Number(request.headers['content-length'] ?? 0) > 0 || 'transfer-encoding' in request.headers;
+  const hasBody =
+    Number(request.headers['content-length'] ?? 0) > 0 || 'transfer-encoding' in request.headers;
   if (!hasBody || type === 'multipart/form-data') {
     next();
     return;
@@ -38,7 +39,8 @@ export function readBody(request: Request, response: Response, next: NextFunctio
 
 function bodyProblem(error: unknown): ProblemException {
   const kind = (error as { type?: string }).type;
-  if (kind === 'entity.too.large') return new ProblemException('too-large', 'This is more than a megabyte of JSON.');
+  if (kind === 'entity.too.large')
+    return new ProblemException('too-large', 'This is more than a megabyte of JSON.');
   if (kind === 'charset.unsupported' || kind === 'encoding.unsupported') {
     return new ProblemException('wrong-media-type', 'JSON here is UTF-8.');
   }

@@ -16,7 +16,17 @@ const codeOfStatus: Partial<Record<number, ProblemCode>> = {
 };
 
 /** PostgreSQL's and Node's ways of saying that the database cannot be reached. */
-const AWAY = new Set(['ECONNREFUSED', 'ECONNRESET', 'ENOTFOUND', 'ETIMEDOUT', '57P01', '57P02', '57P03', '08006', '08001']);
+const AWAY = new Set([
+  'ECONNREFUSED',
+  'ECONNRESET',
+  'ENOTFOUND',
+  'ETIMEDOUT',
+  '57P01',
+  '57P02',
+  '57P03',
+  '08006',
+  '08001',
+]);
 const AWAY_WORDS = /timeout exceeded when trying to connect|Connection terminated/;
 
 /** Turns anything thrown into a problem document; what nobody expected becomes a plain 500, found in the log. */
@@ -51,10 +61,14 @@ function toProblem(thrown: unknown): ProblemException {
   if (isAway(thrown)) return new ProblemException('unavailable');
   if (thrown instanceof HttpException) {
     const code = codeOfStatus[thrown.getStatus()];
-    if (code === 'not-found') return new ProblemException(code, 'There is nothing here, or it is not yours to see.');
+    if (code === 'not-found')
+      return new ProblemException(code, 'There is nothing here, or it is not yours to see.');
     if (code) return new ProblemException(code, thrown.message);
   }
-  return new ProblemException('internal', 'Something went wrong on our side. Nothing that was saved is lost.');
+  return new ProblemException(
+    'internal',
+    'Something went wrong on our side. Nothing that was saved is lost.',
+  );
 }
 
 function isAway(thrown: unknown): boolean {

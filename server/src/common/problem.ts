@@ -1,5 +1,10 @@
 import { HttpException } from '@nestjs/common';
-import { problemCodes, type FieldError, type Problem, type ProblemCode } from '@pegwell/shared/contract/errors';
+import {
+  problemCodes,
+  type FieldError,
+  type Problem,
+  type ProblemCode,
+} from '@pegwell/shared/contract/errors';
 
 /** Does not compile when a code is missing. */
 const statusOf: Record<ProblemCode, number> = {
@@ -68,7 +73,8 @@ export class ProblemException extends HttpException {
   }
 }
 
-export const notFound = () => new ProblemException('not-found', 'There is nothing here, or it is not yours to see.');
+export const notFound = () =>
+  new ProblemException('not-found', 'There is nothing here, or it is not yours to see.');
 
 /** Of the schema, but it cannot be. `detail` is the first sentence; every place is in `errors`. */
 export function cannotBe(errors: readonly FieldError[]): ProblemException {

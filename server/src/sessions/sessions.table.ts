@@ -1,5 +1,15 @@
 import { sql } from 'drizzle-orm';
-import { boolean, index, integer, jsonb, pgTable, primaryKey, text, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import {
+  boolean,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  primaryKey,
+  text,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core';
 import type { Tuned } from '@pegwell/shared/music/tuning';
 import type { OpenPlace } from '@pegwell/shared/contract/sessions';
 import { accounts } from '../accounts/accounts.table';
@@ -113,7 +123,10 @@ export const entries = pgTable(
     settingId: uuid().references(() => settings.id, { onDelete: 'set null' }),
     open: jsonb().$type<OpenPlace>(),
     pinned: boolean().notNull().default(false),
-    sitOut: text().array().notNull().default(sql`'{}'`),
+    sitOut: text()
+      .array()
+      .notNull()
+      .default(sql`'{}'`),
     removedAt: removedAt(),
   },
   (table) => [
@@ -148,7 +161,11 @@ export interface StoredEntry {
 }
 
 export interface StoredBoard {
-  readonly sets: readonly { readonly id: string; readonly title: string; readonly entries: readonly StoredEntry[] }[];
+  readonly sets: readonly {
+    readonly id: string;
+    readonly title: string;
+    readonly entries: readonly StoredEntry[];
+  }[];
   readonly medleys: readonly (readonly string[])[];
   readonly befores: readonly (readonly [string, string])[];
 }

@@ -23,7 +23,11 @@ export const tunes = pgTable(
     removedAt: removedAt(),
   },
   // Serves the library's table by title, and the import's match by title.
-  (table) => [index('tunes_circle_title').on(table.circleId, table.titleKey).where(sql`${table.removedAt} is null`)],
+  (table) => [
+    index('tunes_circle_title')
+      .on(table.circleId, table.titleKey)
+      .where(sql`${table.removedAt} is null`),
+  ],
 );
 
 /** One way a circle plays a tune. */
@@ -43,7 +47,9 @@ export const settings = pgTable(
   },
   (table) => [
     index('settings_tune').on(table.tuneId),
-    uniqueIndex('settings_one_usual').on(table.tuneId).where(sql`${table.usual} and ${table.removedAt} is null`),
+    uniqueIndex('settings_one_usual')
+      .on(table.tuneId)
+      .where(sql`${table.usual} and ${table.removedAt} is null`),
   ],
 );
 

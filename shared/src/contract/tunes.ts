@@ -4,6 +4,8 @@ import { idSchema, lineSchema, pageOf, pageQuerySchema, textSchema } from './pag
 
 /** Bytes of an import file. */
 export const IMPORT_MAX_BYTES = 10 * 1024 * 1024;
+/** Tunes of an import file. */
+export const IMPORT_MAX_TUNES = 20_000;
 export const MAX_ACCEPTED = 20;
 export const MAX_CAPO = 12;
 
@@ -25,6 +27,8 @@ const rhythmSchema = z
   .string()
   .trim()
   .max(40, 'A rhythm is longer than 40 characters.')
+  // eslint-disable-next-line no-control-regex -- control characters are what is refused
+  .regex(/^[^\u0000-\u001f\u007f]*$/, 'A rhythm has characters that cannot be shown.')
   .nullish()
   .transform((word) => word || null);
 
@@ -83,18 +87,39 @@ export const tuneSchema = z.object({
 export type Tune = z.infer<typeof tuneSchema>;
 export const tunePageSchema = pageOf(tuneSchema);
 
-/** `tuning` needs `kind`. `sort` is `title`, `key`, `rhythm` or `updated`, with `-` before it to turn it round. */
-export const tuneQuerySchema = pageQuerySchema.extend({
-  search: z.string().max(200).optional(),
-  kind: z.string().max(40).optional(),
-  tuning: z.string().max(80).optional(),
-  key: keySchema.optional(),
-  mode: modeSchema.optional(),
-  rhythm: z.string().max(40).optional(),
-  sort: z
-    .enum(['title', '-title', 'key', '-key', 'rhythm', '-rhythm', 'updated', '-updated'])
-    .default('title'),
-});
+const filterText = (max: number) =>
+  z
+    .string()
+    .trim()
+    .max(max)
+    .optional()
+    // A form sends its empty fields too: they filter nothing.
+    .transform((text) => text || undefined);
+
+const emptyFilter = z.literal('').transform(() => undefined);
+
+/**
+ * `key` is compared by sound (A# is Bb), `rhythm` without case, `search` by what `titleKey` leaves of a title.
+ * `kind` alone: tunes that state something for it. With `tuning`: tunes that accept that tuning, stated, or
+ * assumed where the tune is silent; a capo counts where the text names one.
+ * `sort` is `title`, `key`, `rhythm` or `updated`, with `-` before it to turn it round.
+ */
+export const tuneQuerySchema = pageQuerySchema
+  .extend({
+    search: filterText(200),
+    kind: filterText(40),
+    tuning: filterText(80),
+    key: emptyFilter.or(keySchema).optional(),
+    mode: emptyFilter.or(modeSchema).optional(),
+    rhythm: filterText(40),
+    sort: z
+      .enum(['title', '-title', 'key', '-key', 'rhythm', '-rhythm', 'updated', '-updated'])
+      .default('title'),
+  })
+  .refine((query) => query.tuning === undefined || query.kind !== undefined, {
+    path: ['tuning'],
+    error: 'A tuning is one of an instrument: say which kind.',
+  });
 export type TuneQuery = z.infer<typeof tuneQuerySchema>;
 
 export const importQuerySchema = z.strictObject({
@@ -102,7 +127,18 @@ export const importQuerySchema = z.strictObject({
     .enum(['true', 'false'])
     .default('false')
     .transform((word) => word === 'true'),
+  /** A new id, under which the import can be watched; nothing is written for it in a dry run. */
+  progress: idSchema.optional(),
 });
+export type ImportQuery = z.infer<typeof importQuerySchema>;
+
+/** How far an import is: `written` of the `total` tunes that it has to write. */
+export const importProgressSchema = z.object({
+  total: z.number().int(),
+  written: z.number().int(),
+  finished: z.boolean(),
+});
+export type ImportProgress = z.infer<typeof importProgressSchema>;
 
 export const importActionSchema = z.enum(['create', 'update', 'unchanged', 'skip']);
 export const importReportSchema = z.object({
@@ -123,5 +159,7 @@ export const importReportSchema = z.object({
   ),
 });
 export type ImportReport = z.infer<typeof importReportSchema>;
+export type ImportAction = z.infer<typeof importActionSchema>;
 
 export const exportQuerySchema = z.strictObject({ format: z.enum(['csv', 'abc']).default('csv') });
+export type TuneFileFormat = z.infer<typeof exportQuerySchema>['format'];

@@ -1,6 +1,5 @@
-import type { Config } from 'jest';
-
-const config: Config = {
+/** @type {import('jest').Config} */
+module.exports = {
   rootDir: '.',
   roots: ['<rootDir>/src', '<rootDir>/test'],
   testRegex: '\\.(e2e-)?spec\\.ts$',
@@ -22,5 +21,3 @@ const config: Config = {
   maxWorkers: 2,
   testTimeout: 30_000,
 };
-
-export default config;

@@ -1,0 +1,16 @@
+import { pageQuerySchema } from '@pegwell/shared/contract/page';
+import {
+  createSessionSchema,
+  putBoardSchema,
+  sessionPageSchema,
+  sessionSchema,
+  updateSessionSchema,
+} from '@pegwell/shared/contract/sessions';
+import { createZodDto } from 'nestjs-zod';
+
+export class CreateSessionDto extends createZodDto(createSessionSchema) {}
+export class UpdateSessionDto extends createZodDto(updateSessionSchema) {}
+export class PutBoardDto extends createZodDto(putBoardSchema) {}
+export class SessionDto extends createZodDto(sessionSchema) {}
+export class SessionPageDto extends createZodDto(sessionPageSchema) {}
+export class PageQueryDto extends createZodDto(pageQuerySchema) {}
