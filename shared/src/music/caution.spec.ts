@@ -45,6 +45,8 @@ describe('the cautions of a retune', () => {
     ['fiddle', 'GDAE', 'AEAE', '0 note; 1 note'],
     ['fiddle', 'GDAE', 'DDAD', '0 none, two goes'],
     ['fiddle', 'DDAD', 'GDAE', '0 none, two goes'],
+    ['fiddle', 'GDAE', 'EDAE', ''],
+    ['fiddle', 'GDAE', 'EbDAE', '0 none, two goes'],
     ['fiddle', 'DDAD', 'AEAE', '0 note, two goes; 1 note'],
     ['fiddle', 'GDAE', 'AEAC#', '0 note; 1 note'],
     ['fiddle', 'AEAC#', 'GDAE', ''],

@@ -27,6 +27,7 @@ describe('readNotes', () => {
     ['bbbb', 4, 'B B B B'],
     // ... those that stand earlier altering first ...
     ['bbb', 2, 'Bb B'],
+    ['bbbb', 3, 'Bb B B'],
     ['gdgbbd', 5, 'G D Gb B D'],
     // ... but never across a space or hyphen, as a capital or as the sign.
     ['g d g b d', 5, 'G D G B D'],

@@ -213,6 +213,10 @@ describe('a banjo’s capo spelling', () => {
     expect(reading(builtInKind('guitar')!, 'F#BEAC#F#')).toBe('F#2 B2 E3 A3 C#4 F#4 / 0');
   });
 
+  it('is a raise: a named tuning lowered alike means pegs', () => {
+    expect(reading(banjo, 'fCFAC')).toBe('F4 C3 F3 A3 C4 / 0');
+  });
+
   it('is not shown for pegs that stand so: those are shown in full', () => {
     expect(showTuning(banjo, ['A4', 'D3', 'A3', 'D4', 'E4'])).toBe('A4 D3 A3 D4 E4');
   });

@@ -100,14 +100,12 @@ function readShortName(kind: InstrumentKind, text: string): Parsed<readonly stri
 
 /**
  * A banjo with a capo is often named as it sounds: `aDADE` is `gCGCD capo 2`. So pitches that are a built-in
- * named tuning raised alike on all five strings are that tuning with the capo, unless they are themselves a
- * built-in named tuning.
+ * named tuning raised alike on all five strings are that tuning with the capo. No named tuning is another one
+ * raised, so at most one fits and a named tuning stays itself.
  */
 function capoSpelling(kind: InstrumentKind, pitches: readonly string[]): Tuned | null {
   if (kind.id !== 'banjo') return null;
-  const named = NAMED_TUNINGS['banjo'] ?? [];
-  if (named.some((tuning) => sameTuning(tuning.pitches, pitches))) return null;
-  for (const tuning of named) {
+  for (const tuning of NAMED_TUNINGS['banjo'] ?? []) {
     const raised = tuning.pitches.map((name, index) => midiOf(pitches[index]!) - midiOf(name));
     const capo = raised[0]!;
     if (capo >= 1 && capo <= HIGHEST_CAPO && raised.every((each) => each === capo)) {
