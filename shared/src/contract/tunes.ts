@@ -92,11 +92,14 @@ const filterText = (max: number) =>
     .string()
     .trim()
     .max(max)
+    // eslint-disable-next-line no-control-regex -- a database cannot be asked for NUL, and nothing stored holds the rest
+    .regex(/^[^\u0000-\u001f\u007f]*$/, 'This has characters that cannot be shown.')
     .optional()
     // A form sends its empty fields too: they filter nothing.
     .transform((text) => text || undefined);
 
-const emptyFilter = z.literal('').transform(() => undefined);
+const orEmpty = <T extends z.ZodType>(schema: T, error: string) =>
+  z.union([z.literal('').transform(() => undefined), schema], { error }).optional();
 
 /**
  * `key` is compared by sound (A# is Bb), `rhythm` without case, `search` by what `titleKey` leaves of a title.
@@ -109,8 +112,8 @@ export const tuneQuerySchema = pageQuerySchema
     search: filterText(200),
     kind: filterText(40),
     tuning: filterText(80),
-    key: emptyFilter.or(keySchema).optional(),
-    mode: emptyFilter.or(modeSchema).optional(),
+    key: orEmpty(keySchema, 'A key is a letter A to G, with # or b where it has one.'),
+    mode: orEmpty(modeSchema, `A mode is one of ${modeSchema.options.join(', ')}.`),
     rhythm: filterText(40),
     sort: z
       .enum(['title', '-title', 'key', '-key', 'rhythm', '-rhythm', 'updated', '-updated'])
