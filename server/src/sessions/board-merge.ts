@@ -66,9 +66,8 @@ export function mergeBoard(
       entry.tuneId ?? (entry.tuneId === undefined && !entry.open ? (before?.tuneId ?? null) : null);
     if (entry.tuneId && entry.open) tell(path, 'An entry is a tune or an open place, not both.');
     else if (!open && !tuneId) tell(`${path}.tuneId`, 'Which tune? An entry is a tune or an open place.');
-    const keeps = before?.tuneId === tuneId;
-    const settingId =
-      entry.settingId !== undefined ? entry.settingId : keeps ? (before?.settingId ?? null) : null;
+    const keeps = before !== undefined && before.tuneId === tuneId;
+    const settingId = entry.settingId !== undefined ? entry.settingId : keeps ? before.settingId : null;
     if (tuneId) checkTune(tuneId, settingId, keeps, path);
     else if (settingId) tell(`${path}.settingId`, 'An open place has no setting.');
     if (entry.open) errors.push(...readKindTunings(entry.open.tunings, `${path}.open.tunings`).errors);

@@ -27,11 +27,7 @@ export const registerSchema = z.strictObject({
 export type Register = z.infer<typeof registerSchema>;
 
 export const loginSchema = z.strictObject({
-  email: z
-    .string({ error: 'An e-mail address is missing.' })
-    .trim()
-    .min(1, 'An e-mail address is missing.')
-    .max(254),
+  email: lineSchema(254, 'An e-mail address'),
   password: z.string({ error: 'A password is missing.' }).min(1, 'A password is missing.').max(1000),
 });
 export type Login = z.infer<typeof loginSchema>;

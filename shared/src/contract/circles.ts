@@ -39,7 +39,7 @@ export const circleSchema = z.object({
 export type Circle = z.infer<typeof circleSchema>;
 
 export const addMemberSchema = z.strictObject({
-  email: z.string({ error: 'An e-mail address is missing.' }).trim().min(1).max(254),
+  email: lineSchema(254, 'An e-mail address'),
   role: roleSchema,
 });
 export type AddMember = z.infer<typeof addMemberSchema>;

@@ -27,29 +27,27 @@ export interface Page<T> {
 /** A UUID in any version, compared in lower case. */
 export const idSchema = z.guid({ error: 'This is not an id.' }).transform((id) => id.toLowerCase());
 
-/** One line of text as people type it: trimmed, without control characters. */
+/** What can be stored and shown: no control characters, no half of a surrogate pair. */
+const PLAIN = /^[^\p{Cc}\p{Cs}]*$/u;
+const PLAIN_LINES = /^(?:[^\p{Cc}\p{Cs}]|[\t\n\r])*$/u;
+
+/** One line of text, possibly empty. */
+export function plainSchema(max: number, what: string) {
+  return z
+    .string({ error: `${what} is missing.` })
+    .max(max, `${what} is longer than ${max} characters.`)
+    .regex(PLAIN, `${what} has characters that cannot be shown.`);
+}
+
+/** One line of text as people type it: trimmed, and something in it. */
 export function lineSchema(max: number, what: string) {
-  return (
-    z
-      .string({ error: `${what} is missing.` })
-      .trim()
-      .min(1, `${what} is missing.`)
-      .max(max, `${what} is longer than ${max} characters.`)
-      // eslint-disable-next-line no-control-regex -- control characters are what is refused
-      .regex(/^[^\u0000-\u001f\u007f]*$/, `${what} has characters that cannot be shown.`)
-  );
+  return plainSchema(max, what).trim().min(1, `${what} is missing.`);
 }
 
 /** Several lines of text, possibly empty. */
 export function textSchema(max: number, what: string) {
-  return (
-    z
-      .string()
-      .max(max, `${what} is longer than ${max} characters.`)
-      // eslint-disable-next-line no-control-regex -- NUL cannot be stored, the rest cannot be shown
-      .regex(
-        /^[^\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f]*$/,
-        `${what} has characters that cannot be shown.`,
-      )
-  );
+  return z
+    .string()
+    .max(max, `${what} is longer than ${max} characters.`)
+    .regex(PLAIN_LINES, `${what} has characters that cannot be shown.`);
 }

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { timeZoneSchema } from './circles';
 import { keySchema, modeSchema } from './keys';
-import { idSchema, lineSchema, pageOf, textSchema } from './page';
+import { idSchema, lineSchema, pageOf, plainSchema, textSchema } from './page';
 import { shownTuningSchema, tuningsSchema } from './tunes';
 
 export const goalSchema = z.enum(['pegs', 'stops']);
@@ -19,7 +19,7 @@ export const chairsSchema = z.array(chairSchema).max(40);
 /** By kind: a tuning, with `capo N` where there is one, or null for "tune to the first tune". */
 export const openingsSchema = z.record(kindIdSchema, z.string().trim().min(1).max(80).nullable());
 
-export const spacedRhythmsSchema = z.array(z.string().trim().min(1).max(40)).max(40);
+export const spacedRhythmsSchema = z.array(lineSchema(40, 'A rhythm')).max(40);
 export const DEFAULT_SPACED_RHYTHMS: readonly string[] = ['waltz', 'air'];
 
 /** Local time (`2027-01-14T19:30`) in the session's zone, or an instant with an offset. */
@@ -71,7 +71,7 @@ export type BoardEntry = z.infer<typeof boardEntrySchema>;
 export const MAX_ENTRIES = 300;
 export const boardSetSchema = z.strictObject({
   id: idSchema.optional(),
-  title: z.string().trim().max(120, 'A title is longer than 120 characters.').optional(),
+  title: plainSchema(120, 'A title').trim().optional(),
   entries: z.array(boardEntrySchema).max(MAX_ENTRIES),
 });
 export type BoardSet = z.infer<typeof boardSetSchema>;

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { keySchema, modeSchema } from './keys';
-import { idSchema, lineSchema, pageOf, pageQuerySchema, textSchema } from './page';
+import { idSchema, lineSchema, pageOf, pageQuerySchema, plainSchema, textSchema } from './page';
 
 /** Bytes of an import file. */
 export const IMPORT_MAX_BYTES = 10 * 1024 * 1024;
@@ -23,12 +23,8 @@ export type KindTunings = z.infer<typeof kindTuningsSchema>;
 
 export const tuningsSchema = z.array(kindTuningsSchema).max(40);
 
-const rhythmSchema = z
-  .string()
+const rhythmSchema = plainSchema(40, 'A rhythm')
   .trim()
-  .max(40, 'A rhythm is longer than 40 characters.')
-  // eslint-disable-next-line no-control-regex -- control characters are what is refused
-  .regex(/^[^\u0000-\u001f\u007f]*$/, 'A rhythm has characters that cannot be shown.')
   .nullish()
   .transform((word) => word || null);
 
