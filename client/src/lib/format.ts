@@ -67,3 +67,13 @@ export function timeZones(): readonly string[] {
   const known = Intl.supportedValuesOf('timeZone');
   return [...new Set([...known, ownTimeZone(), 'UTC'])].sort();
 }
+
+/** A file's size for people: "830 bytes", "42 kB", "10.5 MB". */
+export function bytesOf(bytes: number): string {
+  if (bytes < 1000) return count(bytes, 'byte');
+  if (bytes < 1_000_000) return `${Math.round(bytes / 1000)} kB`;
+  return `${(bytes / 1_000_000).toFixed(1)} MB`;
+}
+
+/** "2,043" */
+export const grouped = (number: number): string => number.toLocaleString('en-GB');
