@@ -1,0 +1,117 @@
+import { latestStarts } from './feasible';
+import type { Layer } from './layer';
+import type { Stage } from './stage';
+import { fitsAt, type Plan } from './units';
+
+/**
+ * Everything that can follow a state, in columns that are overwritten by the next call: the unit placed, the
+ * position after it, how all kinds then stand, and the added cost.
+ */
+export class Successors {
+  count = 0;
+  unit = new Int32Array(64);
+  joint = new Int32Array(64);
+  high = new Float64Array(64);
+  low = new Float64Array(64);
+  private readonly latest: readonly number[];
+  /** By class whose unit must wait for others: those others. */
+  private readonly waits: readonly (readonly number[])[];
+  /** By class: the last position at which it may still be unplaced; count where any is. */
+  private readonly lastCall: Int32Array;
+  private readonly fits: readonly (Uint8Array | null)[];
+  private readonly hasDeadlines: boolean;
+
+  constructor(private readonly stage: Stage) {
+    const { plan } = stage;
+    const count = plan.setStart.length;
+    this.latest = latestStarts(plan) ?? plan.units.map(() => count);
+    this.waits = stage.members.map(([unit]) => plan.units[unit!]!.after);
+    this.lastCall = Int32Array.from(stage.members, ([unit]) => {
+      const { plain, entries } = plan.units[unit!]!;
+      return plain ? count : Math.min(this.latest[unit!]!, count - entries.length);
+    });
+    this.fits = stage.members.map(([unit]) => fitting(plan, unit!));
+    this.hasDeadlines = plan.units.some(({ after }) => after.length > 0);
+  }
+
+  /** Whether nothing that must still come has become too late. */
+  alive(rows: Int32Array, at: number, position: number): boolean {
+    if (!this.hasDeadlines) return true;
+    for (let c = 0; c < this.lastCall.length; c++) {
+      if (this.lastCall[c]! < position && this.stage.left(rows, at, c) > 0) return false;
+    }
+    return true;
+  }
+
+  /** Fills the columns with what can follow a row of a layer. */
+  after(layer: Layer, row: number, position: number): void {
+    this.count = 0;
+    const { stage } = this;
+    const { plan } = stage;
+    const at = row * layer.stride;
+    const { rows } = layer;
+    const fixed = plan.fixedUnitAt[position]!;
+    if (fixed !== -1) {
+      if (this.mayCome(plan.units[fixed]!.after, rows, at, position)) this.place(fixed, rows, at, position);
+      return;
+    }
+    if (!this.alive(rows, at, position)) return;
+    for (let c = 0; c < stage.members.length; c++) {
+      if (stage.left(rows, at, c) === 0) continue;
+      const fits = this.fits[c]!;
+      if (fits !== null && fits[position] === 0) continue;
+      if (!this.mayCome(this.waits[c]!, rows, at, position)) continue;
+      this.place(stage.members[c]![0]!, rows, at, position);
+    }
+  }
+
+  private mayCome(earlier: readonly number[], rows: Int32Array, at: number, position: number): boolean {
+    for (const unit of earlier) {
+      const { fixedAt } = this.stage.plan.units[unit]!;
+      if (fixedAt !== null ? fixedAt >= position : this.stage.left(rows, at, this.stage.classOf[unit]!) > 0) {
+        return false;
+      }
+    }
+    return true;
+  }
+
+  private place(unit: number, rows: Int32Array, at: number, position: number): void {
+    const { stage } = this;
+    const moves = stage.moves.from(rows[at + stage.words]!, stage.signature[unit]!);
+    const pair = rows[at + stage.words + 1]! * stage.keys + stage.headKey[unit]!;
+    const offClock = stage.plan.setStart[position]!;
+    const high = stage.insideHigh[unit]! + (offClock ? 0 : stage.pairHigh[pair]!);
+    const low = offClock ? 0 : stage.pairLow[pair]!;
+    const moveHigh = offClock ? moves.offHigh : moves.onHigh;
+    const moveLow = offClock ? moves.offLow : moves.onLow;
+    const ways = moves.to.length;
+    if (this.count + ways > this.unit.length) this.grow(this.count + ways);
+    for (let way = 0; way < ways; way++) {
+      const index = this.count++;
+      this.unit[index] = unit;
+      this.joint[index] = moves.to[way]!;
+      this.high[index] = high + moveHigh[way]!;
+      this.low[index] = low + moveLow[way]!;
+    }
+  }
+
+  private grow(atLeast: number): void {
+    const room = 2 ** Math.ceil(Math.log2(atLeast));
+    const [unit, joint, high, low] = [this.unit, this.joint, this.high, this.low];
+    this.unit = new Int32Array(room);
+    this.joint = new Int32Array(room);
+    this.high = new Float64Array(room);
+    this.low = new Float64Array(room);
+    this.unit.set(unit);
+    this.joint.set(joint);
+    this.high.set(high);
+    this.low.set(low);
+  }
+}
+
+/** By position; null for a unit that fits wherever nothing is fixed, which is asked before. */
+function fitting(plan: Plan, unit: number): Uint8Array | null {
+  const { entries } = plan.units[unit]!;
+  if (entries.length === 1) return null;
+  return Uint8Array.from(plan.setStart, (_, position) => (fitsAt(plan, plan.units[unit]!, position) ? 1 : 0));
+}
