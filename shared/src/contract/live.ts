@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { modeSchema } from './keys';
-import { idSchema } from './page';
+import { idSchema, pageOf } from './page';
 import { sessionStatusSchema } from './sessions';
 
 export const liveActionSchema = z.enum(['start', 'next', 'back', 'goto', 'retuned', 'finish']);
@@ -52,6 +52,8 @@ export const followMoveSchema = z.object({
   /** Spelled, low to high in string order, for words and pictures; null while free. */
   fromPitches: z.array(z.string()).nullable(),
   toPitches: z.array(z.string()).nullable(),
+  /** Where the tune also accepts a tuning that raises less: that one, as shown with its capo. */
+  gentler: z.string().nullable(),
 });
 export type FollowMove = z.infer<typeof followMoveSchema>;
 
@@ -63,13 +65,17 @@ export const followTuneSchema = z.object({
   key: z.string(),
   mode: modeSchema,
   rhythm: z.string().nullable(),
+  /** How long an open place is planned for; null for a tune. */
+  minutes: z.number().nullable(),
   /** What the kind has on its instrument for this tune; null while it is free and nothing is stated. */
   tuning: z.string().nullable(),
   capo: z.number().int().nullable(),
   pitches: z.array(z.string()).nullable(),
   /** The move into it from what was in force; null when there is nothing to turn or move. */
   retune: followMoveSchema.nullable(),
+  /** The title of its set. */
   set: z.string(),
+  /** Its number in the evening, from 1. */
   position: z.number().int(),
 });
 export type FollowTune = z.infer<typeof followTuneSchema>;
@@ -79,6 +85,8 @@ export const followSchema = z.object({
   status: sessionStatusSchema,
   title: z.string(),
   kind: z.string(),
+  /** The kinds that retune in this room: what a screen on the wall shows. */
+  kinds: z.array(z.string()),
   /** Hz. */
   referenceA: z.number(),
   startsAt: z.string(),
@@ -91,3 +99,32 @@ export const followSchema = z.object({
   retuneIn: z.number().int().nullable(),
 });
 export type Follow = z.infer<typeof followSchema>;
+
+/** One tune that was really played, copied: it stays true when tunes change. Instants are ISO 8601. */
+export const playSchema = z.object({
+  id: idSchema,
+  sessionId: idSchema,
+  entryId: idSchema,
+  /** Null where the tune is gone, and for an open place. */
+  tuneId: idSchema.nullable(),
+  /** Null for an open place. */
+  title: z.string().nullable(),
+  key: z.string(),
+  mode: modeSchema,
+  /** As shown, by kind that retuned in the room; null where nothing was stated for it. */
+  tunings: z.record(z.string(), z.string().nullable()),
+  calledAt: z.string(),
+  /** When the room was in tune; the same as `calledAt` where nothing was turned, null where nobody said. */
+  playingAt: z.string().nullable(),
+  /** Null for the tune that is played now. */
+  endedAt: z.string().nullable(),
+});
+export type Play = z.infer<typeof playSchema>;
+export const playsSchema = z.object({ items: z.array(playSchema) });
+
+/** Whose evening a play was of. */
+export const circlePlaySchema = playSchema.extend({
+  session: z.object({ title: z.string(), startsAt: z.string(), timeZone: z.string() }),
+});
+export type CirclePlay = z.infer<typeof circlePlaySchema>;
+export const circlePlayPageSchema = pageOf(circlePlaySchema);

@@ -25,7 +25,7 @@ export interface Page<T> {
 }
 
 /** A UUID in any version, compared in lower case. */
-export const idSchema = z.guid({ error: 'This is not an id.' }).transform((id) => id.toLowerCase());
+export const idSchema = z.guid({ error: 'This is not an id.' }).toLowerCase();
 
 /** What can be stored and shown: no control characters, no half of a surrogate pair. */
 const PLAIN = /^[^\p{Cc}\p{Cs}]*$/u;

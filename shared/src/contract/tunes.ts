@@ -84,12 +84,8 @@ export type Tune = z.infer<typeof tuneSchema>;
 export const tunePageSchema = pageOf(tuneSchema);
 
 const filterText = (max: number) =>
-  z
-    .string()
+  plainSchema(max, 'This')
     .trim()
-    .max(max)
-    // eslint-disable-next-line no-control-regex -- a database cannot be asked for NUL, and nothing stored holds the rest
-    .regex(/^[^\u0000-\u001f\u007f]*$/, 'This has characters that cannot be shown.')
     .optional()
     // A form sends its empty fields too: they filter nothing.
     .transform((text) => text || undefined);
