@@ -101,8 +101,8 @@ describe('the price of one more tune', () => {
   });
 
   it('is pegChanges with it less without it', () => {
-    // EDAE after 2: the G peg goes down to it and in the break up to A, where it would have turned anyway.
-    expect(priceOf(evening, tune('EDAE'))).toEqual({ pegChanges: 5, setIndex: 0, index: 2 });
+    // EDAE at either end of the break: the G peg goes down to it and from there up to A, where it turns anyway.
+    expect(priceOf(evening, tune('EDAE'))).toEqual({ pegChanges: 5, setIndex: 1, index: 0 });
     // GDGD after 2: two pegs down, and in the break four in place of two.
     expect(priceOf(evening, tune('GDGD'))?.pegChanges).toBe(20);
   });
