@@ -1,0 +1,112 @@
+import { Inject, Injectable } from '@nestjs/common';
+import type {
+  AcceptSuggestion,
+  ScoreAnswer,
+  ScoreRequest,
+  SessionSuggestion,
+  SessionSuggestionRequest,
+  SuggestAnswer,
+  SuggestRequest,
+} from '@pegwell/shared/contract/ordering';
+import type { Session } from '@pegwell/shared/contract/sessions';
+import { scoreEvening } from '@pegwell/shared/session/score';
+import type { Member } from '../common/access';
+import { cannotBe, notFound, ProblemException } from '../common/problem';
+import { DATABASE, type RootDatabase } from '../database/database';
+import { BoardService } from '../sessions/board.service';
+import { scoredEvening } from '../sessions/evening';
+import { EveningsService } from '../sessions/evenings.service';
+import { clashSentence } from './clash-words';
+import type { OrderingProblem, Solution } from './engine/ordering-problem';
+import { problemOf } from './session-problem';
+import { Solver } from './solver/solver';
+import { presentPlaces, readEvening } from './stateless';
+
+/** Milliseconds after which the best so far is answered; the search's own budget of steps ends it before. */
+const LIMIT_MS = 5_000;
+
+@Injectable()
+export class OrderingService {
+  constructor(
+    @Inject(DATABASE) private readonly db: RootDatabase,
+    private readonly solver: Solver,
+    private readonly evenings: EveningsService,
+    private readonly board: BoardService,
+  ) {}
+
+  score(body: ScoreRequest): ScoreAnswer {
+    return presentPlaces(scoreEvening(readEvening(body)));
+  }
+
+  async suggest(body: SuggestRequest, signal: AbortSignal): Promise<SuggestAnswer> {
+    const evening = readEvening(body);
+    const pins = body.pins ?? {};
+    const unknown = Object.keys(pins).filter((id) => !body.tunes.some((tune) => tune.id === id));
+    if (unknown.length > 0) {
+      throw cannotBe(unknown.map((id) => ({ path: `pins.${id}`, message: `No tune has the label ${id}.` })));
+    }
+    const problem = { ...evening, pins, befores: body.befores ?? [] };
+    const { solution, millis } = await this.solve(problem, signal, body.limitMs ?? LIMIT_MS, (id) => id);
+    return {
+      score: solution.score,
+      sets: solution.sets.map((set) => [...set]),
+      ...proofOf(solution),
+      millis,
+    };
+  }
+
+  async suggestFor(
+    member: Member,
+    sessionId: string,
+    body: SessionSuggestionRequest,
+    signal: AbortSignal,
+  ): Promise<SessionSuggestion> {
+    const stored = await this.evenings.load(this.db, sessionId);
+    if (!stored) throw notFound();
+    const goal = body.goal ?? stored.session.goal;
+    const { problem, restore } = problemOf(stored, goal);
+    const titles = new Map(
+      stored.entries.map(({ id, title }, index) => [id, title ?? `number ${index + 1}`]),
+    );
+    const { solution, millis } = await this.solve(problem, signal, LIMIT_MS, (id) => titles.get(id) ?? id);
+    const sets = restore(solution.sets);
+    const after = sets.flat();
+    return {
+      version: stored.session.version,
+      before: scoreEvening({ ...scoredEvening(stored), goal }).score,
+      after: solution.score,
+      sets,
+      moved: stored.entries.flatMap(({ id }, index) => (after[index] === id ? [] : [id])),
+      goal,
+      ...proofOf(solution),
+      millis,
+    };
+  }
+
+  accept(member: Member, sessionId: string, body: AcceptSuggestion): Promise<Session> {
+    return this.board.reorder(member, sessionId, body);
+  }
+
+  private async solve(
+    problem: OrderingProblem,
+    signal: AbortSignal,
+    limitMs: number,
+    nameOf: (id: string) => string,
+  ): Promise<{ solution: Solution; millis: number }> {
+    const begun = performance.now();
+    const answer = await this.solver.solve(problem, { signal, limitMs });
+    const millis = Math.round((performance.now() - begun) * 10) / 10;
+    if (answer.outcome === 'solution') return { solution: answer, millis };
+    if (answer.outcome === 'undecided') throw new ProblemException('undecided');
+    const { clashes } = answer;
+    throw new ProblemException(
+      'rules-clash',
+      clashSentence(clashes, nameOf, (id) => problem.pins[id]),
+      { clashes },
+    );
+  }
+}
+
+function proofOf({ optimal, provenLevels, lowerBound, stopped }: Solution) {
+  return { optimal, provenLevels, lowerBound, ...(stopped === 'time' && { stopped: 'time' as const }) };
+}
