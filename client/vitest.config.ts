@@ -4,5 +4,10 @@ import { defineConfig } from 'vitest/config';
 export default defineConfig({
   plugins: [react()],
   resolve: { conditions: ['pegwell-source', 'module', 'browser', 'development|production'] },
-  test: { environment: 'jsdom', include: ['src/**/*.spec.{ts,tsx}'], setupFiles: ['src/lib/test-setup.ts'] },
+  test: {
+    environment: 'jsdom',
+    testTimeout: 20_000,
+    include: ['src/**/*.spec.{ts,tsx}'],
+    setupFiles: ['src/lib/test-setup.ts'],
+  },
 });

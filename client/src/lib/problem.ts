@@ -37,27 +37,29 @@ export class ProblemError extends Error {
 const isRecord = (value: unknown): value is Record<string, unknown> =>
   typeof value === 'object' && value !== null && !Array.isArray(value);
 
+const text = (value: unknown): string => (typeof value === 'string' ? value : '');
+
 function readIssues(value: unknown): ProblemIssue[] {
   if (!Array.isArray(value)) return [];
   return value.filter(isRecord).map((issue) => ({
     // A list of steps and a JSON pointer say the same as a dotted path; forms speak dotted.
     path: Array.isArray(issue['path'])
       ? issue['path'].join('.')
-      : String(issue['path'] ?? '')
-          .replace(/^\//, '')
-          .replaceAll('/', '.'),
-    message: String(issue['message'] ?? ''),
+      : text(issue['path']).replace(/^\//, '').replaceAll('/', '.'),
+    message: text(issue['message']),
   }));
 }
 
 /** The problem that a response with an error status carries; a sentence of our own where it has none. */
 export function readProblem(status: number, body: unknown): ProblemError {
   const document = isRecord(body) ? body : {};
-  const text = (key: string) => (typeof document[key] === 'string' ? (document[key] as string) : '');
   return new ProblemError({
     status,
-    code: text('code') || `http-${status}`,
-    detail: text('detail') || text('title') || 'The server could not do that. Try again in a moment.',
+    code: text(document['code']) || `http-${status}`,
+    detail:
+      text(document['detail']) ||
+      text(document['title']) ||
+      'The server could not do that. Try again in a moment.',
     errors: readIssues(document['errors']),
     body,
   });

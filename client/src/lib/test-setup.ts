@@ -1,5 +1,8 @@
-import { cleanup } from '@testing-library/react';
-import { afterEach, vi } from 'vitest';
+import { cleanup, configure } from '@testing-library/react';
+import { afterEach, beforeEach, vi } from 'vitest';
+
+// Pages are loaded when they are gone to; the first one brings its libraries with it.
+configure({ asyncUtilTimeout: 8_000 });
 
 afterEach(() => {
   cleanup();
@@ -18,11 +21,22 @@ Object.defineProperty(window, 'matchMedia', {
   }),
 });
 
-globalThis.ResizeObserver ??= class {
-  observe() {}
-  unobserve() {}
-  disconnect() {}
-};
+beforeEach(() => {
+  vi.stubGlobal(
+    'ResizeObserver',
+    class {
+      observe() {
+        // Nothing ever changes its size here.
+      }
+      disconnect() {
+        // Nothing to let go.
+      }
+      unobserve() {
+        // Nothing to let go.
+      }
+    },
+  );
+});
 
 window.scrollTo = () => undefined;
-Element.prototype.scrollTo ??= () => undefined;
+Element.prototype.scrollTo = () => undefined;

@@ -10,10 +10,9 @@ const css = (name: string) => ({ value: `var(--${name})` });
 
 const steps = [0.5, 1, 1.5, 2, 2.5, 3, 3.5, 4, 5, 6, 7, 8, 9, 10, 11, 12, 14, 16, 20, 24, 32, 40, 48, 64, 80];
 // Chakra's own measure, a quarter rem a step, so that its documentation holds here.
-const scale = Object.fromEntries([
-  ...steps.map((step) => [String(step), { value: `${step * 0.25}rem` }]),
-  ['0', { value: '0px' }],
-]);
+const scale: Readonly<Record<string, { readonly value: string }>> = Object.fromEntries(
+  [0, ...steps].map((step) => [String(step), { value: `${step * 0.25}rem` }]),
+);
 
 const colours = {
   ground: css('ground'),

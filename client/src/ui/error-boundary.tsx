@@ -27,13 +27,17 @@ export class ErrorBoundary extends Component<Props, State> {
   }
 
   override componentDidCatch(error: unknown, info: ErrorInfo): void {
+    // For whoever looks into it: the browser's console is the only log a page has.
+    // eslint-disable-next-line no-console
     console.error(error, info.componentStack);
   }
 
   override render(): ReactNode {
     if (this.state.error === null) return this.props.children;
     // After a new version is put up, the pieces an open page asks for may be gone.
-    const missingPiece = /import|module|chunk/i.test(String(this.state.error));
+    const missingPiece = /import|module|chunk/i.test(
+      this.state.error instanceof Error ? this.state.error.message : '',
+    );
     return (
       <section className={`${styles.page} ${styles.narrow}`} role="alert">
         <div className={`${styles.state} ${styles.failing}`}>

@@ -5,4 +5,4 @@ export const signIn = (login: Login) => api.post<SignedIn>('/auth/login', login)
 
 export const register = (account: Register) => api.post<SignedIn>('/auth/register', account);
 
-export const signOut = () => api.post<void>('/auth/logout');
+export const signOut = () => api.post<undefined>('/auth/logout');

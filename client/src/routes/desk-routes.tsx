@@ -1,0 +1,45 @@
+import { Route, Routes } from 'react-router-dom';
+import { lazyPage } from '../lib/lazy-page';
+import { CircleLayout } from './circle-layout';
+import { DeskLayout } from './desk-layout';
+import { NotFoundPage } from './not-found-page';
+import { SignedInLayout } from './signed-in-layout';
+
+const SignInPage = lazyPage(() => import('./sign-in-page'), 'SignInPage');
+const RegisterPage = lazyPage(() => import('./register-page'), 'RegisterPage');
+const HomePage = lazyPage(() => import('./home-page'), 'HomePage');
+const EveningsPage = lazyPage(() => import('./evenings-page'), 'EveningsPage');
+const BoardPage = lazyPage(() => import('./board-page'), 'BoardPage');
+const ConsolePage = lazyPage(() => import('./console-page'), 'ConsolePage');
+const TunesPage = lazyPage(() => import('./tunes-page'), 'TunesPage');
+const ImportPage = lazyPage(() => import('./import-page'), 'ImportPage');
+const TuningsPage = lazyPage(() => import('./tunings-page'), 'TuningsPage');
+const PeoplePage = lazyPage(() => import('./people-page'), 'PeoplePage');
+const RecordPage = lazyPage(() => import('./record-page'), 'RecordPage');
+
+/** Every page that is planned and read at a desk, inside the frame. */
+export function DeskRoutes() {
+  return (
+    <Routes>
+      <Route element={<DeskLayout />}>
+        <Route path="/sign-in" element={<SignInPage />} />
+        <Route path="/register" element={<RegisterPage />} />
+        <Route element={<SignedInLayout />}>
+          <Route path="/" element={<HomePage />} />
+          <Route path="/c/:circleId" element={<CircleLayout />}>
+            <Route index element={<EveningsPage />} />
+            <Route path="evenings" element={<EveningsPage />} />
+            <Route path="evenings/:sessionId" element={<BoardPage />} />
+            <Route path="evenings/:sessionId/live" element={<ConsolePage />} />
+            <Route path="tunes" element={<TunesPage />} />
+            <Route path="tunes/import" element={<ImportPage />} />
+            <Route path="tunings" element={<TuningsPage />} />
+            <Route path="people" element={<PeoplePage />} />
+            <Route path="record" element={<RecordPage />} />
+          </Route>
+        </Route>
+        <Route path="*" element={<NotFoundPage />} />
+      </Route>
+    </Routes>
+  );
+}
