@@ -1,6 +1,6 @@
 #!/usr/bin/env bash
 # One command runs Pegwell, without containers. What each word does is told by `./docker-free-dev.sh help`.
-# Here only what must be true before any TypeScript can run: Node.js, npm and the packages of the lock file.
+# Here only what must be true before any JavaScript can run.
 set -euo pipefail
 cd "$(dirname "${BASH_SOURCE[0]}")"
 
@@ -15,6 +15,4 @@ if ! node -e 'const [a, b] = process.versions.node.split(".").map(Number); proce
   exit 1
 fi
 
-node scripts/packages.cjs
-# The module hook of tsx in this very process, not its command: signals then arrive without a go-between.
-exec node --import tsx scripts/pegwell.ts "$@"
+exec node scripts/begin.cjs "$@"
