@@ -1,16 +1,18 @@
-import { Body, Controller, Get, Post, Put } from '@nestjs/common';
+import { Body, Controller, Get, Post, Put, Query } from '@nestjs/common';
 import { ApiParam, ApiResponse, ApiTags } from '@nestjs/swagger';
 import type { Circle, CircleMember } from '@pegwell/shared/contract/circles';
+import type { Page } from '@pegwell/shared/contract/page';
 import { AsMember, Caller, ForAccounts, ForMembers, type Account, type Member } from '../common/access';
 import {
   AddMemberDto,
   CircleDto,
   CreateCircleDto,
   MemberDto,
-  MembersDto,
+  MemberPageDto,
   SetUsualTuningsDto,
   UsualTuningsDto,
 } from './circles.dto';
+import { PageQueryDto } from '../common/page.dto';
 import { CirclesService } from './circles.service';
 import { UsualTuningsService } from './usual-tunings.service';
 
@@ -40,9 +42,9 @@ export class CirclesController {
   @Get(':circleId/members')
   @ForMembers('members.read')
   @ApiParam({ name: 'circleId', format: 'uuid' })
-  @ApiResponse({ status: 200, type: MembersDto.Output })
-  members(@AsMember() member: Member): Promise<{ items: CircleMember[] }> {
-    return this.circles.members(member);
+  @ApiResponse({ status: 200, type: MemberPageDto.Output })
+  members(@AsMember() member: Member, @Query() query: PageQueryDto): Promise<Page<CircleMember>> {
+    return this.circles.members(member, query);
   }
 
   @Post(':circleId/members')

@@ -3,7 +3,7 @@ import {
   circleSchema,
   createCircleSchema,
   memberSchema,
-  membersSchema,
+  memberPageSchema,
   setUsualTuningsSchema,
   usualTuningsSchema,
 } from '@pegwell/shared/contract/circles';
@@ -13,6 +13,6 @@ export class CreateCircleDto extends createZodDto(createCircleSchema) {}
 export class CircleDto extends createZodDto(circleSchema) {}
 export class AddMemberDto extends createZodDto(addMemberSchema) {}
 export class MemberDto extends createZodDto(memberSchema) {}
-export class MembersDto extends createZodDto(membersSchema) {}
+export class MemberPageDto extends createZodDto(memberPageSchema) {}
 export class UsualTuningsDto extends createZodDto(usualTuningsSchema) {}
 export class SetUsualTuningsDto extends createZodDto(setUsualTuningsSchema) {}

@@ -1,6 +1,7 @@
 import { Injectable } from '@nestjs/common';
-import { and, asc, eq, isNotNull, isNull } from 'drizzle-orm';
+import { and, asc, count, eq, isNotNull, isNull } from 'drizzle-orm';
 import type { Role } from '@pegwell/shared/contract/circles';
+import type { PageQuery } from '@pegwell/shared/contract/page';
 import { accounts } from '../accounts/accounts.table';
 import type { Database } from '../database/database';
 import { circles, events, members, usualTunings } from './circles.table';
@@ -63,8 +64,10 @@ export class CirclesRepository {
     return rows.length === 1;
   }
 
-  async members(db: Database, circleId: string) {
-    return db
+  async members(db: Database, circleId: string, { page, pageSize }: PageQuery) {
+    const present = and(eq(members.circleId, circleId), isNull(members.removedAt));
+    const [total] = await db.select({ count: count() }).from(members).where(present);
+    const items = await db
       .select({
         accountId: accounts.id,
         displayName: accounts.displayName,
@@ -73,8 +76,11 @@ export class CirclesRepository {
       })
       .from(members)
       .innerJoin(accounts, eq(accounts.id, members.accountId))
-      .where(and(eq(members.circleId, circleId), isNull(members.removedAt)))
-      .orderBy(asc(members.joinedAt), asc(accounts.displayName));
+      .where(present)
+      .orderBy(asc(members.joinedAt), asc(accounts.displayName), asc(accounts.id))
+      .limit(pageSize)
+      .offset((page - 1) * pageSize);
+    return { total: total?.count ?? 0, items };
   }
 
   async usualTunings(db: Database, circleId: string): Promise<UsualTuningRow[]> {

@@ -1,5 +1,6 @@
 import { Inject, Injectable } from '@nestjs/common';
 import type { AddMember, Circle, CircleMember, CreateCircle, Role } from '@pegwell/shared/contract/circles';
+import type { Page, PageQuery } from '@pegwell/shared/contract/page';
 import { actionsOf, may } from '@pegwell/shared/policy';
 import { AccountsService } from '../accounts/accounts.service';
 import type { Account, Member } from '../common/access';
@@ -51,10 +52,14 @@ export class CirclesService {
     return row;
   }
 
-  async members(member: Member): Promise<{ items: CircleMember[] }> {
-    const rows = await this.circles.members(this.db, member.circleId);
+  async members(member: Member, query: PageQuery): Promise<Page<CircleMember>> {
+    const { total, items } = await this.circles.members(this.db, member.circleId, query);
     const showMail = may(member.role, 'members.change');
-    return { items: rows.map(({ email, ...rest }) => (showMail ? { ...rest, email } : rest)) };
+    return {
+      ...query,
+      total,
+      items: items.map(({ email, ...rest }) => (showMail ? { ...rest, email } : rest)),
+    };
   }
 
   async addMember(member: Member, { email, role }: AddMember): Promise<CircleMember> {

@@ -3,15 +3,9 @@ import { ApiParam, ApiResponse, ApiTags } from '@nestjs/swagger';
 import type { Page } from '@pegwell/shared/contract/page';
 import type { Session, SessionSummary } from '@pegwell/shared/contract/sessions';
 import { AsMember, ForMembers, ForSessionMembers, type Member } from '../common/access';
+import { PageQueryDto } from '../common/page.dto';
 import { BoardService } from './board.service';
-import {
-  CreateSessionDto,
-  PageQueryDto,
-  PutBoardDto,
-  SessionDto,
-  SessionPageDto,
-  UpdateSessionDto,
-} from './sessions.dto';
+import { CreateSessionDto, PutBoardDto, SessionDto, SessionPageDto, UpdateSessionDto } from './sessions.dto';
 import { SessionsService } from './sessions.service';
 
 @ApiTags('sessions')

@@ -1,4 +1,3 @@
-import { pageQuerySchema } from '@pegwell/shared/contract/page';
 import {
   createSessionSchema,
   putBoardSchema,
@@ -13,4 +12,3 @@ export class UpdateSessionDto extends createZodDto(updateSessionSchema) {}
 export class PutBoardDto extends createZodDto(putBoardSchema) {}
 export class SessionDto extends createZodDto(sessionSchema) {}
 export class SessionPageDto extends createZodDto(sessionPageSchema) {}
-export class PageQueryDto extends createZodDto(pageQuerySchema) {}

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { idSchema, lineSchema } from './page';
+import { idSchema, lineSchema, pageOf } from './page';
 import { keySchema } from './keys';
 
 export const roleSchema = z.enum(['host', 'cohost', 'player']);
@@ -52,7 +52,7 @@ export const memberSchema = z.object({
   role: roleSchema,
 });
 export type CircleMember = z.infer<typeof memberSchema>;
-export const membersSchema = z.object({ items: z.array(memberSchema) });
+export const memberPageSchema = pageOf(memberSchema);
 
 /** What a kind is taken to be tuned to where a tune says nothing: by key, else the default row (key null). */
 export const usualTuningSchema = z.object({
