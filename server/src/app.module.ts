@@ -10,6 +10,7 @@ import { DatabaseModule } from './database/database.module';
 import { DemoModule } from './demo/demo.module';
 import { ENV, type Env } from './env';
 import { HealthController } from './health/health.controller';
+import { LiveModule } from './live/live.module';
 import { logging } from './logging';
 import { OrderingModule } from './ordering/ordering.module';
 import { SessionsModule } from './sessions/sessions.module';
@@ -35,6 +36,7 @@ export class AppModule {
         TunesModule,
         SessionsModule,
         OrderingModule,
+        LiveModule,
         DemoModule,
         AccessModule,
       ],

@@ -1,5 +1,5 @@
 import { Injectable } from '@nestjs/common';
-import { and, asc, count, desc, eq, isNull, sql } from 'drizzle-orm';
+import { and, asc, count, desc, eq, isNull, ne, sql } from 'drizzle-orm';
 import type { PageQuery } from '@pegwell/shared/contract/page';
 import type { Database } from '../database/database';
 import { entries, seats, sessions, sessionSets } from './sessions.table';
@@ -71,6 +71,17 @@ export class SessionsRepository {
       .limit(pageSize)
       .offset((page - 1) * pageSize);
     return { total: total?.count ?? 0, items };
+  }
+
+  /** Evenings that were begun: for the record of what was played. */
+  async begun(db: Database, circleId: string) {
+    const { id, title, startsAt, timeZone } = sessions;
+    return db
+      .select({ id, title, startsAt, timeZone })
+      .from(sessions)
+      .where(
+        and(eq(sessions.circleId, circleId), isNull(sessions.removedAt), ne(sessions.status, 'planned')),
+      );
   }
 
   /** The seats that retune, counted by kind. */

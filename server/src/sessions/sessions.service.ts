@@ -130,6 +130,15 @@ export class SessionsService {
     await this.sessions.update(db, sessionId, values);
   }
 
+  /** For the record: the circle's evenings that were begun, by id; removed ones are left out. */
+  async begun(
+    db: Database,
+    circleId: string,
+  ): Promise<Map<string, Pick<SessionRow, 'title' | 'startsAt' | 'timeZone'>>> {
+    const rows = await this.sessions.begun(db, circleId);
+    return new Map(rows.map(({ id, ...evening }) => [id, evening]));
+  }
+
   private async insert(db: Database, values: Omit<NewSession, 'code'>): Promise<SessionRow> {
     for (;;) {
       const row = await this.sessions.insert(db, { ...values, code: makeCode() });

@@ -10,28 +10,14 @@ import {
   uniqueIndex,
   uuid,
 } from 'drizzle-orm/pg-core';
-import type { Tuned } from '@pegwell/shared/music/tuning';
 import type { OpenPlace } from '@pegwell/shared/contract/sessions';
+import type { Progress, Tunings } from '@pegwell/shared/live/progress';
 import { accounts } from '../accounts/accounts.table';
 import { circles } from '../circles/circles.table';
 import { createdAt, id, instant, removedAt } from '../database/columns';
 import { settings, tunes } from '../tunes/tunes.table';
 
-/** By kind id; null is "free" (tune to the first tune, nothing stated yet). */
-export type Tunings = Readonly<Record<string, Tuned | null>>;
-
-/** Where a live evening stands: facts, copied, so that a later change to a tune does not rewrite them. */
-export interface Progress {
-  readonly nowEntryId: string;
-  /** Every entry that was called, in the order of calling, each once. */
-  readonly called: readonly string[];
-  /** The entry that was now before the last step; null at the first. */
-  readonly previousEntryId: string | null;
-  /** In force before the last step, for every kind. */
-  readonly before: Tunings;
-  /** In force with the tune that is now, for every kind. */
-  readonly inForce: Tunings;
-}
+export type { Progress, Tunings };
 
 export const sessions = pgTable(
   'sessions',

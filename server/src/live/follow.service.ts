@@ -1,0 +1,85 @@
+import { Inject, Injectable } from '@nestjs/common';
+import { builtInKind } from '@pegwell/shared/music/instrument';
+import { cannotBe, ProblemException } from '../common/problem';
+import { DATABASE, type RootDatabase } from '../database/database';
+import { walkOf } from '../sessions/evening';
+import { EveningsService } from '../sessions/evenings.service';
+import { CODE_LENGTH, CODE_LETTERS, normalCode } from '../sessions/session-code';
+import { presentFollow, type Followed } from './follow';
+import { FollowMemory, type Remembered } from './follow-memory';
+import { LiveRepository } from './live.repository';
+
+/** A code stops working this long after the end. */
+const AFTER_END_MS = 24 * 60 * 60 * 1_000;
+const CODE = new RegExp(`^[${CODE_LETTERS}]{${CODE_LENGTH}}$`);
+/** Raised when an answer changes its shape, so that no phone keeps the old one for a new one. */
+const SHAPE = 1;
+
+/** An answer as it goes out. */
+export interface FollowAnswer {
+  readonly etag: string;
+  /** JSON. */
+  readonly body: string;
+}
+
+interface FollowedEvening extends Remembered, Followed {
+  /** By kind, made when first asked for. */
+  readonly answers: Map<string, FollowAnswer>;
+}
+
+/** What phones with the evening's code see, without an account. */
+@Injectable()
+export class FollowService {
+  /** The listener tells it of changes. */
+  readonly memory = new FollowMemory<FollowedEvening>((code) => this.read(code));
+
+  constructor(
+    @Inject(DATABASE) private readonly db: RootDatabase,
+    private readonly evenings: EveningsService,
+    private readonly live: LiveRepository,
+  ) {}
+
+  /** @param typed the code as a person typed it */
+  async answer(typed: string, kindId: string): Promise<FollowAnswer> {
+    const kind = builtInKind(kindId);
+    if (!kind) {
+      throw cannotBe([{ path: 'kind', message: `${kindId} is no instrument that Pegwell knows.` }]);
+    }
+    const code = normalCode(typed);
+    const evening = CODE.test(code) ? await this.memory.find(code) : null;
+    if (!evening) {
+      throw new ProblemException(
+        'not-found',
+        'No evening has this code, or it ended more than a day ago. Look at the code again, or ask the host.',
+      );
+    }
+    let answer = evening.answers.get(kind.id);
+    if (!answer) {
+      const etag = `"${evening.sessionId.slice(0, 8)}-${SHAPE}-${evening.version}-${kind.id}"`;
+      answer = { etag, body: JSON.stringify(presentFollow(evening, kind)) };
+      evening.answers.set(kind.id, answer);
+    }
+    return answer;
+  }
+
+  /** Evening, phase and version as they stood at one instant. */
+  private async read(code: string): Promise<FollowedEvening | null> {
+    return this.db.transaction(
+      async (tx) => {
+        const stored = await this.evenings.loadByCode(tx, code);
+        if (!stored) return null;
+        const { id, finishedAt } = stored.session;
+        return {
+          sessionId: id,
+          version: await this.live.followVersion(tx, id),
+          goodUntil: finishedAt ? finishedAt.getTime() + AFTER_END_MS : Infinity,
+          stored,
+          walk: walkOf(stored),
+          phase: (await this.live.state(tx, id))?.phase ?? null,
+          answers: new Map(),
+        };
+      },
+      { isolationLevel: 'repeatable read', accessMode: 'read only' },
+    );
+  }
+}
