@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react';
 import { Link } from 'react-router-dom';
+import { EntryPicture } from './entry-picture';
 import styles from './entry.module.css';
 
 interface EntryProps {
@@ -14,11 +15,15 @@ export function Entry({ title, form, other }: EntryProps) {
     <div className={styles.entry}>
       <title>{`${title} · Pegwell`}</title>
       <div>
-        <p className={styles.line}>Play more, tune less.</p>
+        <p className={styles.line}>
+          Play more, <br />
+          tune less.
+        </p>
         <p className={styles.why}>
           Plan the evening around its tunings: what to play, in which order, and which peg to turn when.
           Everyone in the room follows on the phone.
         </p>
+        <EntryPicture />
       </div>
       <div className={styles.form}>
         <h1>{title}</h1>
