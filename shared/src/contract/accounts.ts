@@ -12,6 +12,14 @@ const emailSchema = z
   .max(254, 'This e-mail address is longer than 254 characters.')
   .pipe(z.email('This is not an e-mail address.'));
 
+/** How long a text is in UTF-8. Counted here, because TextEncoder is no part of the language itself. */
+function utf8Bytes(text: string): number {
+  return [...text].reduce((sum, character) => {
+    const point = character.codePointAt(0) ?? 0;
+    return sum + (point < 0x80 ? 1 : point < 0x800 ? 2 : point < 0x10000 ? 3 : 4);
+  }, 0);
+}
+
 export const registerSchema = z.strictObject({
   email: emailSchema,
   password: z
@@ -19,7 +27,7 @@ export const registerSchema = z.strictObject({
     .refine((text) => [...text].length >= PASSWORD_MIN_CHARACTERS, {
       error: `At least ${PASSWORD_MIN_CHARACTERS} characters.`,
     })
-    .refine((text) => new TextEncoder().encode(text).length <= PASSWORD_MAX_BYTES, {
+    .refine((text) => utf8Bytes(text) <= PASSWORD_MAX_BYTES, {
       error: `At most ${PASSWORD_MAX_BYTES} bytes: about ${PASSWORD_MAX_BYTES} plain letters.`,
     }),
   displayName: lineSchema(80, 'A name'),
