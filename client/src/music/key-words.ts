@@ -6,5 +6,4 @@ export function keyWords(key: string, mode: Mode): string {
 }
 
 /** Tonics in the order of the scale, as they are usually spelled. */
-export const TONICS: readonly string[] =
-  'C C# Db D D# Eb E F F# Gb G G# Ab A A# Bb B'.split(' ');
+export const TONICS: readonly string[] = 'C C# Db D D# Eb E F F# Gb G G# Ab A A# Bb B'.split(' ');

@@ -41,7 +41,7 @@ export class ErrorBoundary extends Component<Props, State> {
     return (
       <section className={`${styles.page} ${styles.narrow}`} role="alert">
         <div className={`${styles.state} ${styles.failing}`}>
-          <h2>{missingPiece ? 'This page could not be loaded' : 'This page stopped'}</h2>
+          <h1>{missingPiece ? 'This page could not be loaded' : 'This page stopped'}</h1>
           <p className={styles.cause}>
             {missingPiece
               ? 'The connection was lost, or a newer Pegwell is there. Load the page again.'

@@ -21,9 +21,7 @@ export function Pager({ page, pageSize, total, what, onPage }: PagerProps) {
       <Button look="outline" disabled={page <= 1} onClick={() => onPage(page - 1)}>
         Previous
       </Button>
-      <span aria-live="polite">
-        {`${from} to ${Math.min(page * pageSize, total)} of ${total} ${what}`}
-      </span>
+      <span aria-live="polite">{`${from} to ${Math.min(page * pageSize, total)} of ${total} ${what}`}</span>
       <Button look="outline" disabled={page >= last} onClick={() => onPage(Math.min(page + 1, last))}>
         Next
       </Button>

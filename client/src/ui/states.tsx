@@ -46,15 +46,17 @@ interface FailingProps {
   readonly title: string;
   readonly error: unknown;
   readonly onRetry?: () => void;
+  /** `h1` where it stands for the whole page. */
+  readonly heading?: 'h1' | 'h2';
   readonly children?: ReactNode;
 }
 
 /** A part of a page that failed: what, why in a sentence, and a way on. */
-export function Failing({ title, error, onRetry, children }: FailingProps) {
+export function Failing({ title, error, onRetry, heading: Heading = 'h2', children }: FailingProps) {
   const gone = error instanceof ProblemError && error.status === 404;
   return (
     <section className={`${styles.state} ${styles.failing}`} role="alert">
-      <h2>{title}</h2>
+      <Heading>{title}</Heading>
       <p className={styles.cause}>{sentenceOf(error)}</p>
       <div className={styles.do}>
         {onRetry && !gone ? (
