@@ -1,9 +1,113 @@
+import { Navigate } from 'react-router-dom';
+import { exportUrl } from '../features/tunes/api/tune-list';
+import { ImportPreview } from '../features/tunes/components/import-preview';
+import { ImportProgress } from '../features/tunes/components/import-progress';
+import { useImport } from '../features/tunes/hooks/use-import';
+import { toWrite } from '../features/tunes/import-rows';
+import { count, grouped } from '../lib/format';
+import { BackLink } from '../ui/back-link';
+import { Button, LinkButton } from '../ui/button';
+import { FileField } from '../ui/file-field';
 import { Page, PageHeading } from '../ui/page';
+import { Loading } from '../ui/states';
+import { useSay } from '../ui/status';
+import styles from './import-page.module.css';
+import { useCircle } from './use-circle';
 
+/** A library from a file: chosen, looked at line by line, written. */
 export function ImportPage() {
+  const circle = useCircle();
+  const say = useSay();
+  const tunesPath = `/c/${circle.id}/tunes`;
+  const it = useImport(circle.id, ({ created, updated }) =>
+    say(`Imported: ${grouped(created)} added, ${grouped(updated)} changed.`),
+  );
+  if (!circle.may('tunes.change')) return <Navigate to={tunesPath} replace />;
+  const { preview, done, file } = it;
+  const writes = preview ? toWrite(preview) : 0;
   return (
-    <Page>
-      <PageHeading title="Import tunes" />
+    <Page narrow>
+      <BackLink to={tunesPath}>Tunes</BackLink>
+      <PageHeading
+        title="Import tunes"
+        about="Nothing is written until you have seen what will become of every line."
+      />
+      <FileField
+        label={file ? 'Choose another file' : 'Choose a file'}
+        accept=".csv,.abc"
+        file={file}
+        error={it.error}
+        onFile={it.choose}
+        hint="A .csv or .abc file in UTF-8, at most 10 MB."
+      />
+      {it.failedToWrite ? (
+        <p className={styles.after}>
+          Pegwell keeps all of a file or nothing of it. Look in the library before you try again.
+        </p>
+      ) : null}
+      {it.reading ? <Loading what="the file" /> : null}
+      {preview && !it.reading ? (
+        <section className={styles.result} aria-label={done ? 'What was imported' : 'What will become of it'}>
+          {it.progressId ? (
+            <ImportProgress circleId={circle.id} importId={it.progressId} expected={writes} />
+          ) : done ? (
+            <div className={styles.do}>
+              <p className={styles.done}>
+                {`${grouped(done.created)} added, ${grouped(done.updated)} changed, ${grouped(done.unchanged)} as they were, ${grouped(done.skipped)} left out.`}
+              </p>
+              <LinkButton to={tunesPath}>To the tunes</LinkButton>
+            </div>
+          ) : (
+            <div className={styles.do}>
+              {writes > 0 ? (
+                <Button onClick={it.write}>{`Import ${count(writes, 'tune')}`}</Button>
+              ) : (
+                <p className={styles.done}>Nothing here would change the library.</p>
+              )}
+            </div>
+          )}
+          <ImportPreview
+            key={done ? 'done' : file?.name}
+            report={done ?? preview}
+            tense={done ? 'done' : 'plan'}
+          />
+        </section>
+      ) : (
+        <Help circleId={circle.id} />
+      )}
     </Page>
+  );
+}
+
+/** What a file looks like; stands there until one is read. */
+function Help({ circleId }: { readonly circleId: string }) {
+  return (
+    <div className={styles.help}>
+      <h2>A spreadsheet, saved as CSV</h2>
+      <p>
+        One tune a row, column names in the first: <code>title</code> and <code>key</code>, and where you have
+        them <code>mode</code>, <code>rhythm</code>, <code>parts</code>, <code>composer</code>,{' '}
+        <code>source</code>, <code>notes</code>. Tunings have a column per instrument, as <code>fiddle</code>{' '}
+        or <code>banjo</code>: <code>AEAE or GDAE</code>, <code>gDGBD capo 2</code>, or <code>any</code> where
+        nobody retunes for it.
+      </p>
+      <p>
+        <a href="/example-tunes.csv" download>
+          Take an example to fill in
+        </a>
+      </p>
+      <h2>ABC notation</h2>
+      <p>
+        Titles, keys and rhythms are read from the header of each tune. Tunings stand in it as{' '}
+        <code>%%pegwell-tuning fiddle AEAE</code>.
+      </p>
+      <h2>Once more</h2>
+      <p>
+        A tune that is in the library already is changed, not doubled: it is found by its title, key and mode.
+        Empty cells leave what is there. To change many at once, take the library as{' '}
+        <a href={exportUrl(circleId, 'csv')}>CSV</a> or <a href={exportUrl(circleId, 'abc')}>ABC</a>, change
+        it and bring it back.
+      </p>
+    </div>
   );
 }

@@ -1,0 +1,43 @@
+import { useQuery } from '@tanstack/react-query';
+import { grouped } from '../../../lib/format';
+import { ProgressBar } from '../../../ui/progress-bar';
+import { getImportProgress } from '../api/import-tunes';
+
+/** Milliseconds between two looks. */
+const LOOK = 400;
+
+interface ImportProgressProps {
+  readonly circleId: string;
+  readonly importId: string;
+  /** How many tunes are to be written, as the preview had it, until the server says. */
+  readonly expected: number;
+}
+
+/** Moves with the rows that are really written. */
+export function ImportProgress({ circleId, importId, expected }: ImportProgressProps) {
+  const progress = useQuery({
+    queryKey: ['import', circleId, importId],
+    queryFn: ({ signal }) => getImportProgress(circleId, importId, signal),
+    refetchInterval: LOOK,
+    // Not there yet while the file travels; the next look asks again anyway.
+    retry: false,
+    staleTime: 0,
+  });
+  const total = progress.data?.total ?? expected;
+  const written = progress.data?.written ?? 0;
+  return (
+    <div>
+      <ProgressBar
+        label="Writing the tunes"
+        done={written}
+        total={total}
+        words={
+          progress.data ? `${grouped(written)} of ${grouped(total)} tunes written` : 'Sending the file …'
+        }
+      />
+      <p style={{ marginTop: 8, color: 'var(--ink-2)' }}>
+        You can leave this page; the import goes on. All of it is kept, or nothing.
+      </p>
+    </div>
+  );
+}

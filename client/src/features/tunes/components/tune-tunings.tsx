@@ -1,0 +1,67 @@
+import type { Tune } from '@pegwell/shared/contract/tunes';
+import { DEFERENCE, cautions } from '@pegwell/shared/music/caution';
+import type { InstrumentKind } from '@pegwell/shared/music/instrument';
+import { standardPitches } from '@pegwell/shared/music/instrument';
+import { retuneWords } from '@pegwell/shared/music/words';
+import { AcceptedText } from '../../../music/accepted-text';
+import { PegStrip } from '../../../pictures/peg-strip';
+import { kindOfTune, kindsOfTunes } from '../tune-kinds';
+import styles from './tune-tunings.module.css';
+
+/** Per instrument the tunings of a tune, and which pegs they turn from standard, with what to look out for. */
+export function TuneTunings({ tune }: { readonly tune: Tune }) {
+  const kinds = kindsOfTunes([tune]);
+  return (
+    <>
+      <ul className={styles.kinds}>
+        {kinds.map((kind) => {
+          const row = kindOfTune(tune, kind.id);
+          return row ? (
+            <li key={kind.id}>
+              <h2>
+                {kind.name}
+                {row.assumed ? <span className={styles.note}> assumed from the usual tunings</span> : null}
+              </h2>
+              {row.accepted.map((tuned, rank) => (
+                <div key={rank} className={styles.choice}>
+                  <p className={styles.letters}>
+                    {rank > 0 ? <span className={styles.or}>or </span> : null}
+                    <AcceptedText accepted={[tuned]} assumed={row.assumed} />
+                  </p>
+                  {tuned.pitches ? <FromStandard kind={kind} pitches={tuned.pitches} /> : null}
+                </div>
+              ))}
+            </li>
+          ) : null;
+        })}
+      </ul>
+      <p className={styles.defer}>{DEFERENCE}</p>
+    </>
+  );
+}
+
+interface FromStandardProps {
+  readonly kind: InstrumentKind;
+  readonly pitches: readonly string[];
+}
+
+function FromStandard({ kind, pitches }: FromStandardProps) {
+  const standard = standardPitches(kind);
+  const words = retuneWords(kind, standard, pitches);
+  const toWatch = cautions(kind, standard, pitches).filter(
+    ({ grade, twoGoes }) => grade !== 'note' || twoGoes,
+  );
+  return (
+    <>
+      <PegStrip kind={kind} from={standard} to={pitches} whenStill="pegs" wordsBeside />
+      <div>
+        <p>{words ? `From standard: ${words}` : 'Standard: nothing to turn'}</p>
+        {toWatch.map(({ courseIndex, sentence }) => (
+          <p key={courseIndex} className={styles.caution}>
+            {sentence}
+          </p>
+        ))}
+      </div>
+    </>
+  );
+}
