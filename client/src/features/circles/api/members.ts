@@ -1,0 +1,15 @@
+import type { AddMember, CircleMember } from '@pegwell/shared/contract/circles';
+import { api } from '../../../lib/api';
+
+interface Members {
+  readonly items: readonly CircleMember[];
+}
+
+export const membersKey = (circleId: string) => ['circle', circleId, 'members'] as const;
+
+export const getMembers = (circleId: string, signal?: AbortSignal) =>
+  api.get<Members>(`/circles/${circleId}/members`, signal ? { signal } : {});
+
+/** The account must exist: 422 at `email` where it does not, 409 where it is a member already. */
+export const addMember = (circleId: string, member: AddMember) =>
+  api.post<CircleMember>(`/circles/${circleId}/members`, member);

@@ -1,0 +1,32 @@
+import type { CircleMember } from '@pegwell/shared/contract/circles';
+import styles from './members.module.css';
+
+const ORDER = ['host', 'cohost', 'player'] as const;
+
+interface MemberListProps {
+  readonly members: readonly CircleMember[];
+  /** The reader's own account. */
+  readonly ownId: string | undefined;
+}
+
+/** Hosts first, then cohosts and players, each by name. E-mail addresses only where the server gives them. */
+export function MemberList({ members, ownId }: MemberListProps) {
+  const sorted = [...members].sort(
+    (a, b) =>
+      ORDER.indexOf(a.role) - ORDER.indexOf(b.role) || a.displayName.localeCompare(b.displayName, 'en'),
+  );
+  return (
+    <ul className={styles.members}>
+      {sorted.map(({ accountId, displayName, email, role }) => (
+        <li key={accountId}>
+          <span className={styles.name}>
+            <b>{displayName}</b>
+            {accountId === ownId ? ' (you)' : null}
+            {email ? <span className={styles.email}>{email}</span> : null}
+          </span>
+          <span className={styles.role}>{role}</span>
+        </li>
+      ))}
+    </ul>
+  );
+}

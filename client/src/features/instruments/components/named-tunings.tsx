@@ -1,0 +1,69 @@
+import { cautions } from '@pegwell/shared/music/caution';
+import type { InstrumentKind } from '@pegwell/shared/music/instrument';
+import { NAMED_TUNINGS, type NamedTuning } from '@pegwell/shared/music/named-tunings';
+import { showTuning } from '@pegwell/shared/music/tuning';
+import { retuneWords } from '@pegwell/shared/music/words';
+import { useMedia } from '../../../lib/use-media';
+import { PegStrip } from '../../../pictures/peg-strip';
+import { TuningText } from '../../../pictures/tuning-text';
+import styles from './named-tunings.module.css';
+
+interface NamedTuningsProps {
+  readonly kind: InstrumentKind;
+  /** How the strings stand now: every tuning is shown as the turns from there. */
+  readonly from: readonly string[];
+}
+
+/** A kind's named tunings: letters, names and keys, and which pegs lead there. */
+export function NamedTunings({ kind, from }: NamedTuningsProps) {
+  return (
+    <ul className={styles.tunings}>
+      {(NAMED_TUNINGS[kind.id] ?? []).map((named) => (
+        <li key={named.pitches.join()}>
+          <NamedTuningRow kind={kind} from={from} named={named} />
+        </li>
+      ))}
+    </ul>
+  );
+}
+
+function NamedTuningRow({ kind, from, named }: NamedTuningsProps & { readonly named: NamedTuning }) {
+  // Six doubled courses in large would not fit beside the words.
+  const wide = useMedia('(min-width: 62rem)');
+  const { pitches, names, keys, provenance } = named;
+  const words = retuneWords(kind, from, pitches);
+  const toWatch = cautions(kind, from, pitches);
+  return (
+    <>
+      <div>
+        <h3 className={styles.letters}>
+          <TuningText text={showTuning(kind, pitches)} />
+        </h3>
+        <p className={styles.names}>{names.join(', ') || 'no name of its own'}</p>
+        <p className={styles.about}>{pitches.join(' ')}</p>
+        <p className={styles.about}>
+          {keys ? `For ${keys}. ` : ''}
+          {provenance}
+        </p>
+      </div>
+      <div className={styles.strip}>
+        <PegStrip
+          kind={kind}
+          from={from}
+          to={pitches}
+          size={wide ? 'large' : 'small'}
+          whenStill="pegs"
+          wordsBeside
+        />
+      </div>
+      <div className={styles.words}>
+        <p>{words || 'Nothing to turn'}</p>
+        {toWatch.map(({ courseIndex, grade, sentence }) => (
+          <p key={courseIndex} className={grade === 'note' ? styles.about : styles.caution}>
+            {sentence}
+          </p>
+        ))}
+      </div>
+    </>
+  );
+}
