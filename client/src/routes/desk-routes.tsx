@@ -9,9 +9,13 @@ const SignInPage = lazyPage(() => import('./sign-in-page'), 'SignInPage');
 const RegisterPage = lazyPage(() => import('./register-page'), 'RegisterPage');
 const HomePage = lazyPage(() => import('./home-page'), 'HomePage');
 const EveningsPage = lazyPage(() => import('./evenings-page'), 'EveningsPage');
+const EveningNewPage = lazyPage(() => import('./evening-new-page'), 'EveningNewPage');
 const BoardPage = lazyPage(() => import('./board-page'), 'BoardPage');
 const ConsolePage = lazyPage(() => import('./console-page'), 'ConsolePage');
 const TunesPage = lazyPage(() => import('./tunes-page'), 'TunesPage');
+const TunePage = lazyPage(() => import('./tune-page'), 'TunePage');
+const TuneNewPage = lazyPage(() => import('./tune-new-page'), 'TuneNewPage');
+const TuneEditPage = lazyPage(() => import('./tune-edit-page'), 'TuneEditPage');
 const ImportPage = lazyPage(() => import('./import-page'), 'ImportPage');
 const TuningsPage = lazyPage(() => import('./tunings-page'), 'TuningsPage');
 const PeoplePage = lazyPage(() => import('./people-page'), 'PeoplePage');
@@ -29,9 +33,13 @@ export function DeskRoutes() {
           <Route path="/c/:circleId" element={<CircleLayout />}>
             <Route index element={<EveningsPage />} />
             <Route path="evenings" element={<EveningsPage />} />
+            <Route path="evenings/new" element={<EveningNewPage />} />
             <Route path="evenings/:sessionId" element={<BoardPage />} />
             <Route path="evenings/:sessionId/live" element={<ConsolePage />} />
             <Route path="tunes" element={<TunesPage />} />
+            <Route path="tunes/new" element={<TuneNewPage />} />
+            <Route path="tunes/:tuneId" element={<TunePage />} />
+            <Route path="tunes/:tuneId/edit" element={<TuneEditPage />} />
             <Route path="tunes/import" element={<ImportPage />} />
             <Route path="tunings" element={<TuningsPage />} />
             <Route path="people" element={<PeoplePage />} />

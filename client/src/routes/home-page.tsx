@@ -51,7 +51,7 @@ export function HomePage() {
           <CreateCircleForm
             onCreated={async (circle) => {
               client.setQueryData(meKey, await getMe());
-              await navigate(`/c/${circle.id}/tunes`);
+              await navigate(`/c/${circle.id}/evenings`);
             }}
           />
         </section>

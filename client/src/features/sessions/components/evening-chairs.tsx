@@ -1,4 +1,9 @@
-import { BUILT_IN_KINDS, builtInKind, standardPitches, type InstrumentKind } from '@pegwell/shared/music/instrument';
+import {
+  BUILT_IN_KINDS,
+  builtInKind,
+  standardPitches,
+  type InstrumentKind,
+} from '@pegwell/shared/music/instrument';
 import { showTuning } from '@pegwell/shared/music/tuning';
 import { useFieldArray, useWatch, type UseFormReturn } from 'react-hook-form';
 import { TuningField } from '../../../music/tuning-field';

@@ -57,11 +57,7 @@ export function EveningForm({ circleId, timeZone, onCreated, back }: EveningForm
           error={errors.time?.message}
           {...register('time', { validate: filled('Say the time.') })}
         />
-        <SelectField
-          label="By the clock of"
-          error={errors.timeZone?.message}
-          {...register('timeZone')}
-        >
+        <SelectField label="By the clock of" error={errors.timeZone?.message} {...register('timeZone')}>
           {zones.map((zone) => (
             <option key={zone} value={zone}>
               {zone.replaceAll('_', ' ')}

@@ -32,9 +32,7 @@ export function EveningRows({ circleId, evenings, timeZone, mayRun, past = false
             <Link className={styles.title} to={`/c/${circleId}/evenings/${evening.id}`}>
               {evening.title}
             </Link>
-            <p className={styles.about}>
-              {[evening.place, tunesWords(evening)].filter(Boolean).join(' · ')}
-            </p>
+            <p className={styles.about}>{[evening.place, tunesWords(evening)].filter(Boolean).join(' · ')}</p>
           </div>
           {past ? null : <Ways circleId={circleId} evening={evening} mayRun={mayRun} />}
         </li>
