@@ -19,7 +19,9 @@ function kindOf(id: string): InstrumentKind {
   return kind;
 }
 
-function read<T>(parsed: { readonly ok: true; readonly value: T } | { readonly ok: false; readonly reason: string }): T {
+function read<T>(
+  parsed: { readonly ok: true; readonly value: T } | { readonly ok: false; readonly reason: string },
+): T {
   if (!parsed.ok) throw new Error(parsed.reason);
   return parsed.value;
 }

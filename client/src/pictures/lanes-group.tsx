@@ -54,7 +54,12 @@ export function LanesGroup({ chair, row, column, top, named }: LanesGroupProps) 
       {kind.courses.flatMap((course, index) =>
         row.runs.flatMap((run) =>
           run.tunes.map((tune) => (
-            <Turn key={`${course.ordinal} ${tune.id}`} {...{ chair, run, tune }} course={index} ground={groundOf(index)} />
+            <Turn
+              key={`${course.ordinal} ${tune.id}`}
+              {...{ chair, run, tune }}
+              course={index}
+              ground={groundOf(index)}
+            />
           )),
         ),
       )}

@@ -53,7 +53,8 @@ describe('layoutLanes', () => {
 
 describe('lanePath', () => {
   const ground = { y: 100, between: 25 };
-  const rowOf = (evening: ReturnType<typeof pictured>) => layoutLanes(evening.sets, evening.places, 200).rows[0]!;
+  const rowOf = (evening: ReturnType<typeof pictured>) =>
+    layoutLanes(evening.sets, evening.places, 200).rows[0]!;
 
   // 2 semitones at 0.12 of 25 px each: 6 px.
   it('steps up by the semitones turned, where the tune begins', () => {
@@ -74,7 +75,9 @@ describe('lanePath', () => {
   it('draws nothing while a kind is free', () => {
     const evening = pictured({ fiddle: 1 }, [['any', 'AEAE']], { fiddle: null });
     const row = rowOf(evening);
-    expect(lanePath(row, 50, evening.chairs[0]!, 0, ground)).toMatch(new RegExp(`^M${row.runs[0]!.tunes[1]!.x} `));
+    expect(lanePath(row, 50, evening.chairs[0]!, 0, ground)).toMatch(
+      new RegExp(`^M${row.runs[0]!.tunes[1]!.x} `),
+    );
   });
 
   it('never lifts a lane into the next one', () => {

@@ -39,7 +39,12 @@ export function LanesRow({ row, column, width, chairs, named, highlight }: Lanes
   const groups = stack(chairs, row, named);
   const bottom = groups.at(-1)?.bottom ?? STOPS;
   return (
-    <svg width={width} height={bottom + NUMBERS} viewBox={`0 0 ${width} ${bottom + NUMBERS}`} aria-hidden="true">
+    <svg
+      width={width}
+      height={bottom + NUMBERS}
+      viewBox={`0 0 ${width} ${bottom + NUMBERS}`}
+      aria-hidden="true"
+    >
       {row.runs.flatMap((run) =>
         run.tunes.map((tune) => (
           <g key={tune.id}>
@@ -81,9 +86,7 @@ export function LanesRow({ row, column, width, chairs, named, highlight }: Lanes
       {row.runs.flatMap((run) =>
         run.tunes
           .filter((tune) => tune.place.pegChanges > 0)
-          .map((tune) => (
-            <Stop key={tune.id} x={stopX(run, tune)} place={tune.place} groups={groups} />
-          )),
+          .map((tune) => <Stop key={tune.id} x={stopX(run, tune)} place={tune.place} groups={groups} />),
       )}
       {groups.slice(1).map(({ top }) => (
         <line key={top} x1={NAMES} x2={row.end} y1={top + 1} y2={top + 1} stroke="var(--line)" />
@@ -110,7 +113,9 @@ function Stop({ x, place, groups }: StopProps) {
   const turning = groups.filter(({ chair }) => (moveOf(place, chair.kind.id)?.pegChanges ?? 0) > 0);
   return (
     <g>
-      {offClock ? null : <line className={styles.stem} x1={x} x2={x} y1={STOPS - 2} y2={foot} />}
+      {offClock || turning.length === groups.length ? null : (
+        <line className={styles.stem} x1={x} x2={x} y1={STOPS - 2} y2={foot} />
+      )}
       {offClock
         ? null
         : turning.map(({ chair, top, bottom }) => (

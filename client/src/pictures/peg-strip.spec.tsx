@@ -50,7 +50,9 @@ describe('PegStrip', () => {
 
   it('draws both pegs of a doubled course', () => {
     const { container } = strip('mandolin', 'GDAE', 'GDAD');
-    const heads = columns(container).map((column) => column.querySelectorAll('svg[viewBox="0 0 24 31"]').length);
+    const heads = columns(container).map(
+      (column) => column.querySelectorAll('svg[viewBox="0 0 24 31"]').length,
+    );
     expect(heads).toEqual([2, 2, 2, 2]);
   });
 

@@ -5,7 +5,11 @@ import { pictured } from './lanes-fixtures';
 import { StringLanes } from './string-lanes';
 
 /** score.md, worked example 2: five fiddles, sets of 3 and 2. */
-const example2 = () => pictured({ fiddle: 5 }, [['GDAE', 'GDAE', 'ADAE'], ['AEAE', 'AEAE']]);
+const example2 = () =>
+  pictured({ fiddle: 5 }, [
+    ['GDAE', 'GDAE', 'ADAE'],
+    ['AEAE', 'AEAE'],
+  ]);
 
 const prices = (container: HTMLElement, kind: 'stopPrice' | 'offPrice') =>
   [...container.querySelectorAll(`text[class*=${kind}]`)].map((text) => text.textContent);
@@ -23,7 +27,9 @@ describe('StringLanes', () => {
 
   it('marks each turned string with a direction and a number', () => {
     const { container } = render(<StringLanes {...pictured({ fiddle: 1 }, [['GDAE', 'AEAC#', 'GDAE']])} />);
-    const turns = [...container.querySelectorAll('[data-turn]')].map((mark) => mark.getAttribute('data-turn'));
+    const turns = [...container.querySelectorAll('[data-turn]')].map((mark) =>
+      mark.getAttribute('data-turn'),
+    );
     expect(turns).toEqual(['2', '-2', '2', '-2', '-3', '3']);
   });
 

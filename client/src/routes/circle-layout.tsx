@@ -18,6 +18,7 @@ export function CircleLayout() {
       {circle.isError ? (
         <Failing
           title="This circle cannot be shown"
+          heading="h1"
           error={circle.error}
           onRetry={() => void circle.refetch()}
         >

@@ -15,7 +15,12 @@ export function SignedInLayout() {
   return (
     <Page narrow>
       {me.isError ? (
-        <Failing title="Pegwell did not answer" error={me.error} onRetry={() => void me.refetch()} />
+        <Failing
+          heading="h1"
+          title="Pegwell did not answer"
+          error={me.error}
+          onRetry={() => void me.refetch()}
+        />
       ) : (
         <Loading what="your circles" />
       )}

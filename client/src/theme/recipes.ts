@@ -141,7 +141,7 @@ const menu = defineSlotRecipe({
       '&[data-disabled]': { color: 'ink2', cursor: 'default', fontWeight: 'normal' },
     },
     itemGroupLabel: { paddingInline: '3.5', paddingTop: '2', color: 'ink2', fontSize: 'sm' },
-    separator: { height: '1px', background: 'line', marginBlock: '1' },
+    separator: { height: '1px', border: 0, background: 'line', marginBlock: '1' },
   },
 });
 

@@ -1,6 +1,6 @@
 import { ChakraProvider } from '@chakra-ui/react';
 import { render, screen } from '@testing-library/react';
-import type { FormEvent, ReactNode } from 'react';
+import type { ReactNode, SyntheticEvent } from 'react';
 import userEvent from '@testing-library/user-event';
 import { describe, expect, it, vi } from 'vitest';
 import { system } from '../theme/system';
@@ -47,8 +47,9 @@ describe('ActionMenu', () => {
     await userEvent.keyboard('{Enter}');
     await screen.findByRole('menuitem', { name: 'Pin here' });
     expect(screen.getByRole('menuitem', { name: 'Earlier' }).getAttribute('aria-disabled')).toBe('true');
-    await userEvent.keyboard('{ArrowDown}{Enter}');
-    expect([pin.mock.calls.length, later.mock.calls.length].sort()).toEqual([0, 1]);
+    await userEvent.keyboard('{End}{Enter}');
+    expect(pin).toHaveBeenCalledOnce();
+    expect(later).not.toHaveBeenCalled();
   });
 });
 
@@ -91,7 +92,7 @@ describe('Button', () => {
   });
 
   it('says what runs, and sends a form only once', async () => {
-    const onSubmit = vi.fn((event: FormEvent) => event.preventDefault());
+    const onSubmit = vi.fn((event: SyntheticEvent) => event.preventDefault());
     render(
       <form onSubmit={onSubmit}>
         <Button type="submit" busy="Saving">
