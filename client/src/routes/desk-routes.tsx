@@ -1,4 +1,4 @@
-import { Route, Routes } from 'react-router-dom';
+import { Navigate, Route, Routes } from 'react-router-dom';
 import { lazyPage } from '../lib/lazy-page';
 import { CircleLayout } from './circle-layout';
 import { DeskLayout } from './desk-layout';
@@ -31,7 +31,7 @@ export function DeskRoutes() {
         <Route element={<SignedInLayout />}>
           <Route path="/" element={<HomePage />} />
           <Route path="/c/:circleId" element={<CircleLayout />}>
-            <Route index element={<EveningsPage />} />
+            <Route index element={<Navigate to="evenings" replace />} />
             <Route path="evenings" element={<EveningsPage />} />
             <Route path="evenings/new" element={<EveningNewPage />} />
             <Route path="evenings/:sessionId" element={<BoardPage />} />
