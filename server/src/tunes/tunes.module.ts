@@ -1,5 +1,9 @@
 import { Module } from '@nestjs/common';
 import { CirclesModule } from '../circles/circles.module';
+import { ExportService } from './files/export.service';
+import { ImportProgressRepository } from './files/import-progress.repository';
+import { ImportService } from './files/import.service';
+import { TuneFilesController } from './files/tune-files.controller';
 import { PlayableRepository } from './playable.repository';
 import { PlayableService } from './playable.service';
 import { TuneWritesRepository } from './tune-writes.repository';
@@ -9,8 +13,18 @@ import { TunesService } from './tunes.service';
 
 @Module({
   imports: [CirclesModule],
-  controllers: [TunesController],
-  providers: [PlayableRepository, PlayableService, TunesRepository, TuneWritesRepository, TunesService],
-  exports: [PlayableService, TunesService],
+  // Files first: `export` is not the id of a tune.
+  controllers: [TuneFilesController, TunesController],
+  providers: [
+    ExportService,
+    ImportProgressRepository,
+    ImportService,
+    PlayableRepository,
+    PlayableService,
+    TuneWritesRepository,
+    TunesRepository,
+    TunesService,
+  ],
+  exports: [ImportService, PlayableService, TunesService],
 })
 export class TunesModule {}

@@ -1,0 +1,175 @@
+import { readAbc } from './read-abc';
+import type { TuneFile } from './file-tune';
+
+const read = (...lines: string[]): TuneFile => readAbc(lines.join('\n'), 1_000);
+const words = (...lines: string[]) => read(...lines).tunes.map((tune) => tune.words);
+
+// The header rules of ABC 2.1 (C. Walshaw, 2011), section by section. Tunes are invented.
+describe('readAbc', () => {
+  it('reads a tune header: X first, T next, K last (2.1 section 2.2.1)', () => {
+    const [tune] = read(
+      'X:1',
+      'T:Lantern Hill',
+      'C:Trad.',
+      'S:a field recording',
+      'R:breakdown',
+      'P:AABB',
+      'N:crooked B part',
+      'M:C|',
+      'L:1/8',
+      'K:Amix',
+      'A2 B2 | c4 |]',
+      '%%pegwell-tuning fiddle AEAE or GDAE',
+    ).tunes;
+    expect(tune).toMatchObject({
+      ...{ line: 1, title: 'Lantern Hill', keyLine: 10, id: null, problems: [] },
+      words: {
+        ...{ title: 'Lantern Hill', key: 'A', mode: 'mixolydian', rhythm: 'breakdown', parts: 'AABB' },
+        ...{ composer: 'Trad.', source: 'a field recording', notes: 'crooked B part' },
+      },
+      stated: {
+        fiddle: [
+          { pitches: ['A3', 'E4', 'A4', 'E5'], capo: 0 },
+          { pitches: ['G3', 'D4', 'A4', 'E5'], capo: 0 },
+        ],
+      },
+    });
+  });
+
+  it('ends a tune at an empty line, and passes over free text between tunes (2.2)', () => {
+    expect(
+      words(
+        'X:1',
+        'T:One',
+        'K:A',
+        'abc',
+        '',
+        'Some words about them: free text.',
+        'R:jig',
+        '',
+        'X:2',
+        'T:Two',
+        'K:D',
+      ),
+    ).toEqual([
+      { title: 'One', key: 'A', mode: 'major' },
+      { title: 'Two', key: 'D', mode: 'major' },
+    ]);
+  });
+
+  it('reads header fields only up to K: (2.2.1); what stands in the music says nothing of the tune', () => {
+    expect(words('X:1', 'T:One', 'K:G', 'abc|', 'P:B', 'T:Second strain', 'R:jig', 'K:D', 'def|')).toEqual([
+      { title: 'One', key: 'G', mode: 'major' },
+    ]);
+  });
+
+  it('takes defaults from a file header; a tune has the last word (2.2.2)', () => {
+    const lines = ['%abc-2.1', 'R:reel', 'C:trad', '%%pegwell-tuning fiddle GDAE', ''];
+    const { tunes } = read(...lines, 'X:1', 'T:One', 'K:A', '', 'X:2', 'T:Two', 'R:jig', 'K:A');
+    expect(tunes.map((tune) => tune.words)).toMatchObject([
+      { title: 'One', rhythm: 'reel', composer: 'trad' },
+      { title: 'Two', rhythm: 'jig', composer: 'trad' },
+    ]);
+    expect(Object.keys(tunes[1]!.stated)).toEqual(['fiddle']);
+  });
+
+  it('keeps other titles and the group in the notes (3.1.2: a tune may have several T:)', () => {
+    const [tune] = words('X:1', 'T:First', 'T:Second', 'T:Third', 'N:crooked', 'G:cross tuned', 'K:A');
+    expect(tune).toMatchObject({
+      title: 'First',
+      notes: 'crooked\nAlso: Second\nAlso: Third\nGroup: cross tuned',
+    });
+  });
+
+  it('strips comments, and keeps an escaped percent sign (2.3, and 8.2 for the escape)', () => {
+    expect(words('X:1 % number', 'T:Fifty \\% Off % a joke', '% T:not this', 'K:A % key', 'R:reel')).toEqual([
+      { title: 'Fifty % Off', key: 'A', mode: 'major' },
+    ]);
+  });
+
+  it('joins continued fields (3.3)', () => {
+    expect(
+      words('X:1', 'T:A Very', '+:Long Title', 'N:one', '% between', '+:two', 'N:three', 'K:A'),
+    ).toMatchObject([{ title: 'A Very Long Title', notes: 'one two\nthree' }]);
+  });
+
+  it('reads the accents of text strings (8.2)', () => {
+    expect(words('X:1', "T:Mn\\'a &amp; Se\\'an", 'K:A')[0]!.title).toBe('Mná & Seán');
+  });
+
+  it.each(['\n', '\r\n', '\r'])('takes %j for a line end, and counts lines by it', (end) => {
+    const text = ['%abc', '', 'X:1', 'T:One', 'K:A', '', 'X:2', 'T:Two', 'K:A'].join(end);
+    expect(readAbc(text, 10).tunes.map(({ line }) => line)).toEqual([3, 7]);
+  });
+
+  it('begins a tune at X: also where the empty line was forgotten, and takes a header without X: for a tune', () => {
+    expect(words('X:1', 'T:One', 'K:A', 'X:2', 'T:Two', 'K:A').map(({ title }) => title)).toEqual([
+      'One',
+      'Two',
+    ]);
+    expect(words('T:One', 'K:A', '', 'T:Two', 'K:A').map(({ title }) => title)).toEqual(['One', 'Two']);
+  });
+
+  it('never executes a directive: what is not its own is passed over (11)', () => {
+    expect(read('X:1', 'T:One', '%%abc-include /etc/passwd', 'I:linebreak $', 'K:A').tunes).toMatchObject([
+      { title: 'One', problems: [] },
+    ]);
+  });
+
+  it('reads its own directives, as %% and as I: (11: they are the same), also behind the key', () => {
+    const [tune] = read(
+      'X:1',
+      'T:One',
+      '%%pegwell-id 6c1c9a2e-5a39-4e0e-8b0a-7f5f0d3b8a11',
+      '%%pegwell-mode modal',
+      'K:Amix',
+      'I:pegwell-tuning banjo gDGCD capo 2 % as usual',
+      '%%pegwell-tuning Tenor-Banjo any',
+    ).tunes;
+    expect(tune).toMatchObject({
+      id: '6c1c9a2e-5a39-4e0e-8b0a-7f5f0d3b8a11',
+      words: { key: 'A', mode: 'modal' },
+      stated: { banjo: [{ pitches: ['G4', 'D3', 'G3', 'C4', 'D4'], capo: 2 }], 'tenor-banjo': 'any' },
+      problems: [],
+    });
+  });
+
+  it('names what is wrong at its line, and reads the rest', () => {
+    const { tunes } = read(
+      'X:1',
+      'T:Bad',
+      '%%pegwell-tuning fiddle GDA',
+      '%%pegwell-tuning kazoo CCC',
+      'K:A',
+      '',
+      'X:2',
+      'T:Good',
+      'K:A',
+    );
+    expect(tunes[0]!.problems).toEqual([
+      { line: 3, message: 'A fiddle has 4 strings; GDA names 3: G D A.' },
+      { line: 4, message: 'kazoo is no instrument that Pegwell knows.' },
+    ]);
+    expect(tunes[1]!.problems).toEqual([]);
+  });
+
+  it('says where K: was when it names no key', () => {
+    expect(read('X:1', 'T:Drums', 'K:none').tunes[0]).toMatchObject({
+      keyLine: 3,
+      words: { title: 'Drums' },
+    });
+    expect(read('', 'X:1', 'T:No end').tunes[0]).toMatchObject({ line: 2, keyLine: 2 });
+  });
+
+  it('says so when a file holds no tune; an exported empty library is none to complain of', () => {
+    expect(read('just words').problems).toEqual([
+      { line: 1, message: 'No tune was found: a tune begins with a line X:1.' },
+    ]);
+    expect(read('%abc-2.1', '').problems).toEqual([]);
+  });
+
+  it('stops behind the limit', () => {
+    const text = 'X:1\nT:a\nK:A\n\n'.repeat(50);
+    expect(readAbc(text, 10).tunes).toHaveLength(11);
+  });
+});
