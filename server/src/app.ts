@@ -1,7 +1,9 @@
 import { RequestMethod, type Type } from '@nestjs/common';
 import { NestFactory } from '@nestjs/core';
 import type { NestExpressApplication } from '@nestjs/platform-express';
+import compression from 'compression';
 import cookieParser from 'cookie-parser';
+import type { NextFunction, Request, Response } from 'express';
 import helmet from 'helmet';
 import { Logger } from 'nestjs-pino';
 import { AppModule } from './app.module';
@@ -23,12 +25,20 @@ export async function createApp(env: Env, controllers: Type[] = []): Promise<Nes
   app.disable('x-powered-by');
   app.set('etag', false);
   app.use(helmet(headers(env)));
-  app.use('/api', ownOrigin(env.PEGWELL_URL), cookieParser(), readBody);
+  // A hall has poor signal: pages and answers go out compressed.
+  app.use(compression());
+  app.use('/api', keepPrivate, ownOrigin(env.PEGWELL_URL), cookieParser(), readBody);
   app.setGlobalPrefix('api', { exclude: [{ path: '/', method: RequestMethod.GET }] });
   serveOpenApi(app);
   servePages(app);
   app.enableShutdownHooks();
   return app;
+}
+
+/** Answers are for whoever asked and for now; a route that knows better says so itself. */
+function keepPrivate(_request: Request, response: Response, next: NextFunction): void {
+  response.set('Cache-Control', 'no-store');
+  next();
 }
 
 /** Nothing loads from another host, and no script stands in a page. Emotion writes its styles into the page. */

@@ -13,14 +13,16 @@ const PAGES = join(__dirname, '../../client/dist');
 export function servePages(app: NestExpressApplication): void {
   const index = join(PAGES, 'index.html');
   if (!existsSync(index)) return;
-  app.use(
-    '/assets',
-    express.static(join(PAGES, 'assets'), { immutable: true, maxAge: '365d', fallthrough: false }),
-  );
+  app.use('/assets', express.static(join(PAGES, 'assets'), { immutable: true, maxAge: '365d' }), notThere);
   app.use(express.static(PAGES, { index: false, maxAge: 0 }));
   app.use((request: Request, response: Response, next: NextFunction) => {
     if (request.method !== 'GET' && request.method !== 'HEAD') return next();
     if (request.path === '/api' || request.path.startsWith('/api/')) return next();
     response.set('Cache-Control', 'no-cache').sendFile(index);
   });
+}
+
+/** A file of an older build: the browser should ask for the page again, not be given it as a script. */
+function notThere(_request: Request, response: Response): void {
+  response.status(404).type('text/plain').send('Not here.');
 }
