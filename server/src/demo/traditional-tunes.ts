@@ -1,0 +1,57 @@
+import type { TuneRow } from './tune-row';
+
+/** Old tunes that anybody may play, in tunings that players commonly take for them. */
+export const COMMON_SOURCE = 'Traditional. Tunings: common practice.';
+export const COMMON: readonly TuneRow[] = [
+  ['Angeline the Baker', 'D', 'reel', 'AABB', 'ADAE or GDAE', 'gCGCD capo 2'],
+  ['Arkansas Traveler', 'D', 'reel', 'AABB', 'GDAE or ADAE', 'gCGCD capo 2'],
+  ['Big Sciota', 'G', 'reel', 'AABB', 'GDAE', 'gDGBD'],
+  ['Billy in the Lowground', 'C', 'reel', 'AABB', 'GDAE', 'gCGBD or gCGCD'],
+  ['Black Mountain Rag', 'A', 'rag', 'AABBCC', 'AEAC#', 'gDGBD capo 2'],
+  ['Bonaparte Crossing the Rhine', 'D', 'march', 'AABB', 'GDAE', 'gCGCD capo 2'],
+  ['Bonaparte’s Retreat', 'D', 'march', 'AABB', 'DDAD', 'f#DF#AD or gCGCD capo 2', 'Let the low D drone.'],
+  ['Breaking Up Christmas', 'A', 'breakdown', 'AABB', 'AEAE', 'gDGBD capo 2'],
+  ['Cluck Old Hen', 'A modal', 'breakdown', 'AABB', 'AEAE or GDAE', 'gDGCD capo 2'],
+  ['Cold Frosty Morning', 'A dorian', 'reel', 'AABB', 'AEAE or GDAE', 'gDGCD capo 2'],
+  ['Cripple Creek', 'A', 'breakdown', 'AABB', 'AEAE or GDAE', 'gDGBD capo 2'],
+  ['Ducks on the Millpond', 'A modal', 'breakdown', 'AABB', 'AEAE', 'gDGCD capo 2'],
+  ['Elzic’s Farewell', 'A dorian', 'reel', 'AABB', 'AEAE or GDAE', 'gDGCD capo 2'],
+  ['Fisher’s Hornpipe', 'D', 'hornpipe', 'AABB', '', ''],
+  ['Forked Deer', 'D', 'reel', 'AABB', 'GDAE', 'gCGCD capo 2'],
+  ['Haste to the Wedding', 'D', 'jig', 'AABB', 'GDAE', 'any'],
+  ['Irish Washerwoman', 'G', 'jig', 'AABB', '', 'any'],
+  ['June Apple', 'A mixolydian', 'reel', 'AABB', 'AEAE or GDAE', 'gDGBD capo 2'],
+  ['Kitchen Girl', 'A mixolydian', 'reel', 'AABB', 'AEAE or GDAE', 'gDGCD capo 2'],
+  ['Leather Britches', 'G', 'reel', 'AABB', 'GDAE', 'gDGBD'],
+  ['Liberty', 'D', 'reel', 'AABB', 'GDAE or ADAE', 'gCGCD capo 2'],
+  ['Midnight on the Water', 'D', 'waltz', 'AABB', 'DDAD', 'gCGCD capo 2'],
+  ['Mississippi Sawyer', 'D', 'reel', 'AABB', 'ADAE or GDAE', 'gCGCD capo 2'],
+  ['Old Joe Clark', 'A mixolydian', 'breakdown', 'AABB', 'AEAE or GDAE', 'gDGBD capo 2'],
+  ['Over the Waterfall', 'D', 'reel', 'AABB', '', ''],
+  ['Red-Haired Boy', 'A mixolydian', 'reel', 'AABB', '', ''],
+  ['Rickett’s Hornpipe', 'D', 'hornpipe', 'AABB', '', ''],
+  ['Sandy River Belle', 'G', 'reel', 'AABB', 'GDAE', 'gDGBD'],
+  ['Seneca Square Dance', 'G', 'reel', 'AABB', 'GDAE', 'gDGBD'],
+  ['Soldier’s Joy', 'D', 'reel', 'AABB', 'GDAE or ADAE', 'gCGCD capo 2'],
+  ['Swallowtail Jig', 'E dorian', 'jig', 'AABB', 'GDAE', 'any'],
+  ['Turkey in the Straw', 'G', 'reel', 'AABB', '', ''],
+  ['Whiskey Before Breakfast', 'D', 'reel', 'AABB', 'GDAE', 'gCGCD capo 2'],
+];
+
+export const MEMORY_SOURCE = 'Traditional. Tunings: from memory.';
+export const FROM_MEMORY: readonly TuneRow[] = [
+  ['Calico', 'A', 'breakdown', 'AABB', 'AEAC#', 'gDGBD capo 2'],
+  ['Cumberland Gap', 'G', 'breakdown', 'AABB', 'GDGD or GDAE', 'gDGBD'],
+  ['Drunken Hiccups', 'A', 'waltz', 'AABBCC', 'AEAC#', 'gDGBD capo 2'],
+  ['Glory in the Meeting House', 'E modal', 'breakdown', 'AABB', 'EDAE', 'any'],
+  ['Hangman’s Reel', 'A', 'reel', 'AABBCC', 'AEAC#', 'gDGBD capo 2'],
+  ['Needlecase', 'D', 'reel', 'AABB', 'ADAE', 'gCGCD capo 2'],
+  ['Pretty Polly', 'G modal', 'song', 'A', 'GDGD', 'gDGCD'],
+  ['Reuben’s Train', 'D', 'breakdown', 'AB', 'DDAD or ADAE', 'f#DF#AD'],
+  ['Rochester Schottische', 'G', 'schottische', 'AABB', '', ''],
+  ['Rock the Cradle Joe', 'D', 'reel', 'AABB', 'ADAE', 'gCGCD capo 2'],
+  ['Sally in the Green Corn', 'G', 'reel', 'AABB', 'GDGD', 'gDGBD'],
+  ['Shove the Pig’s Foot a Little Further in the Fire', 'G', 'reel', 'AABB', 'GDAE', 'gDGBD'],
+  ['Spotted Pony', 'D', 'reel', 'AABB', 'ADAE or GDAE', 'gCGCD capo 2'],
+  ['Tombigbee Waltz', 'G', 'waltz', 'AABB', 'GDAE', 'gDGBD'],
+];
