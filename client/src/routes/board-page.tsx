@@ -1,9 +1,73 @@
-import { Page, PageHeading } from '../ui/page';
+import type { Session, UpdateSession } from '@pegwell/shared/contract/sessions';
+import { useQuery, useQueryClient } from '@tanstack/react-query';
+import { useParams, useSearchParams } from 'react-router-dom';
+import { useMe } from '../features/accounts/hooks/use-me';
+import { getSession, sessionKey, updateSession } from '../features/sessions/api/session';
+import { Board } from '../features/sessions/components/board';
+import { useBoard } from '../features/sessions/hooks/use-board';
+import { sentenceOf } from '../lib/problem';
+import { LinkButton } from '../ui/button';
+import { Page } from '../ui/page';
+import { Failing, Loading } from '../ui/states';
+import { useSay } from '../ui/status';
+import { useAssumedFor } from './use-assumed-for';
 
+/** Milliseconds between two looks at what the other hosts do, while the page is seen. */
+const LOOK = 5_000;
+
+/** One evening: built by a host, read by a player. */
 export function BoardPage() {
+  const { sessionId = '' } = useParams();
+  const accountId = useMe().data?.user.id;
+  const session = useQuery({
+    queryKey: sessionKey(sessionId),
+    queryFn: ({ signal }) => getSession(sessionId, signal),
+    refetchInterval: LOOK,
+    staleTime: 0,
+  });
   return (
     <Page>
-      <PageHeading title="Evening" />
+      {session.data && accountId ? (
+        <Evening key={sessionId} session={session.data} accountId={accountId} />
+      ) : session.isError ? (
+        <Failing
+          title="This evening cannot be shown"
+          error={session.error}
+          onRetry={() => void session.refetch()}
+        >
+          <LinkButton to="../evenings" look="outline">
+            To the evenings
+          </LinkButton>
+        </Failing>
+      ) : (
+        <Loading what="the evening" />
+      )}
     </Page>
+  );
+}
+
+function Evening({ session, accountId }: { readonly session: Session; readonly accountId: string }) {
+  const held = useBoard(session, accountId);
+  const queries = useQueryClient();
+  const assumedFor = useAssumedFor(session.circleId);
+  const say = useSay();
+  const [, setSearch] = useSearchParams();
+  const mayChange = session.can.includes('sessions.change') && session.status !== 'finished';
+
+  const update = async (changes: UpdateSession) => {
+    const changed = await updateSession(session.id, changes);
+    queries.setQueryData(sessionKey(session.id), changed);
+    held.receive(changed);
+  };
+
+  return (
+    <Board
+      held={held}
+      mayChange={mayChange}
+      assumedFor={assumedFor}
+      onUpdate={update}
+      onGoal={(goal) => void update({ goal }).catch((error: unknown) => say(sentenceOf(error)))}
+      onSuggest={() => setSearch({ suggest: '' })}
+    />
   );
 }

@@ -7,7 +7,11 @@ import { BoardServer, shownEntry, sessionOf, uuid } from './board-fixtures';
 import { BoardStore } from './board-store';
 import { browserStorage } from './pending-storage';
 
-const [one, two, three] = [shownEntry(1, 'Stone Weir'), shownEntry(2, 'Slack Tide'), shownEntry(3, 'Lantern Hill')];
+const [one, two, three] = [
+  shownEntry(1, 'Stone Weir'),
+  shownEntry(2, 'Slack Tide'),
+  shownEntry(3, 'Lantern Hill'),
+];
 const added = shownEntry(9, 'Grey Owl', { fiddle: 'GDAD' });
 const theirs = shownEntry(8, 'June Apple', { fiddle: 'AEAE' });
 const SET = uuid(800);

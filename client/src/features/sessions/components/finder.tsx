@@ -1,0 +1,109 @@
+import type { Tune } from '@pegwell/shared/contract/tunes';
+import { useInfiniteQuery } from '@tanstack/react-query';
+import { useMemo, useRef, useState } from 'react';
+import { ProblemError } from '../../../lib/problem';
+import { useDebounced } from '../../../lib/use-debounced';
+import { Button } from '../../../ui/button';
+import { TextField } from '../../../ui/fields';
+import { Failing, Loading } from '../../../ui/states';
+import { FINDER_PAGE, findTunes, finderKey } from '../api/finder-tunes';
+import { usePrices } from '../hooks/use-prices';
+import type { ScoredBoard } from '../hooks/use-scored';
+import { FinderFilters, type FinderFilter } from './finder-filters';
+import { FinderRow, type FinderRowProps } from './finder-row';
+import styles from './finder.module.css';
+
+interface FinderProps extends Pick<FinderRowProps, 'board' | 'nowEntryId' | 'onAdd' | 'draggable'> {
+  readonly circleId: string;
+  /** The board as it stands; prices are what one more tune adds to it. */
+  readonly scored: ScoredBoard;
+  /** How many tunes at the head of the scored evening keep their place. */
+  readonly fixed: number;
+  readonly kinds: readonly string[];
+}
+
+const NO_FILTER: FinderFilter = { key: '', kind: 'fiddle', tuning: '' };
+
+/** The circle's tunes, each with what it would cost at its cheapest place. */
+export function Finder({ circleId, scored, fixed, kinds, ...row }: FinderProps) {
+  const [search, setSearch] = useState('');
+  const [filter, setFilter] = useState<FinderFilter>({ ...NO_FILTER, kind: kinds[0] ?? 'fiddle' });
+  const asked = {
+    search: useDebounced(search.trim(), 200),
+    ...filter,
+    tuning: useDebounced(filter.tuning.trim(), 400),
+  };
+  const found = useInfiniteQuery({
+    queryKey: finderKey(circleId, asked),
+    queryFn: ({ pageParam, signal }) => findTunes(circleId, asked, pageParam, signal),
+    initialPageParam: 1,
+    getNextPageParam: ({ page, total }) => (page * FINDER_PAGE < total ? page + 1 : undefined),
+    placeholderData: (before) => before,
+  });
+  const tunes = useMemo<readonly Tune[]>(
+    () => found.data?.pages.flatMap(({ items }) => items) ?? [],
+    [found.data],
+  );
+  const prices = usePrices(scored, tunes, fixed);
+  const total = found.data?.pages[0]?.total ?? 0;
+  const list = useRef<HTMLOListElement>(null);
+  const refused = tuningProblem(found.error);
+  const narrowed = asked.search !== '' || asked.key !== '' || asked.tuning !== '';
+
+  return (
+    <div className={styles.finder}>
+      <div role="search">
+        <TextField
+          id="finder-search"
+          type="search"
+          label="Find a tune"
+          hideLabel
+          placeholder="Title"
+          autoComplete="off"
+          value={search}
+          onChange={(event) => setSearch(event.target.value)}
+        />
+        <FinderFilters filter={filter} onFilter={setFilter} kinds={kinds} problem={refused} />
+      </div>
+      <p className="visually-hidden" role="status">
+        {found.isSuccess ? `${total} found` : ''}
+      </p>
+      {found.isError && !refused ? (
+        <Failing
+          title="The tunes could not be loaded"
+          error={found.error}
+          onRetry={() => void found.refetch()}
+        />
+      ) : null}
+      {found.isPending ? <Loading what="the tunes" /> : null}
+      {found.isSuccess && total === 0 ? (
+        <p className={styles.none}>
+          {narrowed
+            ? 'No tune fits. Look for less.'
+            : 'This circle has no tunes yet. Add or import some under Tunes.'}
+        </p>
+      ) : null}
+      <ol className={styles.list} ref={list}>
+        {tunes.map((tune) => (
+          <FinderRow key={tune.id} tune={tune} price={prices.get(tune.id)} kinds={kinds} {...row} />
+        ))}
+      </ol>
+      {found.hasNextPage ? (
+        <Button
+          look="plain"
+          wide
+          busy={found.isFetchingNextPage && 'Loading'}
+          onClick={() => void found.fetchNextPage()}
+        >
+          Show more of {total}
+        </Button>
+      ) : null}
+    </div>
+  );
+}
+
+/** The sentence that refuses the tuning that is looked for. */
+function tuningProblem(error: unknown): string | undefined {
+  if (!(error instanceof ProblemError)) return undefined;
+  return error.errors.find(({ path }) => path === 'tuning')?.message;
+}

@@ -1,0 +1,17 @@
+import { createContext, useContext } from 'react';
+import type { SlotData } from '../hooks/drag-slots';
+
+interface Held {
+  /** The entry in the hand; null when nothing is. */
+  readonly heldId: string | null;
+  readonly target: Pick<SlotData, 'setId' | 'index'> | null;
+  /** What the evening would cost: "45 pegs, 5 fewer". */
+  readonly promise: string;
+}
+
+const NOTHING: Held = { heldId: null, target: null, promise: '' };
+
+export const HeldContext = createContext<Held>(NOTHING);
+
+/** What is being dragged, for the slots under it. */
+export const useHeld = (): Held => useContext(HeldContext);
