@@ -221,4 +221,15 @@ describe('an evening and its board', () => {
     expect((body as { items: unknown[] }).items).toHaveLength(2);
     await host.caller.get(`/api/circles/${circle.id}/sessions?pageSize=201`).expect(400);
   });
+
+  it('says in the list how many tunes and sets stand on each board', async () => {
+    const session = await buildSession(host, circle.id, { title: 'Counted', startsAt: '2031-05-01T20:00' });
+    const sets = [{ entries: entries(0, 1, 2) }, { entries: entries(3) }];
+    const saved = (await put(session, { version: 1, sets })).body as Session;
+    const shorter = saved.sets.map(({ id, entries: [first] }) => ({ id, entries: [{ id: first?.id }] }));
+    await put(session, { version: 2, sets: shorter });
+    const { body } = await host.caller.get(`/api/circles/${circle.id}/sessions`).expect(200);
+    const listed = (body as { items: { id: string }[] }).items.find(({ id }) => id === session.id);
+    expect(listed).toMatchObject({ title: 'Counted', tunes: 2, sets: 2 });
+  });
 });

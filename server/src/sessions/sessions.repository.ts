@@ -57,13 +57,14 @@ export class SessionsRepository {
   async page(db: Database, circleId: string, { page, pageSize }: PageQuery) {
     const mine = and(eq(sessions.circleId, circleId), isNull(sessions.removedAt));
     const [total] = await db.select({ count: count() }).from(sessions).where(mine);
+    // A condition of its own keeps its columns' tables; bare in the template they would lose them.
+    const standing = (table: typeof entries | typeof sessionSets) =>
+      and(eq(table.sessionId, sessions.id), isNull(table.removedAt));
     const items = await db
       .select({
         session: sessions,
-        tunes: sql<number>`(select count(*)::int from ${entries}
-          where ${entries.sessionId} = ${sessions.id} and ${entries.removedAt} is null)`,
-        sets: sql<number>`(select count(*)::int from ${sessionSets}
-          where ${sessionSets.sessionId} = ${sessions.id} and ${sessionSets.removedAt} is null)`,
+        tunes: sql<number>`(select count(*)::int from ${entries} where ${standing(entries)})`,
+        sets: sql<number>`(select count(*)::int from ${sessionSets} where ${standing(sessionSets)})`,
       })
       .from(sessions)
       .where(mine)
