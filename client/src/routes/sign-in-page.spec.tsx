@@ -1,7 +1,8 @@
 import { screen } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { describe, expect, it } from 'vitest';
-import { mockApi, renderApp } from '../lib/test-app';
+import { mockApi } from '../lib/mock-api';
+import { renderApp } from './test-app';
 import { safeNext } from './use-after-sign-in';
 
 const user = { id: 'u1', email: 'ada@example.org', displayName: 'Ada Weir' };

@@ -1,10 +1,4 @@
-import { QueryClientProvider } from '@tanstack/react-query';
-import { render } from '@testing-library/react';
-import { MemoryRouter } from 'react-router-dom';
 import { vi } from 'vitest';
-import { meKey } from '../features/accounts/api/me';
-import { AppRoutes } from '../router';
-import { makeQueryClient } from './query-client';
 
 export interface Answer {
   readonly status: number;
@@ -40,17 +34,4 @@ export function mockApi(answers: Answers): readonly string[] {
     );
   });
   return asked;
-}
-
-/** The whole application at an address, as main.tsx puts it up. */
-export function renderApp(path: string) {
-  const queries = makeQueryClient((client) => client.setQueryData(meKey, null));
-  queries.setDefaultOptions({ queries: { retry: false } });
-  return render(
-    <QueryClientProvider client={queries}>
-      <MemoryRouter initialEntries={[path]}>
-        <AppRoutes />
-      </MemoryRouter>
-    </QueryClientProvider>,
-  );
 }
