@@ -1,14 +1,27 @@
 import type { Goal } from '@pegwell/shared/session/evening';
 import type { Compiled } from './compiled';
-import { SubsetTable, type TableLimits } from './subset-table';
 import type { Stage } from './stage';
 import type { Steps } from './steps';
+import { SubsetTable, type Milestone } from './subset-table';
+import { TooManyStands, TuningMoves } from './tuning-moves';
 import type { Plan } from './units';
 import type { Weights } from './weights';
 
-/** The table of all kinds together may leave groups out; the tables of some kinds may not. */
-const ALL: TableLimits = { joints: 400, work: 12_000_000 };
-const SOME: TableLimits = { joints: 400, work: 3_000_000 };
+/** How much may go into the table of all kinds together, and into each table of some kinds. */
+export interface BoundLimits {
+  readonly joints: number;
+  /** Cells times moves tried for each; about 5 ms per million. */
+  readonly together: number;
+  readonly apart: number;
+}
+
+/** Made in a few milliseconds, and enough for most evenings. */
+export const SMALL_BOUND: BoundLimits = { joints: 400, together: 400_000, apart: 100_000 };
+/** Made in tenths of a second. */
+export const LARGE_BOUND: BoundLimits = { joints: 400, together: 12_000_000, apart: 3_000_000 };
+
+/** More pins than these are followed as groups that are still to come. */
+const MOST_MILESTONES = 4;
 
 /**
  * What the first two levels still cost at least, from the tunings alone. A table over all kinds is the best
@@ -16,28 +29,42 @@ const SOME: TableLimits = { joints: 400, work: 3_000_000 };
  */
 export class Bound {
   private readonly parts: readonly (readonly SubsetTable[])[];
+  private readonly milestones: readonly Milestone[];
+  /** By position: milestones at or after it. */
+  private readonly milestonesAhead: Int32Array;
   /** By position: breaks at or after it, each of which may take one turning place off the clock. */
   private readonly breaksAhead: Int32Array;
   private readonly joints = new WeakMap<Stage, (Int32Array | undefined)[]>();
-  private readonly follow = new WeakMap<Stage, readonly Followed[]>();
+  private readonly awaited = new WeakMap<Stage, readonly Awaited[]>();
 
   constructor(
-    private readonly compiled: Compiled,
+    compiled: Compiled,
     private readonly plan: Plan,
     private readonly goal: Goal,
     private readonly weights: Weights,
+    limits: BoundLimits,
     steps: Steps,
   ) {
+    this.milestones = milestonesOf(plan);
     const everyone = compiled.kinds.map((_, k) => k);
-    const together = SubsetTable.for(compiled, everyone, goal, ALL, steps);
+    const table = (kinds: readonly number[], work: number): SubsetTable | null => {
+      try {
+        const tunings = new TuningMoves(compiled, kinds, goal, limits.joints);
+        return new SubsetTable(tunings, plan, this.milestones, work, steps);
+      } catch (error) {
+        if (error instanceof TooManyStands) return null;
+        throw error;
+      }
+    };
+    const together = table(everyone, limits.together);
     const parts: (readonly SubsetTable[])[] = together ? [[together]] : [];
-    if (everyone.length > 1 && !together?.complete) parts.push(clusters(compiled, goal, steps));
-    this.parts = parts;
-    const { setStart } = plan;
-    this.breaksAhead = new Int32Array(setStart.length + 1);
-    for (let position = setStart.length - 1; position >= 0; position--) {
-      this.breaksAhead[position] = this.breaksAhead[position + 1]! + (setStart[position] ? 1 : 0);
+    if (everyone.length > 1 && !together?.complete) {
+      parts.push(clusters(everyone, (kinds) => table(kinds, limits.apart)));
     }
+    this.parts = parts;
+    const isMilestone = new Set(this.milestones.map(({ position }) => position));
+    this.milestonesAhead = fromTheEnd(plan, (position) => isMilestone.has(position));
+    this.breaksAhead = fromTheEnd(plan, (position) => plan.setStart[position]!);
   }
 
   /**
@@ -45,27 +72,29 @@ export class Bound {
    * @param rows packed states, the one asked for beginning at `at`
    */
   toGo(stage: Stage, rows: Int32Array, at: number, position: number): number {
-    const joint = rows[at + stage.words]!;
-    const tableJoints = this.tableJoints(stage, joint);
-    let [index, best] = [0, 0];
-    const followed = this.followed(stage);
+    const joints = this.jointsOf(stage, rows[at + stage.words]!);
+    const awaited = this.awaitedBy(stage);
+    const breaks = this.breaksAhead[position]!;
+    let best = 0;
+    let index = 0;
     for (const tables of this.parts) {
-      let [pegs, turns, sure] = [0, 0, 0];
+      let pegs = 0;
+      let turns = 0;
+      let sure = 0;
       for (const table of tables) {
-        const { ofClass, fixedAfter } = followed[index]!;
+        const { ofClass, fixedAfter } = awaited[index]!;
         let mask = fixedAfter[position]!;
         for (let c = 0; c < ofClass.length; c++) {
           if (ofClass[c] !== 0 && stage.left(rows, at, c) > 0) mask |= ofClass[c]!;
         }
-        const at2 = tableJoints[index]!;
+        const cost = table.toGo(mask, joints[index]!, this.milestonesAhead[position]!);
         index++;
-        const itsTurns = table.turns(mask, at2);
-        const itsPegs = table.pegs(mask, at2);
+        const itsTurns = table.tunings.turns(cost);
+        const itsPegs = table.tunings.pegs(cost);
         pegs += itsPegs;
         if (itsTurns > turns) [turns, sure] = [itsTurns, itsPegs];
         else if (itsTurns === turns) sure = Math.max(sure, itsPegs);
       }
-      const breaks = this.breaksAhead[position]!;
       const stops = Math.max(0, turns - breaks);
       // With stops first, a table's pegs are the least only for its least turns.
       const known = this.goal === 'pegs' ? pegs : turns >= breaks ? sure : 0;
@@ -74,7 +103,7 @@ export class Bound {
     return best;
   }
 
-  private tableJoints(stage: Stage, joint: number): Int32Array {
+  private jointsOf(stage: Stage, joint: number): Int32Array {
     let known = this.joints.get(stage);
     if (known === undefined) this.joints.set(stage, (known = []));
     return (known[joint] ??= this.lookedUp(stage, joint));
@@ -82,42 +111,68 @@ export class Bound {
 
   private lookedUp(stage: Stage, joint: number): Int32Array {
     const tunings = stage.joints.stands[joint]!.map((stand, k) => stage.joints.tuning(k, stand));
-    return Int32Array.from(this.parts.flat(), (table) => table.joint(tunings));
+    return Int32Array.from(this.parts.flat(), (table) => table.tunings.joint(tunings));
   }
 
-  /** Per table: the groups that a class still brings, and those that fixed units bring from a position on. */
-  private followed(stage: Stage): readonly Followed[] {
-    const known = this.follow.get(stage);
+  /** Per table: what a class still brings, and what fixed units bring from a position on. */
+  private awaitedBy(stage: Stage): readonly Awaited[] {
+    const known = this.awaited.get(stage);
     if (known !== undefined) return known;
-    const { units, setStart } = this.plan;
-    const made = this.parts.flat().map(({ bitOf }): Followed => {
-      const bits = units.map(({ entries }) => entries.reduce((mask, entry) => mask | bitOf[entry]!, 0));
+    const { setStart, fixedUnitAt } = this.plan;
+    const made = this.parts.flat().map(({ bitsOf }): Awaited => {
       const fixedAfter = new Int32Array(setStart.length + 1);
       for (let position = setStart.length - 1; position >= 0; position--) {
-        const unit = this.plan.fixedUnitAt[position]!;
-        fixedAfter[position] = fixedAfter[position + 1]! | (unit === -1 ? 0 : bits[unit]!);
+        const unit = fixedUnitAt[position]!;
+        fixedAfter[position] = fixedAfter[position + 1]! | (unit === -1 ? 0 : bitsOf[unit]!);
       }
-      return { ofClass: Int32Array.from(stage.members, ([member]) => bits[member!]!), fixedAfter };
+      return { ofClass: Int32Array.from(stage.members, ([member]) => bitsOf[member!]!), fixedAfter };
     });
-    this.follow.set(stage, made);
+    this.awaited.set(stage, made);
     return made;
   }
 }
 
-interface Followed {
+interface Awaited {
   readonly ofClass: Int32Array;
   readonly fixedAfter: Int32Array;
 }
 
+function fromTheEnd({ setStart }: Plan, counts: (position: number) => boolean): Int32Array {
+  const ahead = new Int32Array(setStart.length + 1);
+  for (let position = setStart.length - 1; position >= 0; position--) {
+    ahead[position] = ahead[position + 1]! + (counts(position) ? 1 : 0);
+  }
+  return ahead;
+}
+
+/** Fixed units that are not the beginning of the evening; of many, some spread over it. */
+function milestonesOf({ units, fixedUnitAt }: Plan): readonly Milestone[] {
+  const all: Milestone[] = [];
+  const freeInAll = fixedUnitAt.filter((unit) => unit === -1).length;
+  let free = 0;
+  fixedUnitAt.forEach((unit, position) => {
+    if (unit === -1) free++;
+    else if (free > 0 && units[unit]!.fixedAt === position) {
+      all.push({ unit, position, freeBefore: free, freeAfter: freeInAll - free });
+    }
+  });
+  if (all.length <= MOST_MILESTONES) return all;
+  return Array.from({ length: MOST_MILESTONES }, (_, index) => {
+    return all[Math.floor(((index + 0.5) * all.length) / MOST_MILESTONES)]!;
+  });
+}
+
 /** Kinds put together as long as their table stays complete and small. */
-function clusters(compiled: Compiled, goal: Goal, steps: Steps): readonly SubsetTable[] {
-  let tables = compiled.kinds.flatMap((_, k) => SubsetTable.for(compiled, [k], goal, SOME, steps) ?? []);
+function clusters(
+  kinds: readonly number[],
+  table: (kinds: readonly number[]) => SubsetTable | null,
+): readonly SubsetTable[] {
+  let tables = kinds.flatMap((k) => table([k]) ?? []);
   for (let merged = true; merged;) {
     merged = false;
     for (let a = 0; a < tables.length && !merged; a++) {
       for (let b = a + 1; b < tables.length && !merged; b++) {
-        const kinds = [...tables[a]!.kinds, ...tables[b]!.kinds];
-        const both = SubsetTable.for(compiled, kinds, goal, SOME, steps);
+        const both = table([...tables[a]!.tunings.kinds, ...tables[b]!.tunings.kinds]);
         if (!both?.complete) continue;
         tables = [...tables.filter((_, index) => index !== a && index !== b), both];
         merged = true;

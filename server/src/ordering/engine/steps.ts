@@ -36,16 +36,20 @@ export class Steps {
   }
 }
 
+/** Thrown where only a part has used up its share; the search goes on in another way. */
+export class OutOfShare extends Error {}
+
 class PartOfSteps extends Steps {
   constructor(
     private readonly whole: Steps,
-    part: number,
+    private left: number,
   ) {
-    super(part, () => false);
+    super(Infinity, () => false);
   }
 
   override take(count: number): void {
     this.whole.take(count);
-    super.take(count);
+    this.left -= count;
+    if (this.left < 0) throw new OutOfShare();
   }
 }

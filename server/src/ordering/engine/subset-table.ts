@@ -1,222 +1,234 @@
-import type { Compiled } from './compiled';
-import type { Goal } from '@pegwell/shared/session/evening';
 import type { Steps } from './steps';
+import { NEVER, type TuningMove, type TuningMoves } from './tuning-moves';
+import type { Plan } from './units';
 
-/** Table cells x moves tried for each; about 10 ms per million. */
-export interface TableLimits {
-  readonly joints: number;
-  readonly work: number;
+/** A fixed unit that the tables wait for. */
+export interface Milestone {
+  readonly unit: number;
+  readonly position: number;
+  /** Positions before it, and after, that are not fixed. */
+  readonly freeBefore: number;
+  readonly freeAfter: number;
 }
 
-interface GroupMove {
-  readonly to: number;
-  readonly cost: number;
+/** Something that must still come: entries of a group, or one unit with rules of its own. */
+interface Element {
+  readonly group: number;
+  readonly unit: number | null;
+  /** Free entries it stands for, and how many positions it takes at least as long as it is not done. */
+  count: number;
+  atLeast: number;
 }
 
 /**
- * For some of the kinds: the least pegs and turning places that are still to come from a joint stand, when
- * each of a set of groups must be visited at least once more, in any order. A group is what entries with the
- * same accepted tunings share.
+ * The least pegs and turning places that are still to come from a joint stand, when each of a set of elements
+ * must be visited at least once more.
  *
- * This is a shortest path over subsets (Held & Karp 1962), filled from the empty set up. Visiting each group
- * once is enough, because leaving a tune out never costs more (the triangle inequality); for the same
- * reason a group that suits the present stand is visited at once. Positions, pins and breaks play no part, so
- * it bounds every order from below.
+ * This is a shortest path over subsets (Held & Karp 1962), filled from the empty set up. Visiting a group
+ * once is enough, because leaving a tune out never costs more (the triangle inequality). A visit is a
+ * group's *last*: so the groups that are done before a milestone have all their free entries before it, no
+ * more of them than there are free positions; and those not done each have an entry after it. Medleys are
+ * passed from end to end, and before/after pairs in their order. Other positions and breaks play no part, so
+ * the table bounds every order from below.
  *
- * Where there are more groups than the limits allow, those nearest to another are left out; that only
- * lowers the bound.
+ * Where there are more elements than the work allowed, pairs are read as mere members of their groups, and
+ * then the groups nearest to another are left out; both only lower the bound.
  */
 export class SubsetTable {
-  /** By entry: the bit of its group, 0 where its group is not followed. */
-  readonly bitOf: readonly number[];
-  readonly groups: number;
+  /** By unit: the bits it keeps set until it is placed. */
+  readonly bitsOf: readonly number[];
   /** Whether every group is followed. */
   readonly complete: boolean;
+  private readonly size: number;
   private readonly cells: Int32Array;
-  private readonly joints: number[][] = [];
-  private readonly known = new Map<string, number>();
-  private readonly firstUnit: number;
 
-  private constructor(
-    private readonly compiled: Compiled,
-    readonly kinds: readonly number[],
-    private readonly goal: Goal,
-    limits: TableLimits,
+  constructor(
+    readonly tunings: TuningMoves,
+    private readonly plan: Plan,
+    private readonly milestones: readonly Milestone[],
+    work: number,
     steps: Steps,
   ) {
-    const { entries } = compiled;
-    const groupByKey = new Map<string, number>();
-    const options: (readonly (readonly number[] | null)[])[] = [];
-    const groupOf = entries.map((entry) => {
-      const tunings = kinds.map((k) => this.tuningsOf(entry.options[k]!, k));
-      if (tunings.every((list) => list === null)) return -1;
-      const key = tunings.map((list) => list?.join(',') ?? 'any').join(';');
-      let group = groupByKey.get(key);
-      if (group === undefined) {
-        group = options.push(tunings) - 1;
-        groupByKey.set(key, group);
-      }
-      return group;
-    });
-
-    this.of(kinds.map((k) => compiled.kinds[k]!.tuningOf[compiled.kinds[k]!.opening]!));
-    const moves: GroupMove[][][] = [];
-    const mostTurns = options.length + 1;
-    const peg = goal === 'pegs' ? mostTurns : 1;
-    let dearest = 1;
-    for (const k of kinds) dearest += Math.max(0, ...compiled.kinds[k]!.pegs);
-    const turn = goal === 'pegs' ? 1 : dearest * mostTurns;
-    this.firstUnit = Math.max(peg, turn);
-    for (let joint = 0; joint < this.joints.length; joint++) {
-      if (joint >= limits.joints) throw new TableTooLarge();
-      steps.take(options.length);
-      moves.push(options.map((lists) => this.movesFrom(joint, lists, peg, turn)));
-    }
-
-    const followed = this.followed(moves, limits.work);
-    const bits = new Map(followed.map((group, bit) => [group, bit]));
-    this.bitOf = groupOf.map((group) => (bits.has(group) ? 2 ** bits.get(group)! : 0));
-    this.groups = followed.length;
-    this.complete = followed.length === options.length;
-    if (this.firstUnit * mostTurns * 2 > 2 ** 31 - 1 && goal === 'stops') throw new TableTooLarge();
-    if (dearest * mostTurns * peg > 2 ** 31 - 1) throw new TableTooLarge();
-    this.cells = this.filled(
-      moves.map((row) => followed.map((group) => row[group]!)),
-      steps,
-    );
+    const { elements, bitsOf, complete } = this.chosen(work / (milestones.length + 1));
+    this.bitsOf = bitsOf;
+    this.complete = complete;
+    this.size = elements.length;
+    this.cells = this.filled(elements, steps);
   }
 
-  /** @returns null where these kinds stand in too many ways together. */
-  static for(
-    compiled: Compiled,
-    kinds: readonly number[],
-    goal: Goal,
-    limits: TableLimits,
-    steps: Steps,
-  ): SubsetTable | null {
-    try {
-      return new SubsetTable(compiled, kinds, goal, limits, steps);
-    } catch (error) {
-      if (error instanceof TableTooLarge) return null;
-      throw error;
-    }
+  /** What is still to come from a joint stand; read by TuningMoves. */
+  toGo(mask: number, joint: number, milestonesLeft: number): number {
+    return this.cells[((milestonesLeft << this.size) + mask) * this.tunings.joinedStands + joint]!;
   }
 
-  /** @param tunings of all kinds of the problem @returns the number by which the tables know them */
-  joint(tunings: readonly number[]): number {
-    return this.known.get(String.fromCharCode(...this.kinds.map((k) => tunings[k]!))) ?? -1;
-  }
-
-  /** Pegs still to come, and turning places; least in the goal's order of the two. */
-  pegs(mask: number, joint: number): number {
-    const cell = this.cells[mask * this.joints.length + joint]!;
-    return this.goal === 'pegs' ? Math.floor(cell / this.firstUnit) : cell % this.firstUnit;
-  }
-
-  turns(mask: number, joint: number): number {
-    const cell = this.cells[mask * this.joints.length + joint]!;
-    return this.goal === 'pegs' ? cell % this.firstUnit : Math.floor(cell / this.firstUnit);
-  }
-
-  private tuningsOf(list: readonly { stance: number }[] | null, kind: number): readonly number[] | null {
-    if (list === null) return null;
-    const { tuningOf } = this.compiled.kinds[kind]!;
-    return [...new Set(list.map(({ stance }) => tuningOf[stance]!))].sort((a, b) => a - b);
-  }
-
-  private of(tunings: number[]): number {
-    const key = String.fromCharCode(...tunings);
-    let joint = this.known.get(key);
-    if (joint === undefined) {
-      joint = this.joints.push(tunings) - 1;
-      this.known.set(key, joint);
-    }
-    return joint;
-  }
-
-  private movesFrom(
-    joint: number,
-    lists: readonly (readonly number[] | null)[],
-    peg: number,
-    turn: number,
-  ): GroupMove[] {
-    const from = this.joints[joint]!;
-    let partial = [{ tunings: [] as number[], pegs: 0 }];
-    lists.forEach((list, index) => {
-      const { pegs, tunings: width } = this.compiled.kinds[this.kinds[index]!]!;
-      const before = from[index]!;
-      partial = partial.flatMap((way) =>
-        (list ?? [before]).map((after) => ({
-          tunings: [...way.tunings, after],
-          pegs: way.pegs + pegs[before * width + after]!,
-        })),
-      );
-      if (partial.length > MOST_WAYS) throw new TableTooLarge();
-    });
-    const moves = partial.map(({ tunings, pegs }) => ({
-      to: this.of(tunings),
-      cost: pegs * peg + (pegs > 0 ? turn : 0),
-    }));
-    // To stay is never worse than another way: what that reaches is reached from here for no more.
-    const still = moves.find(({ to, cost }) => to === joint && cost === 0);
-    return still ? [still] : moves;
-  }
-
-  /** The groups to follow: as many as the limits allow, the one nearest to another dropped first. */
-  private followed(moves: readonly GroupMove[][][], work: number): number[] {
-    let followed = moves[0]!.map((_, group) => group);
+  private chosen(work: number): { elements: Element[]; bitsOf: number[]; complete: boolean } {
+    const { units } = this.plan;
+    const { groupOf, moves } = this.tunings;
+    const awaited = new Set(this.milestones.map(({ unit }) => unit));
+    // Units with rules of their own, medleys last, so that pairs are given up first.
+    const own = units.flatMap(({ plain, fixedAt }, unit) => (plain || fixedAt !== null ? [] : [unit]));
+    own.sort((a, b) => units[b]!.entries.length - units[a]!.entries.length || a - b);
     let ways = 0;
     for (const row of moves) for (const list of row) ways += list.length;
-    const each = ways / Math.max(1, followed.length);
-    while (followed.length > 0 && 2 ** followed.length * followed.length * each > work) {
-      const reach = followed.map((group) => {
-        // The least cost of this group from stands where another group has just been played.
-        let nearest = Infinity;
-        for (const other of followed) {
-          if (other === group) continue;
-          for (const { to } of moves[0]![other]!) {
-            for (const move of moves[to]![group]!) nearest = Math.min(nearest, move.cost);
-          }
-        }
-        return nearest;
-      });
-      const nearest = reach.indexOf(Math.min(...reach));
-      followed = followed.filter((_, index) => index !== nearest);
+    const each = ways / Math.max(1, moves[0]!.length);
+    const fits = (count: number): boolean => count < 26 && 2 ** count * count * each <= work;
+
+    let groups = this.groupsOf(own, awaited);
+    while (own.length > 0 && !fits(own.length + groups.size)) {
+      own.pop();
+      groups = this.groupsOf(own, awaited);
     }
-    return followed;
+    let followed = [...groups];
+    while (followed.length > 0 && !fits(own.length + followed.length)) {
+      const nearest = this.nearest(followed);
+      followed = followed.filter((group) => group !== nearest);
+    }
+
+    const elements: Element[] = followed.map((group) => ({ group, unit: null, count: 0, atLeast: 1 }));
+    for (const unit of own) {
+      const { length } = units[unit]!.entries;
+      elements.push({ group: -1, unit, count: length, atLeast: length });
+    }
+    const bitsOf = units.map(({ entries, fixedAt }, unit) => {
+      const itself = elements.findIndex((element) => element.unit === unit);
+      if (itself !== -1) return 2 ** itself;
+      if (awaited.has(unit)) return 0;
+      let bits = 0;
+      for (const entry of entries) {
+        const index = followed.indexOf(groupOf[entry]!);
+        if (index === -1) continue;
+        bits |= 2 ** index;
+        if (fixedAt === null) elements[index]!.count++;
+        // Still to come perhaps only for a fixed entry, which takes none of the free positions.
+        else elements[index]!.atLeast = 0;
+      }
+      return bits;
+    });
+    return { elements, bitsOf, complete: followed.length === groups.size };
   }
 
-  private filled(moves: readonly GroupMove[][][], steps: Steps): Int32Array {
-    const width = this.joints.length;
-    const sets = 2 ** this.groups;
-    const cells = new Int32Array(sets * width);
-    for (let mask = 1; mask < sets; mask++) {
-      steps.take(width);
-      for (let joint = 0; joint < width; joint++) {
-        const row = moves[joint]!;
-        let least = 2 ** 31 - 1;
-        // A group that suits this stand ends the row: what it leaves is the least there is.
-        for (let rest = mask; rest !== 0; rest &= rest - 1) {
-          const group = 31 - Math.clz32(rest & -rest);
-          const without = (mask ^ (1 << group)) * width;
-          const ways = row[group]!;
-          const stays = ways.length === 1 && ways[0]!.to === joint;
-          if (stays) {
-            least = cells[without + joint]!;
-            break;
-          }
-          for (const { to, cost } of ways) {
-            const value = cost + cells[without + to]!;
-            if (value < least) least = value;
-          }
+  /** Groups of the units that are not followed one by one. */
+  private groupsOf(own: readonly number[], awaited: ReadonlySet<number>): Set<number> {
+    const groups = new Set<number>();
+    this.plan.units.forEach(({ entries }, unit) => {
+      if (own.includes(unit) || awaited.has(unit)) return;
+      for (const entry of entries) groups.add(this.tunings.groupOf[entry]!);
+    });
+    groups.delete(-1);
+    return groups;
+  }
+
+  /** The group that costs least from where another has just been played. */
+  private nearest(groups: readonly number[]): number {
+    const { moves } = this.tunings;
+    let [nearest, least] = [groups[0]!, Infinity];
+    for (const group of groups) {
+      for (const other of groups) {
+        if (other === group) continue;
+        for (const { to } of moves[0]![other]!) {
+          for (const { cost } of moves[to]![group]!) if (cost < least) [nearest, least] = [group, cost];
         }
-        cells[mask * width + joint] = least;
+      }
+    }
+    return nearest;
+  }
+
+  /** Table by table, from the one with no milestone ahead to the one with all. */
+  private filled(elements: readonly Element[], steps: Steps): Int32Array {
+    const { tunings, plan, milestones, size } = this;
+    const width = tunings.joinedStands;
+    const sets = 2 ** size;
+    const cells = new Int32Array((milestones.length + 1) * sets * width);
+    const left = new Int32Array(sets);
+    const undone = new Int32Array(sets);
+    for (let mask = 1; mask < sets; mask++) {
+      const bit = 31 - Math.clz32(mask);
+      left[mask] = left[mask ^ (1 << bit)]! + elements[bit]!.count;
+      undone[mask] = undone[mask ^ (1 << bit)]! + elements[bit]!.atLeast;
+    }
+    const all = left[sets - 1]!;
+    const { start, to, cost } = this.columns(elements);
+    const bitOf = new Map(elements.flatMap(({ unit }, bit) => (unit === null ? [] : [[unit, bit] as const])));
+    const waits = elements.map(({ unit }) => this.waits(unit, bitOf));
+    const milestoneWaits = milestones.map(({ unit }) => this.waits(unit, bitOf).mask);
+    const passing = milestones.map(({ unit }) =>
+      tunings.moves.map((_, joint) => tunings.through(joint, plan.units[unit]!.entries)),
+    );
+
+    for (let ahead = 0; ahead <= milestones.length; ahead++) {
+      const base = ahead * sets;
+      const next = milestones.length - ahead;
+      const milestone = milestones[next];
+      for (let mask = 0; mask < sets; mask++) {
+        if (mask === 0 && ahead === 0) continue;
+        steps.take(width);
+        const mayPass =
+          milestone !== undefined &&
+          all - left[mask]! <= milestone.freeBefore &&
+          undone[mask]! <= milestone.freeAfter &&
+          (mask & milestoneWaits[next]!) === 0;
+        let open = 0;
+        for (let bit = 0; bit < size; bit++) {
+          if (mask & (1 << bit) && !(mask & waits[bit]!.mask) && ahead <= waits[bit]!.ahead) open |= 1 << bit;
+        }
+        for (let joint = 0; joint < width; joint++) {
+          const row = joint * size;
+          let least = NEVER;
+          if (mayPass) {
+            const beyond = (base - sets + mask) * width;
+            for (const move of passing[next]![joint]!)
+              least = Math.min(least, move.cost + cells[beyond + move.to]!);
+          }
+          for (let rest = open; rest !== 0; rest &= rest - 1) {
+            const bit = 31 - Math.clz32(rest & -rest);
+            const without = (base + (mask ^ (1 << bit))) * width;
+            const first = start[row + bit]!;
+            const end = start[row + bit + 1]!;
+            // With no milestone ahead, what suits this stand ends the row: what it leaves is the least.
+            if (ahead === 0 && end === first + 1 && to[first] === joint && cost[first] === 0) {
+              least = cells[without + joint]!;
+              break;
+            }
+            for (let way = first; way < end; way++) {
+              const value = cost[way]! + cells[without + to[way]!]!;
+              if (value < least) least = value;
+            }
+          }
+          cells[(base + mask) * width + joint] = least < NEVER ? least : NEVER;
+        }
       }
     }
     return cells;
   }
+
+  /** Moves in columns: those from a joint stand with an element begin at `start[joint * elements + element]`. */
+  private columns(elements: readonly Element[]): { start: Int32Array; to: Int32Array; cost: Int32Array } {
+    const { moves } = this.tunings;
+    const lists: (readonly TuningMove[])[] = moves.flatMap((row, joint) =>
+      elements.map(({ group, unit }) =>
+        unit === null ? row[group]! : this.tunings.through(joint, this.plan.units[unit]!.entries),
+      ),
+    );
+    const start = new Int32Array(lists.length + 1);
+    lists.forEach((list, index) => (start[index + 1] = start[index]! + list.length));
+    const flat = lists.flat();
+    return {
+      start,
+      to: Int32Array.from(flat, (move) => move.to),
+      cost: Int32Array.from(flat, (move) => move.cost),
+    };
+  }
+
+  /** Elements that must be done first, and the most milestones that may be ahead. */
+  private waits(unit: number | null, bitOf: ReadonlyMap<number, number>): { mask: number; ahead: number } {
+    let mask = 0;
+    let ahead = this.milestones.length;
+    if (unit === null) return { mask, ahead };
+    for (const earlier of this.plan.units[unit]!.after) {
+      mask |= 1 << (bitOf.get(earlier) ?? 31);
+      const index = this.milestones.findIndex((milestone) => milestone.unit === earlier);
+      if (index !== -1) ahead = Math.min(ahead, this.milestones.length - 1 - index);
+    }
+    return { mask: mask & 0x7fffffff, ahead };
+  }
 }
-
-const MOST_WAYS = 2000;
-
-class TableTooLarge extends Error {}

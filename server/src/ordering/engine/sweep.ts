@@ -28,6 +28,8 @@ export interface Swept {
   readonly order: readonly number[] | null;
   /** Whether no state was left out but for its bound. */
   readonly exact: boolean;
+  /** The least bound of what was left out for it: nothing below `under` costs less than this or `best`. */
+  readonly nextLeast: Cost;
 }
 
 export interface SweepOptions {
@@ -64,6 +66,8 @@ export function sweep(options: SweepOptions): Swept {
   const state = new Int32Array(stage.stride);
   let exact = true;
   let states = 1;
+  let nextHigh = Infinity;
+  let nextLow = Infinity;
 
   stage.start(state);
   layers[0]!.add(state);
@@ -98,7 +102,12 @@ export function sweep(options: SweepOptions): Swept {
     best: best === null ? null : costOf(last, best),
     order: best === null ? null : orderTo(stage, layers, best),
     exact,
+    nextLeast: { high: nextHigh, low: nextLow },
   };
+
+  function leaveOut(high: number, low: number): void {
+    if (high < nextHigh || (high === nextHigh && low < nextLow)) [nextHigh, nextLow] = [high, low];
+  }
 
   function follow(
     layer: Layer,
@@ -111,7 +120,10 @@ export function sweep(options: SweepOptions): Swept {
     let high = layer.high[row]! + successors.high[index]!;
     let low = layer.low[row]! + successors.low[index]!;
     if (moved !== undefined) low += moved.weight * movedBy(moved.hostUnitAt, stage, unit, position, next);
-    if (high > under.high || (high === under.high && low >= under.low)) return;
+    if (high > under.high || (high === under.high && low >= under.low)) {
+      leaveOut(high, low);
+      return;
+    }
 
     const at = row * layer.stride;
     for (let word = 0; word < stage.words; word++) state[word] = layer.rows[at + word]!;
@@ -132,9 +144,11 @@ export function sweep(options: SweepOptions): Swept {
     } else {
       leastHigh += bound.toGo(stage, state, 0, next);
     }
-    if (leastHigh > under.high) return;
     if (keyBound !== null) leastLow += keyBound.toGo(state, 0, next);
-    if (leastHigh === under.high && leastLow >= under.low) return;
+    if (leastHigh > under.high || (leastHigh === under.high && leastLow >= under.low)) {
+      leaveOut(leastHigh, leastLow);
+      return;
+    }
 
     const into = layers[next]!;
     let found = into.find(state);

@@ -1,0 +1,216 @@
+import { Bound, LARGE_BOUND, SMALL_BOUND } from './bound';
+import { compile, type Compiled } from './compiled';
+import { dealt } from './deal';
+import { someOrder } from './feasible';
+import { TooManyWays } from './moves';
+import { orderCost } from './order-cost';
+import type { OrderingProblem, Solution } from './ordering-problem';
+import { Stage } from './stage';
+import { OutOfShare, OutOfSteps, type Steps } from './steps';
+import { isLess, NEVER, sweep, sweepBack, type Cost, type SweepOptions, type Swept } from './sweep';
+import type { Plan } from './units';
+import { weightsFor, type Weights } from './weights';
+
+/** States kept per position while looking for a good order before its proof. */
+const WIDTHS = { first: 24, tunings: 200, later: 48 };
+
+/** After a sweep of fewer steps the next may rise in leaps; dearer ones feel their way. */
+const CHEAP_SWEEP = 5_000;
+
+/** Steps that the first stage may take under the small bound. */
+const SMALL_SHARE = 60_000;
+
+/** What a search has found, and how much of it is certain. */
+export interface Found {
+  /** Entries (indices in the host's order) in playing order. */
+  readonly entries: readonly number[];
+  readonly provenLevels: number;
+  readonly lowerBound: number;
+  readonly stopped: Solution['stopped'];
+}
+
+type Base = Pick<SweepOptions, 'bound' | 'steps' | 'keyWeight'>;
+
+/**
+ * Three stages, each closer than the one before and bounded by its exact cost to go: tunings alone, then
+ * capos, ranks and spaced rhythms, then everything. Before each, narrow sweeps look for a good order; only
+ * what can be better than the best order known is followed, so that an empty sweep is a proof.
+ */
+export class Search {
+  private readonly compiled: Compiled;
+  private readonly weights: Weights;
+  private readonly all: Stage;
+  /** The best order known, which keeps the rules; null until there is one. */
+  private best: { readonly entries: readonly number[]; readonly cost: Cost } | null = null;
+  /** No order that keeps the rules costs less. */
+  private least: Cost = { high: 0, low: 0 };
+  private stopped: Solution['stopped'] = null;
+
+  constructor(
+    private readonly problem: OrderingProblem,
+    private readonly plan: Plan,
+    private readonly steps: Steps,
+  ) {
+    this.compiled = compile(problem);
+    this.weights = weightsFor(this.compiled, problem.goal);
+    this.all = new Stage(this.compiled, plan, this.weights, 'all');
+  }
+
+  /** @returns null where the budget ended before any order that keeps the rules was known */
+  run(): Found | null {
+    try {
+      this.search();
+    } catch (error) {
+      if (error instanceof OutOfSteps) this.stopped = error.reason;
+      else if (error instanceof TooManyWays) this.stopped = 'steps';
+      else throw error;
+    }
+    if (this.best === null) return null;
+    const [lowerBound] = this.weights.read(this.least.high, this.least.low);
+    return {
+      entries: this.best.entries,
+      provenLevels: this.proven(this.best.cost),
+      lowerBound: lowerBound!,
+      stopped: this.stopped,
+    };
+  }
+
+  private search(): void {
+    const { compiled, plan, problem, weights, steps } = this;
+    const start = this.hostUnits() ?? someOrder(plan, steps);
+    if (start === null) throw new Error('The rules were found to hold');
+    const entries = start.flatMap((unit) => plan.units[unit]!.entries);
+    this.best = { entries, cost: NEVER };
+    this.best = { entries, cost: orderCost(this.all, start) };
+
+    const tunings = new Stage(compiled, plan, weights, 'tunings');
+    const swept = this.tuningsSwept(tunings);
+    if (swept === null) return;
+    let coarse = swept.swept;
+    for (const closeness of ['choices', 'all'] as const) {
+      sweepBack(coarse, steps);
+      const base = { ...swept.base, coarse };
+      this.look({ ...base, stage: this.all }, WIDTHS.later);
+      const stage = closeness === 'all' ? this.all : new Stage(compiled, plan, weights, closeness);
+      const next = this.deepened({ ...base, stage });
+      if (next === null) return;
+      coarse = next;
+    }
+  }
+
+  /** The first stage, under a bound that is quickly made, and where that leaves too much, a better one. */
+  private tuningsSwept(stage: Stage): { readonly swept: Swept; readonly base: Base } | null {
+    const { compiled, plan, problem, weights, steps } = this;
+    for (const [limits, share] of [
+      [SMALL_BOUND, SMALL_SHARE],
+      [LARGE_BOUND, Infinity],
+    ] as const) {
+      const bound = new Bound(compiled, plan, problem.goal, weights, limits, steps);
+      const root = new Int32Array(stage.stride);
+      stage.start(root);
+      this.raise({ high: bound.toGo(stage, root, 0, 0), low: 0 });
+      const base: Base = { bound, steps, keyWeight: weights.key };
+      this.look({ ...base, stage: this.all, coarse: null }, WIDTHS.first);
+      this.look({ ...base, stage, coarse: null }, WIDTHS.tunings);
+      try {
+        const swept = this.deepened({ ...base, steps: steps.within(share), stage, coarse: null });
+        return swept && { swept, base };
+      } catch (error) {
+        if (!(error instanceof OutOfShare)) throw error;
+      }
+    }
+    return null;
+  }
+
+  /**
+   * Sweeps all states of a stage that can lead to less than the best order known. Where the bound is far from
+   * that order, with lower ceilings first: what lies under a ceiling that nothing reaches must be looked at
+   * anyway to prove the best, and each such ceiling raises the bound.
+   *
+   * @returns null where nothing at this stage can cost less than the best order
+   */
+  private deepened(base: Base & Pick<SweepOptions, 'stage' | 'coarse'>): Swept | null {
+    const { peg, stop } = this.weights;
+    const [small, large] = [Math.min(peg, stop), Math.max(peg, stop)];
+    for (let rise = 4 * small; ;) {
+      const best = this.best!.cost;
+      if (!isLess(this.least, best)) return null;
+      const before = this.steps.taken;
+      const ceiling: Cost = { high: this.least.high + rise, low: 0 };
+      const under = isLess(ceiling, best) ? ceiling : best;
+      const swept = sweep({ ...base, under, width: Infinity });
+      if (swept.best === null) {
+        this.raise(isLess(swept.nextLeast, under) ? under : swept.nextLeast);
+        if (under === best) return null;
+        const cheap = this.steps.taken - before < CHEAP_SWEEP;
+        rise = cheap ? Math.max(large, 1.5 * rise) : 4 * small;
+        continue;
+      }
+      this.raise(swept.best);
+      this.offer(base.stage, swept.order!);
+      // The table must hold all that can still be better than the best order.
+      if (under === best || !isLess(under, this.best!.cost)) return swept;
+      if (!isLess(this.least, this.best!.cost)) return null;
+      return sweep({ ...base, under: this.best!.cost, width: Infinity });
+    }
+  }
+
+  /** A narrow sweep for a good order; nothing is proved unless it turns out to have left nothing out. */
+  private look(base: Base & Pick<SweepOptions, 'stage' | 'coarse'>, width: number): void {
+    if (!isLess(this.least, this.best!.cost)) return;
+    const under = this.best!.cost;
+    const swept = sweep({ ...base, under, width });
+    if (swept.exact) this.raise(swept.best ?? under);
+    if (swept.order !== null) this.offer(base.stage, swept.order);
+  }
+
+  /** @param order units in playing order, each of which stands for its class of that stage */
+  private offer(stage: Stage, order: readonly number[]): void {
+    const entries = dealt(stage, order);
+    const cost = orderCost(this.all, unitsOf(this.plan, entries));
+    if (isLess(cost, this.best!.cost)) this.best = { entries, cost };
+  }
+
+  /** Never above the best order known: what a sweep proves beyond it is not asked. */
+  private raise(to: Cost): void {
+    const best = this.best!.cost;
+    const most = isLess(best, to) ? best : to;
+    if (isLess(this.least, most)) this.least = most;
+  }
+
+  /** Leading levels on which the bound has reached the best order. */
+  private proven(cost: Cost): number {
+    const { levels, read } = this.weights;
+    if (cost.high === Infinity) return 0;
+    const bound = read(this.least.high, this.least.low);
+    const differs = read(cost.high, cost.low).findIndex((value, level) => value !== bound[level]);
+    return Math.min(levels, differs === -1 ? 7 : differs);
+  }
+
+  /** The host's order in units; null where it breaks a rule. */
+  private hostUnits(): number[] | null {
+    const { units, unitOf, setEnd } = this.plan;
+    const order: number[] = [];
+    const placed = units.map(() => false);
+    for (let position = 0; position < unitOf.length;) {
+      const index = unitOf[position]!;
+      const unit = units[index]!;
+      const inOrder = unit.entries.every((entry, offset) => entry === position + offset);
+      if (!inOrder || (unit.fixedAt ?? position) !== position) return null;
+      if (position + unit.entries.length > setEnd[position]!) return null;
+      if (unit.after.some((earlier) => !placed[earlier])) return null;
+      placed[index] = true;
+      order.push(index);
+      position += unit.entries.length;
+    }
+    return order;
+  }
+}
+
+function unitsOf({ units, unitOf }: Plan, entries: readonly number[]): number[] {
+  const order: number[] = [];
+  for (let position = 0; position < entries.length; position += units[order.at(-1)!]!.entries.length) {
+    order.push(unitOf[entries[position]!]!);
+  }
+  return order;
+}
