@@ -400,7 +400,7 @@ describe('files of tunes', () => {
     it('carries tunings in ABC as directives, and quotes formulas in CSV', async () => {
       const tune = await buildTune(host, circle.id, AWKWARD);
       const abc = await download('abc');
-      expect(abc).toMatch(/^%abc-2\.1\n\nX:1\nT:=1\+1/);
+      expect(abc).toMatch(/^%abc-2\.1\nI:abc-creator Pegwell\n\nX:1\nT:=1\+1/);
       expect(abc).toContain(`%%pegwell-id ${tune.id}\n`);
       expect(abc).toContain('%%pegwell-tuning fiddle AEADb or GDAE\n');
       expect(abc).toContain('%%pegwell-tuning banjo A4 D3 A3 D4 E4 or gDGBD capo 2\n');

@@ -81,7 +81,7 @@ function readKind(
 }
 
 /** @example spellingsOf('C4') // ['C4', 'B#3', 'Dbb4'] in some order */
-export function spellingsOf(pitch: string): string[] {
+function spellingsOf(pitch: string): string[] {
   const midi = midiOf(pitch);
   const names: string[] = [];
   for (const letter of LETTERS) {

@@ -1,6 +1,6 @@
 import { readAbcKey } from './abc-key';
 
-// ABC 2.1, section 4.6 "K: - key": the mode by its first three letters, capitals and spaces are ignored; no mode
+// ABC 2.1, section 3.1.14 "K: - key": the mode by its first three letters, capitals and spaces are ignored; no mode
 // is major, `m` is minor; `K:none` and an empty `K:` are no key; `HP` and `Hp` are the pipes; `exp`, accidentals
 // and clefs follow.
 describe('readAbcKey', () => {
@@ -30,6 +30,35 @@ describe('readAbcKey', () => {
     expect(readAbcKey(text)).toEqual({ tonic, mode });
   });
 
+  // The table of section 3.1.14, sharps to flats: major, minor, mixolydian, dorian, phrygian, lydian, locrian.
+  const TABLE = [
+    'C# A#m G#Mix D#Dor E#Phr F#Lyd B#Loc',
+    'F# D#m C#Mix G#Dor A#Phr BLyd E#Loc',
+    'B G#m F#Mix C#Dor D#Phr ELyd A#Loc',
+    'E C#m BMix F#Dor G#Phr ALyd D#Loc',
+    'A F#m EMix BDor C#Phr DLyd G#Loc',
+    'D Bm AMix EDor F#Phr GLyd C#Loc',
+    'G Em DMix ADor BPhr CLyd F#Loc',
+    'C Am GMix DDor EPhr FLyd BLoc',
+    'F Dm CMix GDor APhr BbLyd ELoc',
+    'Bb Gm FMix CDor DPhr EbLyd ALoc',
+    'Eb Cm BbMix FDor GPhr AbLyd DLoc',
+    'Ab Fm EbMix BbDor CPhr DbLyd GLoc',
+    'Db Bbm AbMix EbDor FPhr GbLyd CLoc',
+    'Gb Ebm DbMix AbDor BbPhr CbLyd FLoc',
+    'Cb Abm GbMix DbDor EbPhr FbLyd BbLoc',
+  ];
+  const COLUMNS = ['major', 'minor', 'mixolydian', 'dorian', 'phrygian', 'lydian', 'locrian'];
+
+  it('reads all 105 keys of the table', () => {
+    const read = TABLE.flatMap((row) => row.split(' ').map((key) => readAbcKey(key)));
+    const expected = TABLE.flatMap((row) =>
+      row.split(' ').map((key, column) => ({ tonic: /^[A-G][#b]?/.exec(key)![0], mode: COLUMNS[column] })),
+    );
+    expect(read).toHaveLength(105);
+    expect(read).toEqual(expected);
+  });
+
   it.each([
     ['D =c', 'D', 'major'],
     ['Dmix^f', 'D', 'mixolydian'],
@@ -39,6 +68,7 @@ describe('readAbcKey', () => {
     ['G bass', 'G', 'major'],
     ['D alto transpose=-2', 'D', 'major'],
     ['G middle=d', 'G', 'major'],
+    ['Am transpose=-2', 'A', 'minor'],
   ])('passes over what stands behind the key in K:%s', (text, tonic, mode) => {
     expect(readAbcKey(text)).toEqual({ tonic, mode });
   });
@@ -47,7 +77,18 @@ describe('readAbcKey', () => {
     expect(readAbcKey('D exp _b _e ^f')).toEqual({ tonic: 'D', mode: null });
   });
 
-  it.each(['', 'none', 'HP', 'Hp', 'clef=alto', 'treble', '^c', 'H'])('finds no tonic in K:%s', (text) => {
+  it.each([
+    '',
+    'none',
+    'HP',
+    'Hp',
+    'clef=alto',
+    'treble',
+    'bass middle=d transpose=-24',
+    'perc stafflines=1',
+    '^c',
+    'H',
+  ])('finds no tonic in K:%s', (text) => {
     expect(readAbcKey(text)).toEqual({ tonic: null, mode: null });
   });
 });

@@ -1,5 +1,6 @@
 /** What a line of an ABC file is, as far as headers go (ABC 2.1 sections 2 and 3). */
 export type AbcLine =
+  /** Nothing, or nothing but white space (2.2.4). */
   | { readonly kind: 'empty'; readonly line: number }
   /** `X:1`: the text still with its escapes, without comment and surrounding space. */
   | { readonly kind: 'field'; readonly line: number; readonly letter: string; readonly text: string }
@@ -14,21 +15,23 @@ const FIELD = /^([A-Za-z]):(.*)$/s;
 const DIRECTIVE = /^(?:%%|I:)\s*(\S+)\s*(.*)$/s;
 const COMMENT = /(?<!\\)(?:\\\\)*%/;
 
-/** Lines from 1, with `+:` joined to the field that it continues (section 3.3), by a space. */
+/**
+ * Lines from 1, with `+:` joined by a space to the field, or the `I:` directive, that it continues; comments and
+ * `%%` directives may stand between (section 3.3).
+ */
 export function readAbcLines(text: string): AbcLine[] {
   const lines: AbcLine[] = [];
-  // Where in `lines` the field stands that a `+:` would continue.
+  // Where in `lines` stands what a `+:` would continue.
   let open: number | null = null;
   text.split(/\r\n|\n|\r/).forEach((raw, index) => {
     const continued = raw.startsWith('+:') && open !== null ? lines[open] : undefined;
-    if (continued?.kind === 'field' && open !== null) {
-      const more = withoutComment(raw.slice(2));
-      lines[open] = { ...continued, text: `${continued.text} ${more}`.trim() };
+    if (open !== null && (continued?.kind === 'field' || continued?.kind === 'directive')) {
+      lines[open] = { ...continued, text: `${continued.text} ${withoutComment(raw.slice(2))}`.trim() };
       return;
     }
     const line = readLine(raw, index + 1);
-    if (line.kind === 'field') open = lines.length;
-    else if (line.kind !== 'comment') open = null;
+    if (line.kind === 'field' || raw.startsWith('I:')) open = lines.length;
+    else if (line.kind === 'empty' || line.kind === 'other') open = null;
     lines.push(line);
   });
   return lines;
@@ -39,14 +42,15 @@ function readLine(raw: string, line: number): AbcLine {
   const [, name = null, value = ''] = DIRECTIVE.exec(raw) ?? [];
   if (name !== null)
     return { kind: 'directive', line, name: name.toLowerCase(), text: withoutComment(value) };
-  if (raw.startsWith('%')) return { kind: 'comment', line };
+  // Also behind white space (2.2.5): it leaves no empty line.
+  if (raw.trimStart().startsWith('%')) return { kind: 'comment', line };
   const [, letter = null, text = ''] = FIELD.exec(raw) ?? [];
   return letter === null
     ? { kind: 'other', line }
     : { kind: 'field', line, letter, text: withoutComment(text) };
 }
 
-/** `%` begins a comment unless a backslash stands before it. */
+/** `%` begins a comment (2.2.5) unless it is escaped: an odd number of backslashes before it (8.2). */
 function withoutComment(text: string): string {
   const match = COMMENT.exec(text);
   return (match ? text.slice(0, match.index + match[0].length - 1) : text).trim();

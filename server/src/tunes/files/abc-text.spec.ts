@@ -1,19 +1,39 @@
 import fc from 'fast-check';
 import { decodeText, encodeText } from './abc-text';
 
-// ABC 2.1, section 8.2 "Text strings": mnemonics, named HTML entities and fixed-width Unicode for accented
-// letters; \\ \% \& for the signs themselves. The mnemonics are from memory of its table.
+// ABC 2.1, section 14.1 "Supported accents & ligatures": character, mnemonic, named entity.
+const ACCENTS = `
+À \\\`A &Agrave; | à \\\`a &agrave; | È \\\`E &Egrave; | ì \\\`i &igrave; | ò \\\`o &ograve; | Ù \\\`U &Ugrave;
+Á \\'A &Aacute; | é \\'e &eacute; | Í \\'I &Iacute; | ó \\'o &oacute; | Ú \\'U &Uacute; | ý \\'y &yacute;
+Â \\^A &Acirc; | ê \\^e &ecirc; | Î \\^I &Icirc; | ô \\^o &ocirc; | Û \\^U &Ucirc; | ŷ \\^y &ycirc;
+Ã \\~A &Atilde; | ñ \\~n &ntilde; | Õ \\~O &Otilde;
+Ä \\"A &Auml; | ë \\"e &euml; | Ï \\"I &Iuml; | ö \\"o &ouml; | Ü \\"U &Uuml; | Ÿ \\"Y &Yuml; | ÿ \\"y &yuml;
+Ç \\cC &Ccedil; | ç \\cc &ccedil; | Å \\AA &Aring; | å \\aa &aring; | Ø \\/O &Oslash; | ø \\/o &oslash;
+Ă \\uA &Abreve; | ă \\ua &abreve; | Ĕ \\uE \\u0114 | ĕ \\ue \\u0115
+Š \\vS &Scaron; | š \\vs &scaron; | Ž \\vZ &Zcaron; | ž \\vz &zcaron;
+Ő \\HO \\u0150 | ő \\Ho \\u0151 | Ű \\HU \\u0170 | ű \\Hu \\u0171
+Æ \\AE &AElig; | æ \\ae &aelig; | Œ \\OE &OElig; | œ \\oe &oelig; | ß \\ss &szlig;
+Ð \\DH &ETH; | ð \\dh &eth; | Þ \\TH &THORN; | þ \\th &thorn;`
+  .split(/[|\n]/)
+  .map((row) => row.trim().split(' '))
+  .filter((row) => row.length === 3);
+
 describe('decodeText', () => {
+  it.each(ACCENTS)('reads %s, written %s or %s (14.1)', (character, mnemonic, other) => {
+    expect(decodeText(`x${mnemonic}x${other}x`)).toBe(`x${character}x${character}x`);
+  });
+
+  // Section 8.2 "Text strings".
   it.each([
     ["Se\\'an", 'Seán'],
-    ['\\`a \\^e \\"o \\~n', 'à ê ö ñ'],
-    ['gar\\ccon, \\vskoda, \\Hoszi, \\ug', 'garçon, škoda, őszi, ğ'],
-    ['\\AA \\aa \\/O \\/o \\AE \\ae \\OE \\oe \\ss', 'Å å Ø ø Æ æ Œ œ ß'],
-    ['caf&eacute; &Agrave;&ntilde;&Uuml;&ccedil;&aring;&oslash;&szlig; R&amp;B', 'café ÀñÜçåøß R&B'],
-    ['\\u00e9\\u266F', 'é♯'],
-    ['50\\% \\& a \\\\ b', '50% & a \\ b'],
+    // Fixed-width Unicode; four characters that are no number make a breve.
+    ['\\u00e9 \\u266F \\U000000e9 \\U0001F3BB \\uabe', 'é ♯ é 🎻 ăbe'],
+    ['50\\% G\\&T a \\\\ b', '50% G&T a \\ b'],
+    ['gin & tonic &copy; &amp; &quot;', 'gin & tonic © & "'],
+    // The mnemonics of abc 2.0 (14.2).
+    ['\\,c \\oa', 'ç å'],
     // Nothing is lost where nothing was meant.
-    ["\\'t \\x & &nosuch; &;", "\\'t \\x & &nosuch; &;"],
+    ["\\'t \\x & &nosuch; &; \\U99999999", "\\'t \\x & &nosuch; &; \\U99999999"],
   ])('reads %j', (text, plain) => {
     expect(decodeText(text)).toBe(plain);
   });

@@ -1,6 +1,6 @@
 /**
- * ABC text strings, 2.1 section 8.2: mnemonics for accented letters, HTML's names of them, and `\uXXXX`.
- * The mnemonics are written from memory of that table.
+ * ABC text strings, 2.1 sections 8.2 and 14.1: mnemonics for accented letters (`\,` and `\o` are those of 2.0),
+ * HTML's names of them, and Unicode by number.
  */
 const MARKS: Readonly<Record<string, string>> = {
   '`': '\u0300',
@@ -12,6 +12,8 @@ const MARKS: Readonly<Record<string, string>> = {
   v: '\u030c',
   H: '\u030b',
   c: '\u0327',
+  ',': '\u0327',
+  o: '\u030a',
 };
 const ENTITY_MARKS: Readonly<Record<string, string>> = {
   grave: '\u0300',
@@ -35,6 +37,10 @@ const LIGATURES: Readonly<Record<string, string>> = {
   OE: 'Œ',
   oe: 'œ',
   ss: 'ß',
+  DH: 'Ð',
+  dh: 'ð',
+  TH: 'Þ',
+  th: 'þ',
 };
 const ENTITIES: Readonly<Record<string, string>> = {
   amp: '&',
@@ -42,6 +48,7 @@ const ENTITIES: Readonly<Record<string, string>> = {
   gt: '>',
   quot: '"',
   apos: "'",
+  copy: '©',
   nbsp: '\u00a0',
   Oslash: 'Ø',
   oslash: 'ø',
@@ -57,7 +64,7 @@ const ENTITIES: Readonly<Record<string, string>> = {
 };
 
 const ESCAPE =
-  /\\u([0-9A-Fa-f]{4})|\\([\\%&])|\\(\/[Oo]|AA|aa|AE|ae|OE|oe|ss)|\\([`'^~"uvHc])([A-Za-z])|&([A-Za-z]{2,10});/g;
+  /\\(?:u([0-9A-Fa-f]{4})|U([0-9A-Fa-f]{8})|([\\%&])|(\/[Oo]|AA|aa|AE|ae|OE|oe|ss|DH|dh|TH|th)|([`'^~"uvHc,o])([A-Za-z]))|&([A-Za-z]{2,10});/g;
 
 /**
  * @example decodeText("Se\\'an \\% caf&eacute;") // 'Seán % café'
@@ -68,6 +75,7 @@ export function decodeText(text: string): string {
     (
       whole,
       code?: string,
+      longCode?: string,
       sign?: string,
       ligature?: string,
       mark?: string,
@@ -75,12 +83,17 @@ export function decodeText(text: string): string {
       entity?: string,
     ) => {
       if (code !== undefined) return String.fromCharCode(parseInt(code, 16));
+      if (longCode !== undefined) return characterOf(parseInt(longCode, 16)) ?? whole;
       if (sign !== undefined) return sign;
       if (ligature !== undefined) return LIGATURES[ligature] ?? whole;
       if (mark !== undefined && letter !== undefined) return compose(letter, MARKS[mark]) ?? whole;
       return entity === undefined ? whole : (readEntity(entity) ?? whole);
     },
   );
+}
+
+function characterOf(code: number): string | null {
+  return code <= 0x10ffff ? String.fromCodePoint(code) : null;
 }
 
 /** One character, or null where there is no such letter: then nothing was meant. */

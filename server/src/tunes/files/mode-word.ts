@@ -6,7 +6,7 @@ const BY_THREE_LETTERS: ReadonlyMap<string, Mode> = new Map([
 ]);
 
 /**
- * A mode by its first three letters in any case, as ABC 2.1 section 4.6 has it; `m` is minor. A capital `M`
+ * A mode by its first three letters in any case, as ABC 2.1 section 3.1.14 has it; `m` is minor. A capital `M`
  * alone is major, as musicians write chords (common practice; the standard does not say).
  * @example modeOf('MIXolydian') // 'mixolydian'
  * @example modeOf('treble') // null

@@ -81,15 +81,32 @@ describe('readAbc', () => {
     });
   });
 
-  it('strips comments, and keeps an escaped percent sign (2.3, and 8.2 for the escape)', () => {
-    expect(words('X:1 % number', 'T:Fifty \\% Off % a joke', '% T:not this', 'K:A % key', 'R:reel')).toEqual([
-      { title: 'Fifty % Off', key: 'A', mode: 'major' },
-    ]);
+  it('strips comments, and keeps an escaped percent sign (2.2.5, and 8.2 for the escape)', () => {
+    expect(
+      words(
+        'X:1 % number',
+        '   % no empty line',
+        'T:Fifty \\% Off % a joke',
+        '% T:not this',
+        'K:A % key',
+        'R:reel',
+      ),
+    ).toEqual([{ title: 'Fifty % Off', key: 'A', mode: 'major' }]);
   });
 
-  it('joins continued fields (3.3)', () => {
+  it('joins continued fields by a space, through comments and directives (3.3)', () => {
     expect(
-      words('X:1', 'T:A Very', '+:Long Title', 'N:one', '% between', '+:two', 'N:three', 'K:A'),
+      words(
+        'X:1',
+        'T:A Very',
+        '+:Long Title',
+        'N:one',
+        '% between',
+        '%%between too',
+        '+:two',
+        'N:three',
+        'K:A',
+      ),
     ).toMatchObject([{ title: 'A Very Long Title', notes: 'one two\nthree' }]);
   });
 
@@ -110,13 +127,13 @@ describe('readAbc', () => {
     expect(words('T:One', 'K:A', '', 'T:Two', 'K:A').map(({ title }) => title)).toEqual(['One', 'Two']);
   });
 
-  it('never executes a directive: what is not its own is passed over (11)', () => {
+  it('never executes a directive: what is not its own is passed over (3.1.17)', () => {
     expect(read('X:1', 'T:One', '%%abc-include /etc/passwd', 'I:linebreak $', 'K:A').tunes).toMatchObject([
       { title: 'One', problems: [] },
     ]);
   });
 
-  it('reads its own directives, as %% and as I: (11: they are the same), also behind the key', () => {
+  it('reads its own directives, as %% and as I: (3.1.17: they are the same), also behind the key', () => {
     const [tune] = read(
       'X:1',
       'T:One',
@@ -151,6 +168,71 @@ describe('readAbc', () => {
       { line: 4, message: 'kazoo is no instrument that Pegwell knows.' },
     ]);
     expect(tunes[1]!.problems).toEqual([]);
+  });
+
+  it('takes the last of repeated instructions, and joins repeated text strings by semicolons (3)', () => {
+    const [tune] = read(
+      'X:1',
+      'T:One',
+      'C:Trad.',
+      'C:arr. me',
+      'P:AB',
+      'P:AABB',
+      '%%pegwell-tuning fiddle GDA',
+      '%%pegwell-tuning fiddle AEAE',
+      'K:A',
+    ).tunes;
+    expect(tune).toMatchObject({
+      words: { composer: 'Trad.; arr. me', parts: 'AABB' },
+      stated: { fiddle: [{ pitches: ['A3', 'E4', 'A4', 'E5'] }] },
+      problems: [],
+    });
+  });
+
+  it('continues an I: directive as the field that it is (2.2.6)', () => {
+    const [tune] = read('X:1', 'T:One', 'I:pegwell-tuning fiddle AEAE', '+:or GDAE', 'K:A').tunes;
+    expect(tune!.stated['fiddle']).toHaveLength(2);
+  });
+
+  it("reads the headers of the standard's own sample (13.1 English.abc, shortened)", () => {
+    expect(
+      words(
+        '%abc-2.1',
+        'H:This file contains some example English tunes',
+        '% note that the comments are to highlight usages',
+        'O:England             % the origin of all tunes is England',
+        '',
+        'X:1                   % tune no 1',
+        'T:Dusty Miller, The   % title',
+        "T:Binny's Jig         % an alternative title",
+        'C:Trad.               % traditional',
+        'R:DH                  % double hornpipe',
+        'M:3/4                 % meter',
+        'K:G                   % key',
+        'B>cd BAG|FA Ac BA|B>cd BAG|DG GB AG:|',
+        'W:Hey, the dusty miller, and his dusty coat;',
+        '',
+        'X:2',
+        'T:Old Sir Simon the King',
+        'C:Trad.',
+        'S:Offord MSS          % from Offord manuscript',
+        'N:see also Playford   % reference note',
+        'M:9/8',
+        'R:SJ                  % slip jig',
+        'N:originally in C     % transcription note',
+        'K:G',
+        'D|GFG GAG G2D|GFG GAG F2D|EFE EFE EFG|A2G F2E D2:|',
+      ),
+    ).toEqual([
+      {
+        ...{ title: 'Dusty Miller, The', key: 'G', mode: 'major', rhythm: 'DH', composer: 'Trad.' },
+        notes: "Also: Binny's Jig",
+      },
+      {
+        ...{ title: 'Old Sir Simon the King', key: 'G', mode: 'major', rhythm: 'SJ', composer: 'Trad.' },
+        ...{ source: 'Offord MSS', notes: 'see also Playford\noriginally in C' },
+      },
+    ]);
   });
 
   it('says where K: was when it names no key', () => {

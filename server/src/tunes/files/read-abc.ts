@@ -1,7 +1,14 @@
 import { decodeText } from './abc-text';
 import { readAbcKey } from './abc-key';
 import { readAbcLines, type AbcLine } from './abc-lines';
-import { understandTune, type RawTune, type TuneFile, type WordField, type Written } from './file-tune';
+import {
+  kindNamed,
+  understandTune,
+  type RawTune,
+  type TuneFile,
+  type WordField,
+  type Written,
+} from './file-tune';
 import type { KeyReading } from './key-cell';
 import { modeNamed } from './mode-word';
 
@@ -16,14 +23,10 @@ interface Header {
   key: Field | null;
 }
 
-/** Fields that a file header may give to all tunes (2.1 section 3), as far as they are read here. */
+/** Fields that a file header may give to all tunes (2.1 sections 2.2.2 and 3), as far as they are read here. */
 const DEFAULTED = new Set(['C', 'S', 'R', 'N', 'G']);
-const WORDS: Readonly<Record<string, WordField>> = {
-  R: 'rhythm',
-  P: 'parts',
-  C: 'composer',
-  S: 'source',
-};
+/** Text strings: repeated ones are more of the same, by semicolons (3, "Repeated information fields"). */
+const WORDS: Readonly<Record<string, WordField>> = { R: 'rhythm', C: 'composer', S: 'source' };
 
 /**
  * The tunes of an ABC file, by the header rules of ABC 2.1 (C. Walshaw, 2011): a tune begins at `X:` and ends at
@@ -105,6 +108,9 @@ function readTune(header: Header, defaults: Header): RawTune {
     const found = textsOf(letter).filter(({ text }) => text.trim() !== '');
     if (found[0]) words[field] = { line: found[0].line, text: found.map(({ text }) => text).join('; ') };
   }
+  // An instruction, unlike the others: the last one counts.
+  const parts = textsOf('P').at(-1);
+  if (parts) words.parts = parts;
   // There is no place of their own yet for other titles and groups: the notes keep them.
   const notes = [
     ...textsOf('N'),
@@ -113,12 +119,11 @@ function readTune(header: Header, defaults: Header): RawTune {
   ];
   if (notes[0]) words.notes = { line: notes[0].line, text: notes.map(({ text }) => text).join('\n') };
   const directives = (name: string) => header.directives.filter((directive) => directive.name === name);
-  const [id] = directives('pegwell-id');
   return {
     line: header.line,
-    id: id?.text ?? null,
+    id: directives('pegwell-id').at(-1)?.text ?? null,
     words,
-    ...readKey(header, directives('pegwell-mode')[0]),
+    ...readKey(header, directives('pegwell-mode').at(-1)),
     cells: readCells(directives('pegwell-tuning'), defaults),
   };
 }
@@ -136,17 +141,12 @@ function readKey(
   return { tonic, mode, keyLine, problems: [{ line: modeWord.line, message }] };
 }
 
-/** The tune's own tunings; for kinds that it does not name, those of the file header. */
+/** The tune's own tunings; for kinds that it does not name, those of the file header. The last word counts. */
 function readCells(own: readonly Directive[], defaults: Header): RawTune['cells'] {
-  const read = ({ text, line }: Directive) => {
+  const given = defaults.directives.filter(({ name }) => name === 'pegwell-tuning');
+  const cells = [...given, ...own].map(({ text, line }) => {
     const [kind = ''] = text.split(/\s/, 1);
     return { kind, text: text.slice(kind.length).trim(), line };
-  };
-  const cells = own.map(read);
-  const named = new Set(cells.map(({ kind }) => kind.toLowerCase()));
-  const given = defaults.directives
-    .filter(({ name }) => name === 'pegwell-tuning')
-    .map(read)
-    .filter(({ kind }) => !named.has(kind.toLowerCase()));
-  return [...cells, ...given];
+  });
+  return [...new Map(cells.map((cell) => [kindNamed(cell.kind)?.id ?? cell.kind, cell])).values()];
 }

@@ -23,7 +23,7 @@ const MODE_WORDS: Readonly<Record<Mode, string>> = {
 /** The library as ABC 2.1 tune headers, numbered from 1, in UTF-8. Importing it again changes nothing. */
 export function writeAbc(tunes: readonly StoredTune[]): string {
   const written = tunes.map((tune, index) => writeTune(tune, index + 1));
-  return ['%abc-2.1\n', ...written].join('\n');
+  return ['%abc-2.1\nI:abc-creator Pegwell\n', ...written].join('\n');
 }
 
 function writeTune(tune: StoredTune, number: number): string {
