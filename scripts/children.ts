@@ -9,7 +9,12 @@ import { Sentence } from './sentence';
 /** How long a program may take to end by itself, in milliseconds. */
 const PATIENCE = 10_000;
 
-export type Child = { readonly name: string; readonly ended: Promise<number> };
+export type Child = {
+  readonly name: string;
+  readonly ended: Promise<number>;
+  /** Comes true with the first line that holds a text; never, when no such line comes. */
+  readonly says: (text: string) => Promise<void>;
+};
 
 type Start = {
   readonly name: string;
@@ -30,8 +35,12 @@ export function startChild({ name, program, args, cwd, env, named }: Start): Chi
     stdio: named ? ['ignore', 'pipe', 'pipe'] : ['ignore', 'inherit', 'inherit'],
     detached: true,
   });
-  if (child.stdout) prefixLines(child.stdout, name, process.stdout);
-  if (child.stderr) prefixLines(child.stderr, name, process.stderr);
+  const listeners = new Set<(line: string) => void>();
+  const heard = (line: string): void => {
+    for (const listener of listeners) listener(line);
+  };
+  if (child.stdout) passOn(child.stdout, name, process.stdout, heard);
+  if (child.stderr) passOn(child.stderr, name, process.stderr, heard);
   const ended = new Promise<number>((resolve) => {
     child.on('exit', (code) => resolve(code ?? 1));
     child.on('error', () => resolve(127));
@@ -41,12 +50,15 @@ export function startChild({ name, program, args, cwd, env, named }: Start): Chi
     noteChild(pid);
     atEnd(() => endGroup(pid));
   }
-  return { name, ended };
+  const says = (text: string): Promise<void> =>
+    new Promise((resolve) => listeners.add((line) => line.includes(text) && resolve()));
+  return { name, ended, says };
 }
 
-function prefixLines(from: Readable, name: string, to: NodeJS.WriteStream): void {
+function passOn(from: Readable, name: string, to: NodeJS.WriteStream, heard: (line: string) => void): void {
   createInterface({ input: from }).on('line', (line) => {
     if (line.trim()) to.write(`${name.padEnd(6)} | ${line}\n`);
+    heard(line);
   });
 }
 

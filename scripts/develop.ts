@@ -1,3 +1,4 @@
+import { existsSync } from 'node:fs';
 import { forgetBuild } from './build';
 import { startChild, type Child } from './children';
 import { remember, remembered } from './data-folder';
@@ -5,13 +6,21 @@ import { showDemoSignIns } from './demo-sign-ins';
 import { untilItAnswers, reachableAt } from './health';
 import { inRoot, installed } from './places';
 import { choosePort } from './ports';
-import { run } from './run';
 import { say, Sentence } from './sentence';
 import { askedPort, openSite, serverEnvironment, setting } from './site';
 
 const HOST = '127.0.0.1';
 const USUAL_PAGES = 5173;
 const USUAL_API = 3001;
+// What was compiled last time is kept in dist, so that a second start takes seconds.
+const COMPILE_SHARED = [
+  '-p',
+  'tsconfig.build.json',
+  '--incremental',
+  '--tsBuildInfoFile',
+  'dist/.tsbuildinfo',
+];
+const COMPILE_SERVER = ['start', '--config', 'nest-cli.dev.json'];
 
 /** Database, server and pages, all of which follow edits, with the demo circle; until Ctrl-C. */
 export async function develop(): Promise<number> {
@@ -20,13 +29,27 @@ export async function develop(): Promise<number> {
   const url = setting('PEGWELL_URL') ?? `http://${HOST}:${pages}`;
   const apiAddress = reachableAt(HOST, api);
 
-  // The server's build reads shared's, and from here on the watchers write both.
+  const compiledBefore = existsSync(inRoot('shared', 'dist', '.tsbuildinfo'));
+  // From here on the watchers write into dist.
   forgetBuild('shared', 'server');
-  say('Building ...');
-  const shared = ['-p', 'tsconfig.build.json'];
-  const built = await run(installed('tsc'), shared, { cwd: inRoot('shared') });
-  if (built.code !== 0) throw new Sentence(`shared does not compile:\n${built.output.trimEnd()}`);
-
+  const pagesServer = follow(
+    'client',
+    'vite',
+    ['--port', String(pages), '--strictPort', '--clearScreen', 'false'],
+    {
+      ...process.env,
+      NODE_ENV: 'development',
+      PEGWELL_API: apiAddress,
+    },
+  );
+  const shared = follow(
+    'shared',
+    'tsc',
+    [...COMPILE_SHARED, '--watch', '--preserveWatchOutput'],
+    process.env,
+  );
+  // The server's compiler reads what shared was compiled to. From last time that is there, and it follows changes.
+  if (!compiledBefore) await Promise.race([shared.says('Watching for file changes'), shared.ended]);
   const env = serverEnvironment({
     mode: 'development',
     databaseUrl,
@@ -35,16 +58,10 @@ export async function develop(): Promise<number> {
     url,
     demo: 'yes',
   });
-  const children = [
-    follow('shared', 'tsc', [...shared, '--watch', '--preserveWatchOutput'], process.env),
-    follow('server', 'nest', ['start', '--watch', '--preserveWatchOutput'], env),
-    follow('client', 'vite', ['--port', String(pages), '--strictPort', '--clearScreen', 'false'], {
-      ...process.env,
-      NODE_ENV: 'development',
-      PEGWELL_API: apiAddress,
-    }),
-  ];
-  const ended = Promise.race(children.map(async (child) => ({ child, code: await child.ended })));
+  const server = follow('server', 'nest', [...COMPILE_SERVER, '--watch', '--preserveWatchOutput'], env);
+  const ended = Promise.race(
+    [pagesServer, shared, server].map(async (child) => ({ child, code: await child.ended })),
+  );
   void greet(apiAddress, url);
   const { child, code } = await ended;
   throw new Sentence(`The ${child.name} program ended by itself (code ${code}); its reason stands above.`);

@@ -60,5 +60,7 @@ export function serverEnvironment({ mode, databaseUrl, port, host, url, demo }: 
     PEGWELL_SECRET: setting('PEGWELL_SECRET') ?? secret('secret'),
     PEGWELL_DATA_DIR: setting('PEGWELL_DATA_DIR') ?? path.join(DATA, 'files'),
     PEGWELL_DEMO: setting('PEGWELL_DEMO') ?? demo,
+    // Among three programs that speak at once, only what is wrong.
+    PEGWELL_LOG: setting('PEGWELL_LOG') ?? (mode === 'development' ? 'warn' : 'info'),
   };
 }

@@ -43,6 +43,8 @@ export async function start(): Promise<number> {
 async function greet(address: string, url: string): Promise<void> {
   if (!(await untilItAnswers(`${address}/api/health`))) return;
   say(`\nPegwell is at ${url}`);
-  await showDemoSignIns(address);
+  // On somebody's real site nobody tries the demo's password.
+  const demoMayBe = setting('DATABASE_URL') === undefined || setting('PEGWELL_DEMO') === 'yes';
+  if (demoMayBe) await showDemoSignIns(address);
   say('Ctrl-C stops it.\n');
 }
