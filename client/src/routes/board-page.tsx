@@ -2,10 +2,13 @@ import type { Session, UpdateSession } from '@pegwell/shared/contract/sessions';
 import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { useParams, useSearchParams } from 'react-router-dom';
 import { useMe } from '../features/accounts/hooks/use-me';
+import type { Order } from '../features/ordering/compare';
+import { SuggestionView } from '../features/ordering/components/suggestion-view';
 import { getSession, sessionKey, updateSession } from '../features/sessions/api/session';
 import { Board } from '../features/sessions/components/board';
 import { useBoard } from '../features/sessions/hooks/use-board';
 import { sentenceOf } from '../lib/problem';
+import { useMedia } from '../lib/use-media';
 import { LinkButton } from '../ui/button';
 import { Page } from '../ui/page';
 import { Failing, Loading } from '../ui/states';
@@ -14,6 +17,9 @@ import { useAssumedFor } from './use-assumed-for';
 
 /** Milliseconds between two looks at what the other hosts do, while the page is seen. */
 const LOOK = 5_000;
+
+/** Milliseconds for which the old order is seen again before its cards travel to the new one. */
+const SETTLE = 450;
 
 /** One evening: built by a host, read by a player. */
 export function BoardPage() {
@@ -51,7 +57,8 @@ function Evening({ session, accountId }: { readonly session: Session; readonly a
   const queries = useQueryClient();
   const assumedFor = useAssumedFor(session.circleId);
   const say = useSay();
-  const [, setSearch] = useSearchParams();
+  const [search, setSearch] = useSearchParams();
+  const calm = useMedia('(prefers-reduced-motion: reduce)');
   const mayChange = session.can.includes('sessions.change') && session.status !== 'finished';
 
   const update = async (changes: UpdateSession) => {
@@ -60,6 +67,29 @@ function Evening({ session, accountId }: { readonly session: Session; readonly a
     held.receive(changed);
   };
 
+  /** Back to the board first, so that the cards are seen to travel. */
+  const take = async (label: string, version: number, order: Order) => {
+    setSearch({}, { replace: true });
+    if (!calm) await new Promise((go) => setTimeout(go, SETTLE));
+    try {
+      await held.accept(label, { version, sets: order.map((ids) => [...ids]) });
+      say(`${label}.`, { label: 'Undo', onPress: () => held.takeBack() });
+    } catch (error) {
+      say(sentenceOf(error));
+    }
+  };
+
+  if (search.has('suggest') && mayChange) {
+    return (
+      <SuggestionView
+        session={held.session}
+        board={held.board}
+        save={held.flush}
+        onTake={(label, version, order) => void take(label, version, order)}
+        onKeep={() => setSearch({}, { replace: true })}
+      />
+    );
+  }
   return (
     <Board
       held={held}

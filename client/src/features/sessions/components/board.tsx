@@ -176,7 +176,7 @@ export function Board({ held, mayChange, assumedFor, onSuggest, onGoal, onUpdate
               </p>
             </div>
           ) : null}
-          <HeldContext value={{ heldId: drag.held?.id ?? null, target: drag.target, promise }}>
+          <HeldContext value={{ heldId: drag.held?.id ?? null, target: drag.target }}>
             <LazyMotion features={motionFeatures}>
               <MotionConfig reducedMotion="user" transition={{ duration: 0.45, ease: [0.2, 0.7, 0.2, 1] }}>
                 <LayoutGroup>
@@ -269,6 +269,7 @@ export function Board({ held, mayChange, assumedFor, onSuggest, onGoal, onUpdate
               place={heldPlace}
               chairs={changing}
             />
+            {drag.draft ? <span className={cardStyles.promise}>{promise}</span> : null}
           </div>
         ) : null}
       </DragOverlay>

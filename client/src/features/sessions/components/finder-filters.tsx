@@ -23,17 +23,6 @@ export function FinderFilters({ filter, onFilter, kinds, problem }: FinderFilter
   const name = builtInKind(filter.kind)?.name ?? 'Fiddle';
   return (
     <div className={styles.filters}>
-      <SelectField
-        label="Key"
-        hideLabel
-        value={filter.key}
-        onChange={(event) => onFilter({ ...filter, key: event.target.value })}
-      >
-        <option value="">Any key</option>
-        {TONICS.map((tonic) => (
-          <option key={tonic}>{tonic}</option>
-        ))}
-      </SelectField>
       {kinds.length > 1 ? (
         <SelectField
           label="Instrument of the tuning"
@@ -51,7 +40,7 @@ export function FinderFilters({ filter, onFilter, kinds, problem }: FinderFilter
       <TextField
         label={`Tuning of the ${name.toLowerCase()}`}
         hideLabel
-        placeholder={`${name}: AEAE`.replace('Fiddle: ', 'Tuning ')}
+        placeholder="Tuning"
         autoComplete="off"
         autoCapitalize="off"
         spellCheck={false}
@@ -59,6 +48,17 @@ export function FinderFilters({ filter, onFilter, kinds, problem }: FinderFilter
         error={problem}
         onChange={(event) => onFilter({ ...filter, tuning: event.target.value })}
       />
+      <SelectField
+        label="Key"
+        hideLabel
+        value={filter.key}
+        onChange={(event) => onFilter({ ...filter, key: event.target.value })}
+      >
+        <option value="">Any key</option>
+        {TONICS.map((tonic) => (
+          <option key={tonic}>{tonic}</option>
+        ))}
+      </SelectField>
     </div>
   );
 }

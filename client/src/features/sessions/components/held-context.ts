@@ -5,11 +5,9 @@ interface Held {
   /** The entry in the hand; null when nothing is. */
   readonly heldId: string | null;
   readonly target: Pick<SlotData, 'setId' | 'index'> | null;
-  /** What the evening would cost: "45 pegs, 5 fewer". */
-  readonly promise: string;
 }
 
-const NOTHING: Held = { heldId: null, target: null, promise: '' };
+const NOTHING: Held = { heldId: null, target: null };
 
 export const HeldContext = createContext<Held>(NOTHING);
 

@@ -17,9 +17,9 @@ interface SlotProps {
   readonly className?: string | undefined;
 }
 
-/** Where a card can be put down. While one is held over it a line shows, with what the evening then costs. */
+/** Where a card can be put down; while one is held over it, a line shows. */
 export function Slot({ setId, index, around, closed = false, children, className }: SlotProps) {
-  const { heldId, target, promise } = useHeld();
+  const { heldId, target } = useHeld();
   const own = heldId !== null && around.includes(heldId);
   const data: SlotData = { slot: true, setId, index, own };
   const { setNodeRef } = useDroppable({ id: slotId(setId, index), data, disabled: closed });
@@ -27,11 +27,7 @@ export function Slot({ setId, index, around, closed = false, children, className
   return (
     <div ref={setNodeRef} className={`${styles.slot} ${className ?? ''}`}>
       {children}
-      {here ? (
-        <div className={styles.line} aria-hidden="true">
-          <span>{promise}</span>
-        </div>
-      ) : null}
+      {here ? <div className={styles.line} /> : null}
     </div>
   );
 }
