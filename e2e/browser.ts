@@ -37,6 +37,12 @@ export async function person(
     locale: 'en-GB',
     timezoneId: 'Europe/Berlin',
   });
+  // What the light switch stores: the phone's pages are in lamp unless somebody chose otherwise.
+  await context.addInitScript((chosen) => {
+    localStorage.setItem('pegwell-light-desk', chosen);
+    localStorage.setItem('pegwell-light-phone', chosen);
+  }, light);
+  context.setDefaultTimeout(20_000);
   const page = await context.newPage();
   const foreign = foreignRequests(page, siteUrl);
   return { context, page, foreign };
