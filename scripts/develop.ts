@@ -7,7 +7,7 @@ import { untilItAnswers, reachableAt } from './health';
 import { inRoot, installed } from './places';
 import { choosePort } from './ports';
 import { say, Sentence } from './sentence';
-import { askedPort, openSite, serverEnvironment, setting } from './site';
+import { askedPort, claimSite, openDatabase, serverEnvironment, setting } from './site';
 
 const HOST = '127.0.0.1';
 const USUAL_PAGES = 5173;
@@ -24,8 +24,9 @@ const COMPILE_SERVER = ['start', '--config', 'nest-cli.dev.json'];
 
 /** Database, server and pages, all of which follow edits, with the demo circle; until Ctrl-C. */
 export async function develop(): Promise<number> {
-  const { databaseUrl } = await openSite();
+  await claimSite();
   const { pages, api } = await choosePorts();
+  const databaseUrl = await openDatabase();
   const url = setting('PEGWELL_URL') ?? `http://${HOST}:${pages}`;
   const apiAddress = reachableAt(HOST, api);
 

@@ -52,7 +52,7 @@ export async function choosePort({ whose, asked, usual, host, not = [] }: Choice
     if (await isFree(asked.port, host)) return asked.port;
     throw new Sentence(
       `Port ${asked.port} (${asked.by}) is taken by another program. ` +
-        `Stop that program, or choose another port: ${asked.by}=${asked.port + 1} ./docker-free-dev.sh`,
+        `Stop that program, or choose another port, as in ${asked.by}=${asked.port + 1} ./docker-free-dev.sh`,
     );
   }
   for (let port = usual; port < usual + 100 && port <= 65_535; port++) {

@@ -13,15 +13,21 @@ export function setting(name: string): string | undefined {
   return process.env[name]?.trim() || undefined;
 }
 
-/** Opens .data/ and the database. With DATABASE_URL set it is that one, and nothing is made or stopped. */
-export async function openSite(): Promise<{ readonly databaseUrl: string }> {
+/** Opens .data/ and makes sure that nobody else runs from it. Before anything is started. */
+export async function claimSite(): Promise<void> {
   await openDataFolder();
-  const given = setting('DATABASE_URL');
-  if (given === undefined) refuseSecondRun();
-  noteCommand(given === undefined);
+  const ownDatabase = setting('DATABASE_URL') === undefined;
+  if (ownDatabase) refuseSecondRun();
+  noteCommand(ownDatabase);
   atEnd(() => forgetCommand());
-  if (given !== undefined) say('Using the database of DATABASE_URL.');
-  return { databaseUrl: given ?? (await ownDatabase()) };
+}
+
+/** The URL of the database: DATABASE_URL, where nothing is made or stopped, or the project's own, started. */
+export async function openDatabase(): Promise<string> {
+  const given = setting('DATABASE_URL');
+  if (given === undefined) return ownDatabase();
+  say('Using the database of DATABASE_URL.');
+  return given;
 }
 
 function refuseSecondRun(): void {

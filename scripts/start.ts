@@ -1,18 +1,20 @@
+import { mkdirSync, readFileSync, rmSync } from 'node:fs';
+import path from 'node:path';
 import { build } from './build';
 import { startChild } from './children';
 import { remember, remembered } from './data-folder';
 import { showDemoSignIns } from './demo-sign-ins';
 import { reachableAt, untilItAnswers } from './health';
-import { inRoot } from './places';
+import { CACHE, inRoot } from './places';
 import { choosePort } from './ports';
 import { say, Sentence } from './sentence';
-import { askedPort, openSite, serverEnvironment, setting } from './site';
+import { askedPort, claimSite, openDatabase, serverEnvironment, setting } from './site';
 
 const USUAL_SITE = 3000;
 
 /** As in production: built, one Node.js process that serves the API and the pages; until Ctrl-C. */
 export async function start(): Promise<number> {
-  const { databaseUrl } = await openSite();
+  await claimSite();
   const host = setting('PEGWELL_HOST') ?? '127.0.0.1';
   const asked = askedPort();
   const port = await choosePort({
@@ -25,9 +27,8 @@ export async function start(): Promise<number> {
   const address = reachableAt(host, port);
   const url = setting('PEGWELL_URL') ?? address;
 
-  for (const workspace of ['shared', 'server', 'client'] as const) {
-    if ((await build(workspace, 'show')) !== 0) throw new Sentence(`${workspace} does not build; see above.`);
-  }
+  await buildAll();
+  const databaseUrl = await openDatabase();
   const server = startChild({
     name: 'server',
     program: process.execPath,
@@ -38,6 +39,19 @@ export async function start(): Promise<number> {
   });
   void greet(address, url);
   throw new Sentence(`The server ended by itself (code ${await server.ended}); its reason stands above.`);
+}
+
+async function buildAll(): Promise<void> {
+  const log = path.join(CACHE, 'build.log');
+  mkdirSync(CACHE, { recursive: true });
+  rmSync(log, { force: true });
+  say('Building what has changed ...');
+  for (const workspace of ['shared', 'server', 'client'] as const) {
+    if ((await build(workspace, { file: log })) === 0) continue;
+    throw new Sentence(
+      `${readFileSync(log, 'utf8').trimEnd()}\n${workspace} does not build; its reason stands above.`,
+    );
+  }
 }
 
 async function greet(address: string, url: string): Promise<void> {

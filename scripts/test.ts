@@ -3,6 +3,7 @@ import path from 'node:path';
 import { findBrowser } from './browser';
 import { isEnding } from './ending';
 import { CACHE } from './places';
+import { findPoppler } from './poppler';
 import { say, Sentence } from './sentence';
 import { ONE_FAILED, sum, type Counts } from './test-report';
 import { PARTS, STEPS, type Part, type Step } from './test-steps';
@@ -31,6 +32,7 @@ async function environment(parts: readonly Part[]): Promise<NodeJS.ProcessEnv> {
     ([name]) => !/^(PEGWELL_|PG)/.test(name) && !['DATABASE_URL', 'PORT', 'NODE_ENV'].includes(name),
   );
   const needsDatabase = parts.includes('server') || parts.includes('e2e');
+  if (parts.includes('server')) await findPoppler();
   return {
     ...Object.fromEntries(own),
     CI: 'true',
