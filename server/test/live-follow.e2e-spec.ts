@@ -27,6 +27,7 @@ describe('what phones see', () => {
       kinds: ['fiddle'],
       referenceA: 440,
       total: 5,
+      followUrl: `${test.env.PEGWELL_URL}/f/${evening.session.code}`,
       now: null,
       // The first tune wants a retune: no tune is played before it.
       retuneIn: 0,

@@ -33,6 +33,7 @@ describe('the host’s console', () => {
       stepAt: null,
       finishedAt: null,
       called: [],
+      followUrl: `${test.env.PEGWELL_URL}/f/${evening.session.code}`,
     });
   });
 

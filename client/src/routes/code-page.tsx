@@ -1,9 +1,24 @@
-import { Page, PageHeading } from '../ui/page';
+import { useNavigate } from 'react-router-dom';
+import { CodeForm } from '../features/live/components/code-form';
+import styles from '../features/live/components/follow.module.css';
+import { useLight } from '../theme/light';
+import { Mark } from '../ui/mark';
 
+/** Where a code is typed in: for those who cannot scan it. */
 export function CodePage() {
+  useLight('phone');
+  const navigate = useNavigate();
   return (
-    <Page>
-      <PageHeading title="Follow the evening" />
-    </Page>
+    <div className={styles.page}>
+      <title>Follow the evening · Pegwell</title>
+      <header className={styles.top}>
+        <Mark />
+      </header>
+      <main className={styles.plain}>
+        <h1>Follow the evening</h1>
+        <p>See what is played, what your instrument is tuned to, and which peg to turn next.</p>
+        <CodeForm onCode={(code) => void navigate(`/f/${code}`)} />
+      </main>
+    </div>
   );
 }

@@ -2,11 +2,13 @@ import { Inject, Injectable } from '@nestjs/common';
 import { builtInKind } from '@pegwell/shared/music/instrument';
 import { cannotBe, ProblemException } from '../common/problem';
 import { DATABASE, type RootDatabase } from '../database/database';
+import { ENV, type Env } from '../env';
 import { walkOf } from '../sessions/evening';
 import { EveningsService } from '../sessions/evenings.service';
 import { CODE_LENGTH, CODE_LETTERS, normalCode } from '../sessions/session-code';
 import { presentFollow, type Followed } from './follow';
 import { FollowMemory, type Remembered } from './follow-memory';
+import { followUrl } from './follow-url';
 import { LiveRepository } from './live.repository';
 
 /** A code stops working this long after the end. */
@@ -37,6 +39,7 @@ export class FollowService {
     @Inject(DATABASE) private readonly db: RootDatabase,
     private readonly evenings: EveningsService,
     private readonly live: LiveRepository,
+    @Inject(ENV) private readonly env: Env,
   ) {}
 
   /** @param typed the code as a person typed it */
@@ -76,6 +79,7 @@ export class FollowService {
           stored,
           walk: walkOf(stored),
           phase: (await this.live.state(tx, id))?.phase ?? null,
+          followUrl: followUrl(this.env, code),
           answers: new Map(),
         };
       },

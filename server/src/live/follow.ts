@@ -14,6 +14,7 @@ export interface Followed {
   readonly phase: Phase | null;
   /** The follow version. */
   readonly version: number;
+  readonly followUrl: string;
 }
 
 interface Stand {
@@ -22,7 +23,10 @@ interface Stand {
 }
 
 /** What the phone of one kind shows: now, next, later, and how many tunes until it is its turn to turn. */
-export function presentFollow({ stored, walk, phase, version }: Followed, kind: InstrumentKind): Follow {
+export function presentFollow(
+  { stored, walk, phase, version, followUrl }: Followed,
+  kind: InstrumentKind,
+): Follow {
   const { session, entries } = stored;
   const live = session.status === 'live' ? session.progress : null;
   const nowIndex = live ? entries.findIndex(({ id }) => id === live.nowEntryId) : -1;
@@ -64,6 +68,7 @@ export function presentFollow({ stored, walk, phase, version }: Followed, kind: 
     startsAt: session.startsAt.toISOString(),
     timeZone: session.timeZone,
     total: entries.length,
+    followUrl,
     now: now ? { ...show(now, facts), phase: phase ?? 'playing' } : null,
     next,
     later,

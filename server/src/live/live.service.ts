@@ -5,10 +5,12 @@ import { announceSession } from '../common/announce';
 import type { Member } from '../common/access';
 import { cannotBe, notFound, ProblemException } from '../common/problem';
 import { DATABASE, type Database, type RootDatabase } from '../database/database';
+import { ENV, type Env } from '../env';
 import { openingsOf, type StoredEvening } from '../sessions/evening';
 import { EveningsService } from '../sessions/evenings.service';
 import { SessionsService } from '../sessions/sessions.service';
 import { tuningsWith } from './called';
+import { followUrl } from './follow-url';
 import { LiveRepository, type LiveRow } from './live.repository';
 import { RecordService } from './record.service';
 
@@ -21,12 +23,13 @@ export class LiveService {
     private readonly evenings: EveningsService,
     private readonly live: LiveRepository,
     private readonly record: RecordService,
+    @Inject(ENV) private readonly env: Env,
   ) {}
 
   async get(sessionId: string): Promise<LiveState> {
     const stored = await this.evenings.load(this.db, sessionId);
     if (!stored) throw notFound();
-    return present(stored.session, await this.live.state(this.db, sessionId));
+    return this.present(stored.session, await this.live.state(this.db, sessionId));
   }
 
   /**
@@ -40,7 +43,7 @@ export class LiveService {
       const row = await this.live.state(tx, session.id);
       const first = step.actionId && (await this.live.answerTo(tx, session.id, step.actionId));
       if (first) return first;
-      const current = present(session, row);
+      const current = this.present(session, row);
       if (step.liveVersion !== undefined && step.liveVersion !== current.liveVersion) {
         throw new ProblemException('changed', 'Another step was taken meanwhile.', { current });
       }
@@ -63,7 +66,7 @@ export class LiveService {
       if (result.unknownEntry) throw cannotBe([{ path: 'entryId', message: result.reason }]);
       throw new ProblemException('live-impossible', result.reason);
     }
-    if (result.outcome === 'unchanged') return present(session, row);
+    if (result.outcome === 'unchanged') return this.present(session, row);
 
     const at = new Date();
     const { status, phase, progress } = result.standing;
@@ -80,7 +83,31 @@ export class LiveService {
     await this.live.write(tx, after);
     await this.record.note(tx, stored, result, step.action, at);
     await announceSession(tx, session.id);
-    return present({ ...session, status, progress }, after);
+    return this.present({ ...session, status, progress }, after);
+  }
+
+  private present(
+    session: {
+      readonly id: string;
+      readonly code: string;
+      readonly status: Standing['status'];
+      readonly progress: Standing['progress'];
+    },
+    row: LiveRow | null,
+  ): LiveState {
+    const live = session.status === 'live' ? session.progress : null;
+    return {
+      sessionId: session.id,
+      liveVersion: row?.liveVersion ?? 0,
+      status: session.status,
+      nowEntryId: live?.nowEntryId ?? null,
+      phase: live ? (row?.phase ?? null) : null,
+      startedAt: row?.startedAt?.toISOString() ?? null,
+      stepAt: row?.stepAt?.toISOString() ?? null,
+      finishedAt: row?.finishedAt?.toISOString() ?? null,
+      called: [...(session.progress?.called ?? [])],
+      followUrl: followUrl(this.env, session.code),
+    };
   }
 }
 
@@ -90,27 +117,5 @@ function roomOf(stored: StoredEvening): LiveRoom {
     openings: openingsOf(stored.session),
     kinds: stored.chairs.map(({ kind }) => kind),
     tuningsFor: (entryId) => tuningsWith(stored, entryId),
-  };
-}
-
-function present(
-  session: {
-    readonly id: string;
-    readonly status: Standing['status'];
-    readonly progress: Standing['progress'];
-  },
-  row: LiveRow | null,
-): LiveState {
-  const live = session.status === 'live' ? session.progress : null;
-  return {
-    sessionId: session.id,
-    liveVersion: row?.liveVersion ?? 0,
-    status: session.status,
-    nowEntryId: live?.nowEntryId ?? null,
-    phase: live ? (row?.phase ?? null) : null,
-    startedAt: row?.startedAt?.toISOString() ?? null,
-    stepAt: row?.stepAt?.toISOString() ?? null,
-    finishedAt: row?.finishedAt?.toISOString() ?? null,
-    called: [...(session.progress?.called ?? [])],
   };
 }

@@ -37,6 +37,8 @@ export const liveStateSchema = z.object({
   stepAt: z.string().nullable(),
   finishedAt: z.string().nullable(),
   called: z.array(idSchema),
+  /** Where players follow: an address, also what the code to scan says. */
+  followUrl: z.string(),
 });
 export type LiveState = z.infer<typeof liveStateSchema>;
 
@@ -92,6 +94,8 @@ export const followSchema = z.object({
   startsAt: z.string(),
   timeZone: z.string(),
   total: z.number().int(),
+  /** Where others follow: the address that a screen on the wall shows. */
+  followUrl: z.string(),
   now: followTuneSchema.extend({ phase: phaseSchema }).nullable(),
   next: followTuneSchema.nullable(),
   later: z.array(followTuneSchema),
