@@ -12,7 +12,7 @@ export async function reset(): Promise<number> {
   if (setting('DATABASE_URL') !== undefined) {
     throw new Sentence(
       'DATABASE_URL is set, and reset never touches a database it did not make. ' +
-        'To remove this checkout’s own: env -u DATABASE_URL ./docker-free-dev.sh reset',
+        'To remove the one of this checkout: env -u DATABASE_URL ./docker-free-dev.sh reset',
     );
   }
   if (!existsSync(DATA)) {
