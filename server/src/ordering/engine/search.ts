@@ -1,6 +1,6 @@
-import { Bound, LARGE_BOUND, SMALL_BOUND } from './bound';
+import { Bound, LARGE_BOUND, SMALL_BOUND, type BoundLimits } from './bound';
 import { compile, type Compiled } from './compiled';
-import { dealt } from './deal';
+import { dealt, dealtApart } from './deal';
 import { someOrder } from './feasible';
 import { TooManyWays } from './moves';
 import { orderCost } from './order-cost';
@@ -11,14 +11,24 @@ import { isLess, NEVER, sweep, sweepBack, type Cost, type SweepOptions, type Swe
 import type { Plan } from './units';
 import { weightsFor, type Weights } from './weights';
 
-/** States kept per position while looking for a good order before its proof. */
-const WIDTHS = { first: 24, tunings: 200, later: 48 };
+/** How a search goes about its work; every setting leads to the same scores and, given steps, proofs. */
+export interface SearchSettings {
+  /** States kept per position while looking for a good order: before anything is proved, and later. */
+  readonly widths: { readonly first: number; readonly later: number };
+  /** Bounds to try in turn, with the steps that the first stage may take under each. */
+  readonly bounds: readonly { readonly limits: BoundLimits; readonly share: number }[];
+  /** After a sweep of fewer steps the next may rise in leaps; dearer ones feel their way. */
+  readonly cheapSweep: number;
+}
 
-/** After a sweep of fewer steps the next may rise in leaps; dearer ones feel their way. */
-const CHEAP_SWEEP = 5_000;
-
-/** Steps that the first stage may take under the small bound. */
-const SMALL_SHARE = 60_000;
+export const SETTINGS: SearchSettings = {
+  widths: { first: 200, later: 48 },
+  bounds: [
+    { limits: SMALL_BOUND, share: 60_000 },
+    { limits: LARGE_BOUND, share: Infinity },
+  ],
+  cheapSweep: 5_000,
+};
 
 /** What a search has found, and how much of it is certain. */
 export interface Found {
@@ -33,7 +43,7 @@ type Base = Pick<SweepOptions, 'bound' | 'steps' | 'keyWeight'>;
 
 /**
  * Three stages, each closer than the one before and bounded by its exact cost to go: tunings alone, then
- * capos, ranks and spaced rhythms, then everything. Before each, narrow sweeps look for a good order; only
+ * capos, ranks and keys, then spaced rhythms too. Before each, narrow sweeps look for a good order; only
  * what can be better than the best order known is followed, so that an empty sweep is a proof.
  */
 export class Search {
@@ -50,6 +60,7 @@ export class Search {
     private readonly problem: OrderingProblem,
     private readonly plan: Plan,
     private readonly steps: Steps,
+    private readonly settings: SearchSettings,
   ) {
     this.compiled = compile(problem);
     this.weights = weightsFor(this.compiled, problem.goal);
@@ -86,32 +97,32 @@ export class Search {
     const tunings = new Stage(compiled, plan, weights, 'tunings');
     const swept = this.tuningsSwept(tunings);
     if (swept === null) return;
-    let coarse = swept.swept;
-    for (const closeness of ['choices', 'all'] as const) {
-      sweepBack(coarse, steps);
-      const base = { ...swept.base, coarse };
-      this.look({ ...base, stage: this.all }, WIDTHS.later);
-      const stage = closeness === 'all' ? this.all : new Stage(compiled, plan, weights, closeness);
-      const next = this.deepened({ ...base, stage });
-      if (next === null) return;
-      coarse = next;
-    }
+    sweepBack(swept.swept, steps);
+    const keys = new Stage(compiled, plan, weights, 'keys');
+    const byTunings = { ...swept.base, coarse: swept.swept };
+    this.look({ ...byTunings, stage: keys }, this.settings.widths.later);
+    if (this.deepened({ ...byTunings, stage: keys, together: true }) === null) return;
+    if (!isLess(this.least, this.best!.cost)) return;
+
+    // Only spaced rhythms stand between the bound and the best order known.
+    const coarse = this.deepened({ ...byTunings, stage: keys });
+    if (coarse === null) return;
+    sweepBack(coarse, steps);
+    const byKeys = { ...swept.base, coarse };
+    this.look({ ...byKeys, stage: this.all }, this.settings.widths.later);
+    this.deepened({ ...byKeys, stage: this.all, together: true });
   }
 
   /** The first stage, under a bound that is quickly made, and where that leaves too much, a better one. */
   private tuningsSwept(stage: Stage): { readonly swept: Swept; readonly base: Base } | null {
     const { compiled, plan, problem, weights, steps } = this;
-    for (const [limits, share] of [
-      [SMALL_BOUND, SMALL_SHARE],
-      [LARGE_BOUND, Infinity],
-    ] as const) {
+    for (const { limits, share } of this.settings.bounds) {
       const bound = new Bound(compiled, plan, problem.goal, weights, limits, steps);
       const root = new Int32Array(stage.stride);
       stage.start(root);
       this.raise({ high: bound.toGo(stage, root, 0, 0), low: 0 });
       const base: Base = { bound, steps, keyWeight: weights.key };
-      this.look({ ...base, stage: this.all, coarse: null }, WIDTHS.first);
-      this.look({ ...base, stage, coarse: null }, WIDTHS.tunings);
+      this.look({ ...base, stage, coarse: null }, this.settings.widths.first);
       try {
         const swept = this.deepened({ ...base, steps: steps.within(share), stage, coarse: null });
         return swept && { swept, base };
@@ -129,7 +140,7 @@ export class Search {
    *
    * @returns null where nothing at this stage can cost less than the best order
    */
-  private deepened(base: Base & Pick<SweepOptions, 'stage' | 'coarse'>): Swept | null {
+  private deepened(base: Base & Pick<SweepOptions, 'stage' | 'coarse' | 'together'>): Swept | null {
     const { peg, stop } = this.weights;
     const [small, large] = [Math.min(peg, stop), Math.max(peg, stop)];
     for (let rise = 4 * small; ;) {
@@ -142,14 +153,14 @@ export class Search {
       if (swept.best === null) {
         this.raise(isLess(swept.nextLeast, under) ? under : swept.nextLeast);
         if (under === best) return null;
-        const cheap = this.steps.taken - before < CHEAP_SWEEP;
+        const cheap = this.steps.taken - before < this.settings.cheapSweep;
         rise = cheap ? Math.max(large, 1.5 * rise) : 4 * small;
         continue;
       }
       this.raise(swept.best);
       this.offer(base.stage, swept.order!);
       // The table must hold all that can still be better than the best order.
-      if (under === best || !isLess(under, this.best!.cost)) return swept;
+      if (base.together || under === best || !isLess(under, this.best!.cost)) return swept;
       if (!isLess(this.least, this.best!.cost)) return null;
       return sweep({ ...base, under: this.best!.cost, width: Infinity });
     }
@@ -166,7 +177,15 @@ export class Search {
 
   /** @param order units in playing order, each of which stands for its class of that stage */
   private offer(stage: Stage, order: readonly number[]): void {
-    const entries = dealt(stage, order);
+    this.offerEntries(dealt(stage, order));
+    if (stage === this.all) return;
+    const { entries } = this.compiled;
+    this.offerEntries(
+      dealtApart(stage, order, (unit) => entries[this.plan.units[unit]!.entries.at(-1)!]!.spaced),
+    );
+  }
+
+  private offerEntries(entries: readonly number[]): void {
     const cost = orderCost(this.all, unitsOf(this.plan, entries));
     if (isLess(cost, this.best!.cost)) this.best = { entries, cost };
   }

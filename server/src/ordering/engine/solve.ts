@@ -2,7 +2,7 @@ import { scoreEvening } from '@pegwell/shared/session/score';
 import { clashing, rulesOf } from './clash';
 import { hostRules } from './host-rules';
 import type { Answer, OrderingProblem, Solution } from './ordering-problem';
-import { Search, type Found } from './search';
+import { Search, SETTINGS, type Found, type SearchSettings } from './search';
 import { OutOfSteps, Steps } from './steps';
 import { planOf } from './units';
 
@@ -14,10 +14,15 @@ const RULE_STEPS = 300_000;
  * The best order of an evening under the host's rules, and how much of that is proved; or the rules that
  * clash; or, where the budget ended before that was known, neither.
  *
+ * @param settings for tests and benches
  * @param shouldStop asked now and then; true ends the search with the best so far
  * @throws RangeError where `sets` names an id that no tune has (a programmer's error)
  */
-export function solve(problem: OrderingProblem, shouldStop: () => boolean = () => false): Answer {
+export function solve(
+  problem: OrderingProblem,
+  shouldStop: () => boolean = () => false,
+  settings: SearchSettings = SETTINGS,
+): Answer {
   const order = problem.sets.flat();
   const setSizes = problem.sets.map(({ length }) => length).filter((size) => size > 0);
   const steps = new Steps(problem.stepBudget ?? STEP_BUDGET, shouldStop);
@@ -30,7 +35,7 @@ export function solve(problem: OrderingProblem, shouldStop: () => boolean = () =
     throw error;
   }
   const plan = planOf(rulesOf(order.length, setSizes, rules))!;
-  const found = new Search(problem, plan, steps).run();
+  const found = new Search(problem, plan, steps, settings).run();
   if (found === null) return { outcome: 'undecided', stopped: 'steps' };
   return solutionOf(problem, order, found, steps.taken);
 }

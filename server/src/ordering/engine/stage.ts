@@ -6,10 +6,10 @@ import type { Weights } from './weights';
 
 /**
  * How closely a sweep looks. `tunings`: entries with the same tunings are one class, and capos, ranks, rhythms
- * and keys cost nothing. `choices`: capos, ranks and spaced rhythms too. `all`: everything.
+ * and keys cost nothing. `keys`: only spaced rhythms cost nothing. `all`: everything.
  * What costs nothing at a coarser stage makes its cost to go a bound for the finer one.
  */
-export type Closeness = 'tunings' | 'choices' | 'all';
+export type Closeness = 'tunings' | 'keys' | 'all';
 
 /**
  * The units of a problem sorted into classes of which one is as good as another, and states packed as
@@ -64,8 +64,7 @@ export class Stage {
       return faces.push({ tonic, spaced }) - 1;
     };
     const keyOf = ({ tonic, spaced }: { tonic: number; spaced: boolean }): number => {
-      if (closeness === 'tunings') return 0;
-      return closeness === 'all' ? face(tonic, spaced) : spaced ? face(-2, true) : 0;
+      return closeness === 'tunings' ? 0 : face(tonic, closeness === 'all' && spaced);
     };
     this.headKey = Int32Array.from(entriesOf, (entries) => keyOf(entries[0]!));
     this.tailKey = Int32Array.from(entriesOf, (entries) => keyOf(entries[entries.length - 1]!));

@@ -20,8 +20,16 @@ export class Successors {
   private readonly lastCall: Int32Array;
   private readonly fits: readonly (Uint8Array | null)[];
   private readonly hasDeadlines: boolean;
+  /** From this position on, the place before an entry is on the clock and nothing ahead is fixed. */
+  private readonly openFrom: number;
+  /** By class: whether it shows a spaced rhythm, as far as the stage sees them. */
+  private readonly spaced: Uint8Array;
 
-  constructor(private readonly stage: Stage) {
+  /** @param together follow only one of the orders that are alike to this stage; see {@link staysTogether} */
+  constructor(
+    private readonly stage: Stage,
+    private readonly together: boolean,
+  ) {
     const { plan } = stage;
     const count = plan.setStart.length;
     this.latest = latestStarts(plan) ?? plan.units.map(() => count);
@@ -31,6 +39,14 @@ export class Successors {
       return plain ? count : Math.min(this.latest[unit!]!, count - entries.length);
     });
     this.fits = stage.members.map(([unit]) => fitting(plan, unit!));
+    const { setStart, fixedUnitAt } = plan;
+    this.openFrom = count;
+    while (this.openFrom > 1 && !setStart[this.openFrom - 1] && fixedUnitAt[this.openFrom - 1] === -1)
+      this.openFrom--;
+    this.spaced = Uint8Array.from(stage.members, ([unit]) => {
+      const keys = [stage.headKey[unit!]!, stage.tailKey[unit!]!];
+      return keys.some((key) => stage.pairHigh[key * stage.keys + key] !== 0) ? 1 : 0;
+    });
     this.hasDeadlines = plan.units.some(({ after }) => after.length > 0);
   }
 
@@ -56,6 +72,7 @@ export class Successors {
       return;
     }
     if (!this.alive(rows, at, position)) return;
+    if (this.together && this.openFrom <= position && this.staysTogether(rows, at, position)) return;
     for (let c = 0; c < stage.members.length; c++) {
       if (stage.left(rows, at, c) === 0) continue;
       const fits = this.fits[c]!;
@@ -63,6 +80,44 @@ export class Successors {
       if (!this.mayCome(this.waits[c]!, rows, at, position)) continue;
       this.place(stage.members[c]![0]!, rows, at, position);
     }
+  }
+
+  /**
+   * Where no break and nothing fixed is ahead, an entry that fits what the last one left, at no cost at all, may
+   * as well come next: wherever an order has it, drawn forward to here it costs nothing, and the gap it leaves
+   * costs no more than it did (the triangle inequality). Not so for spaced rhythms, which it may keep apart.
+   * What is left out so has its like at this stage, but not at a finer one: no table may be read from it.
+   */
+  private staysTogether(rows: Int32Array, at: number, position: number): boolean {
+    const { stage } = this;
+    if (this.spacedLeft(rows, at) > 1) return false;
+    const joint = rows[at + stage.words]!;
+    for (let c = 0; c < stage.members.length; c++) {
+      if (this.spaced[c] === 1 || stage.left(rows, at, c) === 0) continue;
+      const unit = stage.members[c]![0]!;
+      if (!stage.plan.units[unit]!.plain) continue;
+      const pair = rows[at + stage.words + 1]! * stage.keys + stage.headKey[unit]!;
+      if (stage.pairHigh[pair] !== 0 || stage.pairLow[pair] !== 0) continue;
+      const { to, onHigh, onLow } = stage.moves.from(joint, stage.signature[unit]!);
+      for (let way = 0; way < to.length; way++) {
+        if (to[way] !== joint || onHigh[way] !== 0 || onLow[way] !== 0) continue;
+        this.count = 1;
+        this.unit[0] = unit;
+        this.joint[0] = joint;
+        this.high[0] = 0;
+        this.low[0] = 0;
+        return true;
+      }
+    }
+    return false;
+  }
+
+  /** Units left that show a spaced rhythm, as far as this stage sees it. */
+  private spacedLeft(rows: Int32Array, at: number): number {
+    let spaced = 0;
+    for (let c = 0; c < this.spaced.length; c++)
+      if (this.spaced[c] === 1) spaced += this.stage.left(rows, at, c);
+    return spaced;
   }
 
   private mayCome(earlier: readonly number[], rows: Int32Array, at: number, position: number): boolean {

@@ -44,6 +44,8 @@ export interface SweepOptions {
   readonly steps: Steps;
   /** Of a change of key, in the low number. */
   readonly keyWeight: number;
+  /** Whether orders that are alike to this stage may be left out: only where no table is read from it. */
+  readonly together?: boolean;
   /** What one entry at another position than the host's costs, in the low number; 0: nothing. */
   readonly moved?: { readonly weight: number; readonly hostUnitAt: readonly number[] };
 }
@@ -60,8 +62,11 @@ export function sweep(options: SweepOptions): Swept {
   const { plan } = stage;
   const count = plan.setStart.length;
   const layers = Array.from({ length: count + 1 }, () => new Layer(stage.stride));
-  const successors = new Successors(stage);
-  const keyBound = stage.closeness === 'all' ? new KeyBound(stage, options.keyWeight) : null;
+  const successors = new Successors(stage, options.together ?? false);
+  const seesKeys = (closer: Stage | undefined): boolean =>
+    closer !== undefined && closer.closeness !== 'tunings';
+  const keyBound =
+    seesKeys(stage) && !seesKeys(coarse?.stage) ? new KeyBound(stage, options.keyWeight) : null;
   const project = coarse === null ? null : new Projection(stage, coarse);
   const state = new Int32Array(stage.stride);
   let exact = true;
@@ -175,7 +180,7 @@ export function sweep(options: SweepOptions): Swept {
 export function sweepBack({ stage, layers }: Swept, steps: Steps): void {
   const { plan } = stage;
   const count = plan.setStart.length;
-  const successors = new Successors(stage);
+  const successors = new Successors(stage, false);
   const state = new Int32Array(stage.stride);
   for (let position = count; position >= 0; position--) {
     const layer = layers[position]!;
