@@ -14,6 +14,7 @@ import { LiveModule } from './live/live.module';
 import { logging } from './logging';
 import { OrderingModule } from './ordering/ordering.module';
 import { SessionsModule } from './sessions/sessions.module';
+import { SheetsModule } from './sheets/sheets.module';
 import { TunesModule } from './tunes/tunes.module';
 
 /** Holds the parsed environment, so that every module can ask for it. */
@@ -37,6 +38,7 @@ export class AppModule {
         SessionsModule,
         OrderingModule,
         LiveModule,
+        SheetsModule,
         DemoModule,
         AccessModule,
       ],

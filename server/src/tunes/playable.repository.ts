@@ -20,6 +20,7 @@ export interface PlayableTune {
   readonly title: string;
   readonly rhythm: string | null;
   readonly parts: string | null;
+  readonly notes: string | null;
   readonly removed: boolean;
   readonly settings: readonly PlayableSetting[];
 }
@@ -39,8 +40,8 @@ export class PlayableRepository {
       .where(mine)
       .orderBy(asc(settings.createdAt), asc(settings.id), asc(settingTunings.kind), asc(settingTunings.rank));
     const found = new Map<string, PlayableTune & { settings: PlayableSetting[] }>();
-    for (const { id, title, rhythm, parts, removedAt } of tuneRows) {
-      found.set(id, { id, title, rhythm, parts, removed: removedAt !== null, settings: [] });
+    for (const { id, title, rhythm, parts, notes, removedAt } of tuneRows) {
+      found.set(id, { id, title, rhythm, parts, notes, removed: removedAt !== null, settings: [] });
     }
     const settingsById = new Map<string, { stated: Record<string, Tuned[] | 'any'> }>();
     for (const { setting, tuning } of rows) {

@@ -1,0 +1,4 @@
+import { sheetQuerySchema } from '@pegwell/shared/contract/sheets';
+import { createZodDto } from 'nestjs-zod';
+
+export class SheetQueryDto extends createZodDto(sheetQuerySchema) {}
