@@ -1,5 +1,6 @@
 import type { Session, UpdateSession } from '@pegwell/shared/contract/sessions';
 import { useQuery, useQueryClient } from '@tanstack/react-query';
+import { useEffect, useRef } from 'react';
 import { useParams, useSearchParams } from 'react-router-dom';
 import { useMe } from '../features/accounts/hooks/use-me';
 import type { Order } from '../features/ordering/compare';
@@ -61,6 +62,9 @@ function Evening({ session, accountId }: { readonly session: Session; readonly a
   const calm = useMedia('(prefers-reduced-motion: reduce)');
   const mayChange = session.can.includes('sessions.change') && session.status !== 'finished';
 
+  const suggesting = search.has('suggest') && mayChange;
+  const suggested = useRef(suggesting);
+
   const update = async (changes: UpdateSession) => {
     const changed = await updateSession(session.id, changes);
     queries.setQueryData(sessionKey(session.id), changed);
@@ -79,7 +83,15 @@ function Evening({ session, accountId }: { readonly session: Session; readonly a
     }
   };
 
-  if (search.has('suggest') && mayChange) {
+  // The keyboard goes along to the suggestion and back to the board.
+  useEffect(() => {
+    if (suggested.current === suggesting) return;
+    suggested.current = suggesting;
+    document.getElementById('main')?.focus({ preventScroll: true });
+    window.scrollTo(0, 0);
+  }, [suggesting]);
+
+  if (suggesting) {
     return (
       <SuggestionView
         session={held.session}

@@ -2,6 +2,7 @@ import { DndContext, DragOverlay } from '@dnd-kit/core';
 import type { Session, ShownEntry, UpdateSession } from '@pegwell/shared/contract/sessions';
 import type { Tune } from '@pegwell/shared/contract/tunes';
 import { setTitle, spotAt, standingOf } from '@pegwell/shared/session/board';
+import { DEFERENCE } from '@pegwell/shared/music/caution';
 import type { BoardOperation } from '@pegwell/shared/session/board-operations';
 import { priceOf } from '@pegwell/shared/session/board-price';
 import { LayoutGroup, LazyMotion, MotionConfig } from 'framer-motion';
@@ -260,6 +261,7 @@ export function Board({ held, mayChange, assumedFor, onSuggest, onGoal, onUpdate
           ) : null}
         </div>
       </div>
+      {scored.score.pegChanges > 0 ? <p className={styles.deference}>{DEFERENCE}</p> : null}
       <DragOverlay dropAnimation={null}>
         {drag.held ? (
           <div className={`${cardStyles.card} ${cardStyles.inHand}`}>

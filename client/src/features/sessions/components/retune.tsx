@@ -1,4 +1,4 @@
-import { cautions } from '@pegwell/shared/music/caution';
+import { cautions, type Grade } from '@pegwell/shared/music/caution';
 import { capoWords, moveWords } from '@pegwell/shared/music/words';
 import { showTuned } from '@pegwell/shared/music/tuning';
 import type { Chair, KindMove, Place } from '@pegwell/shared/session/evening';
@@ -69,7 +69,7 @@ function KindTurns({ chair, move, named, minutes }: KindTurnsProps) {
     );
   }
   const warnings = cautions(kind, from.pitches, to.pitches).filter(
-    ({ grade, twoGoes }) => grade === 'caution' || grade === 'refused' || twoGoes,
+    ({ grade, twoGoes }) => isGrave(grade) || twoGoes,
   );
   return (
     <div className={styles.turns}>
@@ -84,7 +84,7 @@ function KindTurns({ chair, move, named, minutes }: KindTurnsProps) {
           {minutes > 0 ? ` · about ${halfMinutes(minutes)}` : ''}
         </small>
         {warnings.map(({ courseIndex, grade, sentence }) => (
-          <small key={courseIndex} className={grade === 'none' ? undefined : styles.caution}>
+          <small key={courseIndex} className={isGrave(grade) ? styles.caution : undefined}>
             {sentence}
           </small>
         ))}
@@ -92,3 +92,6 @@ function KindTurns({ chair, move, named, minutes }: KindTurnsProps) {
     </div>
   );
 }
+
+/** A real caution; notes and long ways are said quietly. */
+export const isGrave = (grade: Grade): boolean => grade === 'caution' || grade === 'refused';
