@@ -37,6 +37,7 @@ export function ImportPage() {
         accept=".csv,.abc"
         file={file}
         error={it.error}
+        disabled={it.progressId !== null}
         onFile={it.choose}
         hint="A .csv or .abc file in UTF-8, at most 10 MB."
       />
@@ -53,7 +54,7 @@ export function ImportPage() {
           ) : done ? (
             <div className={styles.do}>
               <p className={styles.done}>
-                {`${grouped(done.created)} added, ${grouped(done.updated)} changed, ${grouped(done.unchanged)} as they were, ${grouped(done.skipped)} left out.`}
+                {`${grouped(done.created)} added, ${grouped(done.updated)} changed, ${grouped(done.unchanged)} unchanged, ${grouped(done.skipped)} left out.`}
               </p>
               <LinkButton to={tunesPath}>To the tunes</LinkButton>
             </div>

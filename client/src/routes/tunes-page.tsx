@@ -43,7 +43,16 @@ export function TunesPage() {
 
   return (
     <Page>
-      <PageHeading title="Tunes" about={found && !empty ? foundWords(found.total, active > 0) : undefined}>
+      <PageHeading
+        title="Tunes"
+        about={
+          tunes.isPlaceholderData
+            ? 'Looking …'
+            : found && !empty
+              ? foundWords(found.total, active > 0)
+              : undefined
+        }
+      >
         {mayChange && !empty ? (
           <>
             <LinkButton to={`/c/${circle.id}/tunes/new`}>Add a tune</LinkButton>

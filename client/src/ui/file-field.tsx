@@ -10,11 +10,13 @@ interface FileFieldProps {
   readonly accept: string;
   readonly file: File | null;
   readonly error?: string | undefined;
+  /** While a file is under way no other is taken. */
+  readonly disabled?: boolean;
   readonly onFile: (file: File) => void;
 }
 
 /** A place to drop one file, or to choose it. The chosen file stays named here whatever becomes of it. */
-export function FileField({ label, hint, accept, file, error, onFile }: FileFieldProps) {
+export function FileField({ label, hint, accept, file, error, disabled = false, onFile }: FileFieldProps) {
   const id = useId();
   const [over, setOver] = useState(false);
   return (
@@ -29,7 +31,7 @@ export function FileField({ label, hint, accept, file, error, onFile }: FileFiel
         event.preventDefault();
         setOver(false);
         const dropped = event.dataTransfer.files[0];
-        if (dropped) onFile(dropped);
+        if (dropped && !disabled) onFile(dropped);
       }}
     >
       <input
@@ -39,6 +41,7 @@ export function FileField({ label, hint, accept, file, error, onFile }: FileFiel
         accept={accept}
         aria-describedby={`${id}-hint ${id}-error`}
         aria-invalid={Boolean(error)}
+        disabled={disabled}
         onChange={(event) => {
           const chosen = event.target.files?.[0];
           // Emptied, so that the same file can be chosen again after it was mended.

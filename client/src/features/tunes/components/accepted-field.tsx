@@ -20,7 +20,8 @@ interface AcceptedFieldProps {
   /** 0 for the first choice. */
   readonly rank: number;
   readonly onFirst: () => void;
-  readonly onRemove: () => void;
+  /** Left out where it is the only one: then the whole instrument is unsaid. */
+  readonly onRemove?: () => void;
 }
 
 /** One accepted tuning as it is typed, with its capo, and the pegs it turns from standard. */
@@ -70,9 +71,11 @@ export function AcceptedField({ form, kind, name, rank, onFirst, onRemove }: Acc
             Make it the first
           </Button>
         ) : null}
-        <Button look="quiet" onClick={onRemove}>
-          Take out<span className="visually-hidden"> {which}</span>
-        </Button>
+        {onRemove ? (
+          <Button look="quiet" onClick={onRemove}>
+            Take out <span className="visually-hidden">{which}</span>
+          </Button>
+        ) : null}
       </div>
     </div>
   );

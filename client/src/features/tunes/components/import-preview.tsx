@@ -11,7 +11,7 @@ const ROWS_A_PAGE = 100;
 const WORDS: Readonly<Record<ImportAction, { readonly plan: string; readonly done: string }>> = {
   create: { plan: 'new', done: 'added' },
   update: { plan: 'to be changed', done: 'changed' },
-  unchanged: { plan: 'as it is', done: 'as it was' },
+  unchanged: { plan: 'unchanged', done: 'unchanged' },
   skip: { plan: 'left out', done: 'left out' },
 };
 
@@ -24,7 +24,10 @@ interface ImportPreviewProps {
 /** A file line by line: what becomes of each tune, and why some are left out. Counts on top are filters. */
 export function ImportPreview({ report, tense }: ImportPreviewProps) {
   const { rows, notes } = useMemo(() => importRows(report), [report]);
-  const [only, setOnly] = useState<ImportAction | null>(null);
+  // Behind an import what was left out is what there is still to do.
+  const [only, setOnly] = useState<ImportAction | null>(
+    tense === 'done' && report.skipped > 0 ? 'skip' : null,
+  );
   const [page, setPage] = useState(1);
   const counts: readonly (readonly [ImportAction, number])[] = [
     ['create', report.created],

@@ -33,7 +33,7 @@ export function KindTuningsField({ form, kind, index, onRemove }: KindTuningsFie
           onChange={(event) => replace([{ tuning: event.target.checked ? 'any' : '', capo: 0 }])}
         />
         <Button look="quiet" onClick={onRemove}>
-          Say nothing<span className="visually-hidden"> for {kind.name}</span>
+          Say nothing <span className="visually-hidden">for {kind.name}</span>
         </Button>
       </div>
       {asItStands
@@ -46,11 +46,11 @@ export function KindTuningsField({ form, kind, index, onRemove }: KindTuningsFie
               name={`${name}.${rank}`}
               rank={rank}
               onFirst={() => move(rank, 0)}
-              onRemove={() => (fields.length === 1 ? onRemove() : remove(rank))}
+              {...(fields.length > 1 ? { onRemove: () => remove(rank) } : {})}
             />
           ))}
       {asItStands || fields.length >= MAX_ACCEPTED ? null : (
-        <Button look="plain" onClick={() => append({ tuning: '', capo: 0 })}>
+        <Button look="plain" className={styles.another} onClick={() => append({ tuning: '', capo: 0 })}>
           Accepts another as well
         </Button>
       )}

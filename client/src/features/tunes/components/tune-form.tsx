@@ -70,7 +70,7 @@ export function TuneForm({ initial, assumedFor, label, onSave, back }: TuneFormP
         />
       </div>
       <TuningsField form={form} assumedFor={(kindId) => assumedFor(kindId, key, mode)} />
-      <div className={styles.row}>
+      <div className={styles.pair}>
         <TextField
           label="Composer"
           hint="Empty for a traditional tune."

@@ -35,7 +35,9 @@ export function TuneTunings({ tune }: { readonly tune: Tune }) {
           ) : null;
         })}
       </ul>
-      <p className={styles.defer}>{DEFERENCE}</p>
+      <p className={styles.defer}>
+        Turn slowly, one peg at a time, your face out of the line of the string. {DEFERENCE}
+      </p>
     </>
   );
 }
@@ -48,20 +50,19 @@ interface FromStandardProps {
 function FromStandard({ kind, pitches }: FromStandardProps) {
   const standard = standardPitches(kind);
   const words = retuneWords(kind, standard, pitches);
+  // A note (up a tone on a wound string) is said on the tunings page; here only what can break a string.
   const toWatch = cautions(kind, standard, pitches).filter(
-    ({ grade, twoGoes }) => grade !== 'note' || twoGoes,
+    ({ grade }) => grade === 'caution' || grade === 'refused',
   );
   return (
-    <>
+    <div className={styles.turns}>
       <PegStrip kind={kind} from={standard} to={pitches} whenStill="pegs" wordsBeside />
-      <div>
-        <p>{words ? `From standard: ${words}` : 'Standard: nothing to turn'}</p>
-        {toWatch.map(({ courseIndex, sentence }) => (
-          <p key={courseIndex} className={styles.caution}>
-            {sentence}
-          </p>
-        ))}
-      </div>
-    </>
+      <p>{words ? `From standard: ${words}` : 'Standard: nothing to turn'}</p>
+      {toWatch.map(({ courseIndex, sentence }) => (
+        <p key={courseIndex} className={styles.caution}>
+          {sentence}
+        </p>
+      ))}
+    </div>
   );
 }

@@ -44,10 +44,10 @@ export function TuningsField({ form, assumedFor }: TuningsFieldProps) {
         <div key={id} className={styles.assumed}>
           <span className={styles.kind}>{name}</span>
           <span>
-            assumed <TuningText text={assumedFor(id)} />
+            assumed <TuningText text={assumedFor(id)} className={styles.light} />
           </span>
           <Button look="plain" onClick={() => state(id)}>
-            Say its tuning<span className="visually-hidden"> for {name}</span>
+            Say its tuning <span className="visually-hidden">for {name}</span>
           </Button>
         </div>
       ))}

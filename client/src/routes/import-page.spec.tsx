@@ -1,0 +1,153 @@
+import { fireEvent, screen, waitFor, within } from '@testing-library/react';
+import userEvent from '@testing-library/user-event';
+import type { ImportReport } from '@pegwell/shared/contract/tunes';
+import { describe, expect, it } from 'vitest';
+import { mockApi, ok, type Answer, type Answers } from '../lib/mock-api';
+import { renderApp } from './test-app';
+import { api, at, circleAnswers, id, page, refusal, tune } from './test-circle';
+
+const report: ImportReport = {
+  format: 'csv',
+  read: 4,
+  created: 1,
+  updated: 1,
+  unchanged: 1,
+  skipped: 1,
+  problems: [{ line: 5, tune: 'Short', message: 'A fiddle has 4 strings; GDA names 3: G D A.' }],
+  tunes: [
+    { line: 2, title: 'Slack Tide', action: 'create' },
+    { line: 3, title: 'Grey Owl', action: 'update', id: id(31) },
+    { line: 4, title: 'Stone Weir', action: 'unchanged', id: id(32) },
+    { line: 5, title: 'Short', action: 'skip' },
+  ],
+};
+const post = api('POST', '/tunes/import');
+const csv = (text = 'title,key\nSlack Tide,G\n') => new File([text], 'tunes.csv', { type: 'text/csv' });
+const choose = async (file: File) => {
+  const field = await screen.findByLabelText(/Choose a(nother)? file/);
+  fireEvent.change(field, { target: { files: [file] } });
+};
+const start = (answers: Answers) => {
+  const asked = mockApi({
+    ...circleAnswers('host'),
+    [api('GET', '/tunes')]: ok(page([tune(1, 'A')])),
+    ...answers,
+  });
+  renderApp(at('tunes/import'));
+  return asked;
+};
+
+describe('importing a list', () => {
+  it('shows first what will become of every line, and writes nothing', async () => {
+    const urls: URL[] = [];
+    start({
+      [post]: (_, url) => {
+        urls.push(url);
+        return { status: 200, body: report };
+      },
+    });
+    await choose(csv());
+    const bad = (await screen.findByRole('rowheader', { name: 'Short' })).closest('tr')!;
+    expect(within(bad).getByText('left out')).toBeTruthy();
+    expect(within(bad).getByText('A fiddle has 4 strings; GDA names 3: G D A.')).toBeTruthy();
+    expect(screen.getByRole('button', { name: 'Import 2 tunes' })).toBeTruthy();
+    expect(urls.map((url) => url.searchParams.get('dryRun'))).toEqual(['true']);
+  });
+
+  it('filters the lines by what becomes of them', async () => {
+    start({ [post]: ok(report) });
+    await choose(csv());
+    await userEvent.click(await screen.findByRole('button', { name: '1 left out' }));
+    expect(screen.getAllByRole('rowheader').map((cell) => cell.textContent)).toEqual(['Short']);
+    await userEvent.click(screen.getByRole('button', { name: '4 read' }));
+    expect(screen.getAllByRole('rowheader')).toHaveLength(4);
+  });
+
+  it('draws a hundred lines of a long file at a time', async () => {
+    const tunes = Array.from({ length: 5000 }, (_, index) => ({
+      line: index + 2,
+      title: `Long List ${index}`,
+      action: 'create' as const,
+    }));
+    start({ [post]: ok({ ...report, read: 5000, created: 5000, updated: 0, tunes, problems: [] }) });
+    await choose(csv());
+    expect(await screen.findByRole('rowheader', { name: 'Long List 99' })).toBeTruthy();
+    expect(screen.queryByRole('rowheader', { name: 'Long List 100' })).toBeNull();
+    fireEvent.click(screen.getByRole('button', { name: 'Next' }));
+    expect(screen.getByRole('rowheader', { name: 'Long List 100' })).toBeTruthy();
+  });
+
+  it('writes under an id, moves the bar with the rows written, and sums up', async () => {
+    let finish: (answer: Answer) => void = () => undefined;
+    let watched = '';
+    const asked = mockApi({
+      ...circleAnswers('host'),
+      [api('GET', '/tunes')]: ok(page([tune(1, 'A')])),
+      [post]: ok(report),
+    });
+    const answered = fetch;
+    // The second import answers when the test says so; meanwhile its progress is asked for by its id.
+    const held: typeof fetch = (input, init) => {
+      const url = new URL(input as string, 'http://pegwell.test');
+      if (url.pathname.includes('/imports/')) {
+        return Promise.resolve(
+          new Response(JSON.stringify({ total: 2, written: 1, finished: false }), { status: 200 }),
+        );
+      }
+      if (url.searchParams.get('dryRun') !== 'false') return answered(input, init);
+      watched = url.searchParams.get('progress') ?? '';
+      return new Promise((resolve) => {
+        finish = ({ status, body }) => resolve(new Response(JSON.stringify(body), { status }));
+      });
+    };
+    globalThis.fetch = held;
+    renderApp(at('tunes/import'));
+    await choose(csv());
+    await userEvent.click(await screen.findByRole('button', { name: 'Import 2 tunes' }));
+    expect(await screen.findByText('1 of 2 tunes written')).toBeTruthy();
+    expect(screen.getByRole('progressbar').getAttribute('aria-valuenow')).toBe('1');
+    expect(watched).toMatch(/^[0-9a-f]{8}-[0-9a-f]{4}-4[0-9a-f]{3}-[89ab][0-9a-f]{3}-[0-9a-f]{12}$/);
+    finish({ status: 200, body: report });
+    expect(await screen.findByText('1 added, 1 changed, 1 unchanged, 1 left out.')).toBeTruthy();
+    expect(screen.getByRole('link', { name: 'To the tunes' }).getAttribute('href')).toBe(at('tunes'));
+    expect(asked.filter((name) => name === post)).toHaveLength(1);
+  });
+
+  it.each([
+    [422, 'cannot-be', 'This file is empty.'],
+    [422, 'cannot-be', 'This file is not text.'],
+    [415, 'wrong-media-type', 'Tunes are read from files whose names end in .csv or .abc.'],
+  ])(
+    'says of a bad file (%i %s) what the server says, at the file, which stays chosen',
+    async (status, code, sentence) => {
+      start({ [post]: () => refusal(status, code, { file: sentence }) });
+      await choose(csv(''));
+      expect(await screen.findByText(sentence)).toBeTruthy();
+      expect(screen.getByLabelText('Choose another file').getAttribute('aria-invalid')).toBe('true');
+      expect(screen.getByText('tunes.csv')).toBeTruthy();
+      expect(screen.queryByRole('button', { name: /^Import / })).toBeNull();
+    },
+  );
+
+  it('does not send a file over ten megabytes', async () => {
+    const asked = start({});
+    const large = csv();
+    Object.defineProperty(large, 'size', { value: 10 * 1024 * 1024 + 1 });
+    await choose(large);
+    expect(await screen.findByText('A file of tunes is at most 10 MB.')).toBeTruthy();
+    expect(asked).not.toContain(post);
+  });
+
+  it('offers nothing to write where nothing would change', async () => {
+    start({ [post]: ok({ ...report, created: 0, updated: 0 }) });
+    await choose(csv());
+    expect(await screen.findByText('Nothing here would change the library.')).toBeTruthy();
+    expect(screen.queryByRole('button', { name: /^Import / })).toBeNull();
+  });
+
+  it('is not for a player', async () => {
+    mockApi({ ...circleAnswers('player'), [api('GET', '/tunes')]: ok(page([tune(1, 'Grey Owl')])) });
+    renderApp(at('tunes/import'));
+    await waitFor(() => expect(screen.getByRole('heading', { level: 1 }).textContent).toBe('Tunes'));
+  });
+});
