@@ -75,7 +75,7 @@ export function UsualForm({ kind, items, onSave, onLeave }: UsualFormProps) {
               )
             ) : (
               <Button look="quiet" onClick={() => remove(index)}>
-                Take out<span className="visually-hidden"> {rowWords(row)}</span>
+                Take out <span className="visually-hidden">{rowWords(row)}</span>
               </Button>
             )}
           </div>

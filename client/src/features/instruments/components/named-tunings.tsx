@@ -27,6 +27,12 @@ export function NamedTunings({ kind, from }: NamedTuningsProps) {
   );
 }
 
+/** `keys` is written as players say it: "D, A mixolydian", "all", "sounds a tone low". */
+function keyLine(keys: string): string {
+  if (keys === 'all') return 'for every key';
+  return keys.startsWith('sounds') ? keys : `for ${keys}`;
+}
+
 function NamedTuningRow({ kind, from, named }: NamedTuningsProps & { readonly named: NamedTuning }) {
   // Six doubled courses in large would not fit beside the words.
   const wide = useMedia('(min-width: 62rem)');
@@ -39,12 +45,10 @@ function NamedTuningRow({ kind, from, named }: NamedTuningsProps & { readonly na
         <h3 className={styles.letters}>
           <TuningText text={showTuning(kind, pitches)} />
         </h3>
-        <p className={styles.names}>{names.join(', ') || 'no name of its own'}</p>
+        {names.length > 0 ? <p className={styles.names}>{names.join(', ')}</p> : null}
+        {keys ? <p>{keyLine(keys)}</p> : null}
         <p className={styles.about}>{pitches.join(' ')}</p>
-        <p className={styles.about}>
-          {keys ? `For ${keys}. ` : ''}
-          {provenance}
-        </p>
+        <p className={styles.about}>{`Source: ${provenance}`}</p>
       </div>
       <div className={styles.strip}>
         <PegStrip
@@ -59,7 +63,10 @@ function NamedTuningRow({ kind, from, named }: NamedTuningsProps & { readonly na
       <div className={styles.words}>
         <p>{words || 'Nothing to turn'}</p>
         {toWatch.map(({ courseIndex, grade, sentence }) => (
-          <p key={courseIndex} className={grade === 'note' ? styles.about : styles.caution}>
+          <p
+            key={courseIndex}
+            className={grade === 'caution' || grade === 'refused' ? styles.caution : styles.about}
+          >
             {sentence}
           </p>
         ))}

@@ -1,0 +1,119 @@
+import { screen, within } from '@testing-library/react';
+import userEvent from '@testing-library/user-event';
+import { describe, expect, it } from 'vitest';
+import { mockApi, ok } from '../lib/mock-api';
+import { renderApp } from './test-app';
+import { api, at, circleAnswers, refusal } from './test-circle';
+
+const get = api('GET', '/usual-tunings');
+const put = api('PUT', '/usual-tunings');
+const row = (key: string | null, family: 'major' | 'minor' | null, tuning: string, own = false) => ({
+  ...{ kind: 'banjo', key, family, tuning, own },
+});
+/** As the server shows them: the built-in table (score.md) with a row of the circle's own. */
+const usual = {
+  items: [
+    row(null, null, 'any'),
+    row('G', 'major', 'gDGBD'),
+    row('A', 'minor', 'gDGCD capo 2'),
+    row('E', 'minor', 'gDGBD capo 4', true),
+  ],
+};
+
+describe('the tunings', () => {
+  it('shows each named tuning as the turns from standard', async () => {
+    mockApi(circleAnswers('player'));
+    renderApp(at('tunings'));
+    const calico = (await screen.findByText('calico, open A')).closest('li')!;
+    // facts.md: AEAC# is +2 +2 0 -3 from GDAE; what comes down is turned first.
+    expect(
+      within(calico).getByText(
+        'E peg down 1½ steps, to C#; G peg up a whole step, to A; D peg up a whole step, to E',
+      ),
+    ).toBeTruthy();
+    expect(within(calico).getByText('for A')).toBeTruthy();
+  });
+
+  it('shows them from where the strings stand', async () => {
+    mockApi(circleAnswers('player'));
+    renderApp(at('tunings'));
+    await userEvent.selectOptions(await screen.findByLabelText('Your strings stand in'), 'AEAE');
+    const calico = screen.getByText('calico, open A').closest('li')!;
+    // facts.md, retune check: AEAE to AEAC# is one string, three semitones.
+    expect(within(calico).getByText('E peg down 1½ steps, to C#')).toBeTruthy();
+  });
+
+  it('has the words of safety, and defers to the string maker and a luthier', async () => {
+    mockApi(circleAnswers('player'));
+    renderApp(at('tunings?kind=banjo'));
+    expect(await screen.findByRole('heading', { name: 'Before you turn a peg' })).toBeTruthy();
+    expect(screen.getByText(/string maker's advice and a luthier come first/)).toBeTruthy();
+    expect(screen.getByText(/g peg \(5th\): a whole step above .* The string can break/)).toBeTruthy();
+  });
+});
+
+describe('the usual tunings', () => {
+  it('are read by a player, with the circle’s own marked', async () => {
+    mockApi({ ...circleAnswers('player'), [get]: ok(usual) });
+    renderApp(at('tunings?kind=banjo'));
+    const own = (await screen.findByText('in E minor, dorian, modal')).closest('li')!;
+    expect(within(own).getByText('your circle’s own')).toBeTruthy();
+    const builtIn = screen.getByText('in G major, mixolydian').closest('li')!;
+    expect(within(builtIn).queryByText('your circle’s own')).toBeNull();
+    expect(screen.queryByRole('button', { name: 'Change these' })).toBeNull();
+  });
+
+  it('are changed by a cohost; only what differs from the built-in table is stored', async () => {
+    let sent: unknown;
+    mockApi({
+      ...circleAnswers('cohost'),
+      [get]: ok(usual),
+      [put]: (body: unknown) => {
+        sent = body;
+        return { status: 200, body: usual };
+      },
+    });
+    renderApp(at('tunings?kind=banjo'));
+    await userEvent.click(await screen.findByRole('button', { name: 'Change these' }));
+    const field = screen.getByLabelText('G major, mixolydian');
+    await userEvent.clear(field);
+    await userEvent.type(field, 'gCGCD');
+    await userEvent.click(screen.getByRole('button', { name: 'Save' }));
+    expect(await screen.findByText(/^Saved\./)).toBeTruthy();
+    expect(sent).toEqual({
+      items: [
+        { kind: 'banjo', key: 'E', family: 'minor', tuning: 'gDGBD capo 4' },
+        { kind: 'banjo', key: 'G', family: 'major', tuning: 'gCGCD' },
+      ],
+    });
+  });
+
+  it('name what cannot be read at its row, and send nothing', async () => {
+    const asked = mockApi({ ...circleAnswers('host'), [get]: ok(usual) });
+    renderApp(at('tunings?kind=banjo'));
+    await userEvent.click(await screen.findByRole('button', { name: 'Change these' }));
+    const field = screen.getByLabelText('G major, mixolydian');
+    await userEvent.clear(field);
+    await userEvent.type(field, 'gDG');
+    await userEvent.click(screen.getByRole('button', { name: 'Save' }));
+    expect(await screen.findByText('A banjo has 5 strings; gDG names 3: G D G.')).toBeTruthy();
+    expect(asked).not.toContain(put);
+  });
+
+  it('put what the server refuses at the row it was typed into', async () => {
+    mockApi({
+      ...circleAnswers('host'),
+      [get]: ok(usual),
+      // The second row that is stored: G major.
+      [put]: () => refusal(422, 'cannot-be', { 'items.1.tuning': 'Not on this banjo.' }),
+    });
+    renderApp(at('tunings?kind=banjo'));
+    await userEvent.click(await screen.findByRole('button', { name: 'Change these' }));
+    const field = screen.getByLabelText('G major, mixolydian');
+    await userEvent.clear(field);
+    await userEvent.type(field, 'gCGCD');
+    await userEvent.click(screen.getByRole('button', { name: 'Save' }));
+    expect(await screen.findByText('Not on this banjo.')).toBeTruthy();
+    expect(field.getAttribute('aria-invalid')).toBe('true');
+  });
+});
