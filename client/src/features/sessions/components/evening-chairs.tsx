@@ -98,7 +98,7 @@ function ChairRow({ form, kind, index, onRemove }: ChairRowProps) {
         />
       ) : null}
       <Button look="quiet" onClick={onRemove}>
-        Take out<span className="visually-hidden"> {kind.plural}</span>
+        Take out <span className="visually-hidden">{kind.plural}</span>
       </Button>
     </div>
   );

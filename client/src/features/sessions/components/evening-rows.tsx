@@ -32,7 +32,9 @@ export function EveningRows({ circleId, evenings, timeZone, mayRun, past = false
             <Link className={styles.title} to={`/c/${circleId}/evenings/${evening.id}`}>
               {evening.title}
             </Link>
-            <p className={styles.about}>{[evening.place, tunesWords(evening)].filter(Boolean).join(' · ')}</p>
+            <p className={styles.about}>
+              {[evening.place, tunesWords(evening, past)].filter(Boolean).join(' · ')}
+            </p>
           </div>
           {past ? null : <Ways circleId={circleId} evening={evening} mayRun={mayRun} />}
         </li>
@@ -41,8 +43,8 @@ export function EveningRows({ circleId, evenings, timeZone, mayRun, past = false
   );
 }
 
-const tunesWords = ({ tunes, sets }: SessionSummary) =>
-  tunes === 0 ? 'no tunes yet' : `${count(tunes, 'tune')} in ${count(sets, 'set')}`;
+const tunesWords = ({ tunes, sets }: SessionSummary, past: boolean) =>
+  tunes === 0 ? (past ? 'no tunes' : 'no tunes yet') : `${count(tunes, 'tune')} in ${count(sets, 'set')}`;
 
 interface WaysProps extends Pick<EveningRowsProps, 'circleId' | 'mayRun'> {
   readonly evening: SessionSummary;
