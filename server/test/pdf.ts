@@ -58,7 +58,7 @@ async function withFile<T>(bytes: Buffer, work: (file: string, folder: string) =
 }
 
 /** White space made single; words that a line's end cut apart at a hyphen stay apart. */
-export function plain(text: string): string {
+function plain(text: string): string {
   return text.replace(/\s+/g, ' ').trim();
 }
 

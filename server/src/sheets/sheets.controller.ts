@@ -40,8 +40,6 @@ function send(response: Response, { title, bytes }: NamedFile, type: string, ext
     .set({
       'Content-Type': type,
       'Content-Disposition': contentDisposition(fileName(title, extension)),
-      // A member's own, and only as new as the board.
-      'Cache-Control': 'private, no-store',
     })
     .send(bytes);
 }
