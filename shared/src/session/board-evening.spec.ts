@@ -110,6 +110,10 @@ describe('the price of one more tune', () => {
   it('leaves what is now at its place', () => {
     const price = priceOf(evening, tune('GDAE'), 2);
     expect(price).toEqual({ pegChanges: 0, setIndex: 0, index: 2 });
-    expect(priceOf({ ...evening, sets: [] }, tune('GDAE'))).toBeNull();
+  });
+
+  it('is what is turned on arriving where there is no set yet', () => {
+    const empty = eveningOfBoard(settings(5), board());
+    expect(priceOf(empty, tune('AEAE'))).toEqual({ pegChanges: 10, setIndex: 0, index: 0 });
   });
 });

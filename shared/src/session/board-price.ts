@@ -28,9 +28,11 @@ export function* pricing(
 ): Generator<void, Price | null> {
   let best: { readonly score: Score; readonly setIndex: number; readonly index: number } | null = null;
   const tunes = [...evening.tunes, tune];
-  for (const [setIndex, set] of evening.sets.entries()) {
+  // A board without a set gets its first with its first tune.
+  const places: Evening['sets'] = evening.sets.length > 0 ? evening.sets : [[]];
+  for (const [setIndex, set] of places.entries()) {
     for (let index = setIndex === 0 ? fixed : 0; index <= set.length; index += 1) {
-      const sets = evening.sets.map((ids, other) =>
+      const sets = places.map((ids, other) =>
         other === setIndex ? [...ids.slice(0, index), tune.id, ...ids.slice(index)] : ids,
       );
       const { score } = scoreEvening({ ...evening, tunes, sets });

@@ -1,0 +1,211 @@
+import type { SessionSuggestion } from '@pegwell/shared/contract/ordering';
+import type { PutBoard, Session, ShownEntry } from '@pegwell/shared/contract/sessions';
+import type { Tune } from '@pegwell/shared/contract/tunes';
+import { screen, waitFor, within } from '@testing-library/react';
+import userEvent from '@testing-library/user-event';
+import { beforeEach, describe, expect, it, vi } from 'vitest';
+import { BoardServer, sessionOf, shownEntry, uuid } from '../features/sessions/hooks/board-fixtures';
+import { mockApi, ok, type Answers } from '../lib/mock-api';
+import { renderApp } from './test-app';
+import './board-page';
+
+// The tunes of worked example 2 of score.md in the host's order: pegChanges 30, and 10 in the best.
+const tunings = ['GDAE', 'AEAE', 'GDAE', 'ADAE', 'AEAE'];
+const titles = ['Stone Weir', 'Cluck Old Hen', 'Slack Tide', 'Frosty Lock Gate', 'June Apple'];
+const entries = titles.map((title, index) => shownEntry(index + 1, title, { fiddle: tunings[index]! }));
+const evening = (more: Partial<Session> = {}) => sessionOf([entries.slice(0, 3), entries.slice(3)], more);
+const BEST = [
+  [uuid(1), uuid(3), uuid(4)],
+  [uuid(2), uuid(5)],
+];
+
+const CIRCLE = uuid(901);
+const greyOwl: Tune = {
+  ...{ id: uuid(70), settingId: uuid(71), title: 'Grey Owl', key: 'D', mode: 'major', rhythm: 'reel' },
+  ...{ parts: null, composer: null, source: null, notes: null, assumed: [], can: [] },
+  tunings: [{ kind: 'fiddle', accepted: [{ tuning: 'AEAE', pitches: ['A3', 'E4', 'A4', 'E5'], capo: 0 }] }],
+  ...{ createdAt: '2026-01-01T00:00:00Z', updatedAt: '2026-01-01T00:00:00Z' },
+};
+
+let server: BoardServer;
+function site(more: Answers = {}): Answers {
+  const path = `/api/sessions/${server.session.id}`;
+  return {
+    'GET /api/auth/me': ok({
+      user: { id: uuid(1), email: 'ida@heron.example', displayName: 'Ida' },
+      circles: [{ id: CIRCLE, name: 'Heron Weir', role: 'host' }],
+    }),
+    [`GET /api/circles/${CIRCLE}`]: ok({
+      ...{
+        id: CIRCLE,
+        name: 'Heron Weir',
+        role: 'host',
+        timeZone: 'Europe/Berlin',
+        referenceA: 440,
+        can: [],
+      },
+    }),
+    [`GET /api/circles/${CIRCLE}/usual-tunings`]: ok({ items: [] }),
+    [`GET /api/circles/${CIRCLE}/tunes`]: ok({ items: [greyOwl], total: 1, page: 1, pageSize: 30 }),
+    [`GET ${path}`]: () => ({ status: 200, body: server.session }),
+    [`PUT ${path}/board`]: (body) => {
+      for (const { id, open, tuneId } of (body as PutBoard).sets.flatMap((set) => set.entries)) {
+        if (id && tuneId === greyOwl.id && !open)
+          server.learn([{ ...shownEntry(70, 'Grey Owl', { fiddle: 'AEAE' }), id, tuneId }]);
+      }
+      void server.put(body as PutBoard);
+      return { status: 200, body: server.session };
+    },
+    ...more,
+  };
+}
+
+const open = (search = '') => renderApp(`/c/${CIRCLE}/evenings/${server.session.id}${search}`);
+const stored = () => server.session.sets.map((set) => set.entries.map(({ title }) => title));
+const figure = (words: RegExp) =>
+  within(screen.getByText(words).closest('div')!).getByRole('definition').textContent;
+
+beforeEach(() => {
+  // A laptop: the finder stands beside the board.
+  vi.stubGlobal('matchMedia', (query: string) => ({
+    matches: query.includes('min-width'),
+    addEventListener: () => undefined,
+    removeEventListener: () => undefined,
+  }));
+  server = new BoardServer(evening());
+});
+
+describe('the board', { timeout: 60_000 }, () => {
+  it('shows what the evening costs, and what is turned before each tune', async () => {
+    mockApi(site());
+    open();
+    await screen.findByRole('heading', { level: 1, name: 'Second Thursday' }, { timeout: 30_000 });
+    expect(figure(/^peg changes/)).toBe('30');
+    expect(figure(/^stops/)).toBe('3');
+    expect(screen.getByText(/^peg changes/).textContent).toBe('peg changes, 5 in the break');
+    const second = screen.getByRole('article', { name: /^Cluck Old Hen, place 2 of 3/ });
+    expect(within(second).getByLabelText('A E A E')).toBeTruthy();
+    expect(within(second.parentElement!).getByText(/G peg up a whole step, to A; D peg up/)).toBeTruthy();
+    expect(within(second.parentElement!).getByText('2 pegs × 5 fiddles · about 2 min')).toBeTruthy();
+  });
+
+  it('prices a tune, adds it at its cheapest place and saves', async () => {
+    mockApi(site());
+    open();
+    const add = await screen.findByRole(
+      'button',
+      { name: /^Add Grey Owl, free, after 5/ },
+      { timeout: 30_000 },
+    );
+    await userEvent.click(add);
+    expect(screen.getByRole('article', { name: /^Grey Owl, place 3 of 3/ })).toBeTruthy();
+    await waitFor(() => expect(stored()[1]).toEqual(['Frosty Lock Gate', 'June Apple', 'Grey Owl']), {
+      timeout: 5_000,
+    });
+  });
+
+  it('takes a tune out by menu and puts it back by Ctrl-Z', async () => {
+    mockApi(site());
+    open();
+    await userEvent.click(
+      await screen.findByRole('button', { name: 'What to do with Slack Tide' }, { timeout: 30_000 }),
+    );
+    await userEvent.click(await screen.findByRole('menuitem', { name: 'Take out' }));
+    await waitFor(() => expect(stored()[0]).toEqual(['Stone Weir', 'Cluck Old Hen']), { timeout: 5_000 });
+    await userEvent.keyboard('{Control>}z{/Control}');
+    await waitFor(() => expect(stored()[0]).toEqual(titles.slice(0, 3)), { timeout: 5_000 });
+  });
+
+  it('is there to read for a player', async () => {
+    server = new BoardServer(evening({ can: ['sessions.read'] }));
+    mockApi(site());
+    open();
+    await screen.findByRole('article', { name: /^Stone Weir/ }, { timeout: 30_000 });
+    expect(screen.queryByRole('button', { name: /What to do with|Suggest|^Move / })).toBeNull();
+    expect(screen.queryByRole('search')).toBeNull();
+  });
+
+  it('says that an evening is not there', async () => {
+    mockApi({ ...site(), [`GET /api/sessions/${server.session.id}`]: () => ({ status: 404 }) });
+    open();
+    expect(
+      await screen.findByRole('heading', { name: 'This evening cannot be shown' }, { timeout: 30_000 }),
+    ).toBeTruthy();
+  });
+});
+
+describe('a suggested order', { timeout: 60_000 }, () => {
+  const suggestion = (more: Partial<SessionSuggestion> = {}): SessionSuggestion => ({
+    ...{
+      version: 1,
+      before: server.session.score,
+      after: server.session.score,
+      sets: BEST,
+      moved: [],
+      goal: 'pegs',
+    },
+    ...{ optimal: false, provenLevels: 1, lowerBound: 10, millis: 3 },
+    ...more,
+  });
+  const path = () => `/api/sessions/${server.session.id}/suggestion`;
+
+  it('stands beside the host’s, is taken, and can be undone', async () => {
+    let accepted: unknown = null;
+    mockApi(
+      site({
+        [`POST ${path()}`]: () => ({ status: 200, body: suggestion() }),
+        [`POST ${path()}/accept`]: (body) => {
+          accepted = body;
+          const known = new Map(entries.map((entry) => [entry.id, entry]));
+          const sets = server.session.sets.map((set, index) => ({
+            ...set,
+            entries: BEST[index]!.flatMap((id): ShownEntry[] => [known.get(id)!]),
+          }));
+          server.session = { ...server.session, version: 2, sets };
+          return { status: 200, body: server.session };
+        },
+      }),
+    );
+    open('?suggest');
+    const take = await screen.findByRole('button', { name: 'Take this order' }, { timeout: 30_000 });
+    expect(screen.getByRole('heading', { name: '30 peg changes as you have it' })).toBeTruthy();
+    expect(screen.getByRole('heading', { name: '10 peg changes suggested' })).toBeTruthy();
+    expect(screen.getByText('No order needs fewer pegs. Proved.')).toBeTruthy();
+    await userEvent.click(take);
+    await screen.findByRole('article', { name: /^Cluck Old Hen, place 1 of 2 in Set 2/ }, { timeout: 5_000 });
+    expect(accepted).toEqual({ version: 1, sets: BEST });
+    await userEvent.keyboard('{Control>}z{/Control}');
+    await waitFor(() => expect(stored()[0]).toEqual(titles.slice(0, 3)), { timeout: 5_000 });
+  });
+
+  it('claims no proof where there is none', async () => {
+    mockApi(
+      site({
+        [`POST ${path()}`]: () => ({ status: 200, body: suggestion({ provenLevels: 0, lowerBound: 5 }) }),
+      }),
+    );
+    open('?suggest');
+    expect(
+      await screen.findByText(
+        /at least 5 pegs; whether fewer than 10 do is not known/,
+        {},
+        { timeout: 30_000 },
+      ),
+    ).toBeTruthy();
+    expect(screen.queryByText(/Proved/)).toBeNull();
+  });
+
+  it('says which rules clash', async () => {
+    const detail =
+      'Slack Tide is pinned to place 3, and Slack Tide comes before Stone Weir: these cannot all hold.';
+    mockApi(
+      site({
+        [`POST ${path()}`]: () => ({ status: 422, body: { status: 422, code: 'rules-clash', detail } }),
+      }),
+    );
+    open('?suggest');
+    expect(await screen.findByText(detail, {}, { timeout: 30_000 })).toBeTruthy();
+    await userEvent.click(screen.getByRole('button', { name: 'Keep mine' }));
+    expect(await screen.findByRole('article', { name: /^Stone Weir/ })).toBeTruthy();
+  });
+});
