@@ -1,5 +1,5 @@
 import { Injectable } from '@nestjs/common';
-import { and, eq, isNull } from 'drizzle-orm';
+import { and, eq, inArray, isNull } from 'drizzle-orm';
 import type { Database } from '../database/database';
 import { accounts, signIns } from './accounts.table';
 
@@ -23,9 +23,12 @@ export class AccountsRepository {
     return row ?? null;
   }
 
-  async byId(db: Database, accountId: string): Promise<AccountRow | null> {
-    const [row] = await db.select().from(accounts).where(eq(accounts.id, accountId));
-    return row ?? null;
+  async byIds(db: Database, accountIds: readonly string[]): Promise<AccountRow[]> {
+    if (accountIds.length === 0) return [];
+    return db
+      .select()
+      .from(accounts)
+      .where(inArray(accounts.id, [...accountIds]));
   }
 
   async insertSignIn(db: Database, accountId: string, userAgent: string | null): Promise<SignInRow> {

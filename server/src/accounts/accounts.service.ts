@@ -49,8 +49,13 @@ export class AccountsService {
     return toUser(row);
   }
 
+  async byIds(db: Database, accountIds: readonly string[]): Promise<Map<string, User>> {
+    const rows = await this.accounts.byIds(db, accountIds);
+    return new Map(rows.map((row) => [row.id, toUser(row)]));
+  }
+
   async displayName(db: Database, accountId: string): Promise<string | null> {
-    return (await this.accounts.byId(db, accountId))?.displayName ?? null;
+    return (await this.byIds(db, [accountId])).get(accountId)?.displayName ?? null;
   }
 
   async byEmail(db: Database, email: string): Promise<User | null> {

@@ -2,7 +2,6 @@ import { Injectable } from '@nestjs/common';
 import { and, asc, count, eq, isNotNull, isNull } from 'drizzle-orm';
 import type { Role } from '@pegwell/shared/contract/circles';
 import type { PageQuery } from '@pegwell/shared/contract/page';
-import { accounts } from '../accounts/accounts.table';
 import type { Database } from '../database/database';
 import { circles, events, members, usualTunings } from './circles.table';
 
@@ -64,20 +63,15 @@ export class CirclesRepository {
     return rows.length === 1;
   }
 
+  /** Who is in, in the order of joining. */
   async members(db: Database, circleId: string, { page, pageSize }: PageQuery) {
     const present = and(eq(members.circleId, circleId), isNull(members.removedAt));
     const [total] = await db.select({ count: count() }).from(members).where(present);
     const items = await db
-      .select({
-        accountId: accounts.id,
-        displayName: accounts.displayName,
-        email: accounts.email,
-        role: members.role,
-      })
+      .select({ accountId: members.accountId, role: members.role })
       .from(members)
-      .innerJoin(accounts, eq(accounts.id, members.accountId))
       .where(present)
-      .orderBy(asc(members.joinedAt), asc(accounts.displayName), asc(accounts.id))
+      .orderBy(asc(members.joinedAt), asc(members.accountId))
       .limit(pageSize)
       .offset((page - 1) * pageSize);
     return { total: total?.count ?? 0, items };

@@ -54,11 +54,20 @@ export class CirclesService {
 
   async members(member: Member, query: PageQuery): Promise<Page<CircleMember>> {
     const { total, items } = await this.circles.members(this.db, member.circleId, query);
+    const people = await this.accounts.byIds(
+      this.db,
+      items.map(({ accountId }) => accountId),
+    );
     const showMail = may(member.role, 'members.change');
     return {
       ...query,
       total,
-      items: items.map(({ email, ...rest }) => (showMail ? { ...rest, email } : rest)),
+      items: items.flatMap(({ accountId, role }) => {
+        const person = people.get(accountId);
+        if (!person) return [];
+        const { displayName, email } = person;
+        return [{ accountId, role, displayName, ...(showMail && { email }) }];
+      }),
     };
   }
 

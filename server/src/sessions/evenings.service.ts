@@ -5,7 +5,7 @@ import { ASSUMED_TUNE_MINUTES } from '@pegwell/shared/session/minutes';
 import { CirclesService } from '../circles/circles.service';
 import { UsualTuningsService, type UsualLookup } from '../circles/usual-tunings.service';
 import type { Database } from '../database/database';
-import type { PlayableTune } from '../tunes/playable.repository';
+import type { PlayableTune } from '../tunes/playable';
 import { PlayableService } from '../tunes/playable.service';
 import { BoardRepository } from './board.repository';
 import type { Accepted, EveningEntry, StoredEvening } from './evening';

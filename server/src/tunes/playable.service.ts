@@ -1,6 +1,7 @@
 import { Injectable } from '@nestjs/common';
 import type { Database } from '../database/database';
-import { PlayableRepository, type PlayableTune } from './playable.repository';
+import type { PlayableTune } from './playable';
+import { PlayableRepository } from './playable.repository';
 
 /** What evenings, phones and sheets need to know of tunes. */
 @Injectable()
