@@ -95,21 +95,27 @@ describe('the library', () => {
     expect(await screen.findByText('51 to 100 of 120 tunes')).toBeTruthy();
   });
 
-  it('reads a tuning back at its field, and names what cannot be read', async () => {
-    mockApi({
-      ...circleAnswers('host'),
-      [list]: (_, url) =>
-        url.searchParams.get('tuning') === 'GDA'
-          ? refusal(422, 'cannot-be', { tuning: 'A fiddle has 4 strings; GDA names 3: G D A.' })
-          : { status: 200, body: page(twoTunes) },
-    });
+  it('reads a tuning back at its field, and asks for nothing that cannot be read', async () => {
+    const asked: URLSearchParams[] = [];
+    mockApi(watched(asked));
     renderApp(at('tunes?kind=fiddle'));
     const field = await screen.findByLabelText('Fiddle tuning');
-    await userEvent.type(field, 'AEAC#');
+    fireEvent.change(field, { target: { value: 'AEAC#' } });
     expect(await screen.findByText('A3 E4 A4 C#5, calico')).toBeTruthy();
-    await userEvent.clear(field);
-    await userEvent.type(field, 'GDA');
+    await waitFor(() => expect(asked.at(-1)?.get('tuning')).toBe('AEAC#'));
+    fireEvent.change(field, { target: { value: 'GDA' } });
     expect(await screen.findByText('A fiddle has 4 strings; GDA names 3: G D A.')).toBeTruthy();
+    expect(asked.map((params) => params.get('tuning'))).toEqual([null, 'AEAC#']);
+  });
+
+  it('says at the field what the server makes of a tuning in the address', async () => {
+    mockApi({
+      ...circleAnswers('host'),
+      [list]: () => refusal(422, 'cannot-be', { tuning: 'No fiddle is tuned so.' }),
+    });
+    renderApp(at('tunes?kind=fiddle&tuning=GDA'));
+    expect(await screen.findByText('No fiddle is tuned so.')).toBeTruthy();
+    expect(screen.getByLabelText('Fiddle tuning').getAttribute('aria-invalid')).toBe('true');
     expect(screen.queryByText('The tunes could not be loaded')).toBeNull();
   });
 

@@ -3,7 +3,7 @@ import { MODES } from '@pegwell/shared/music/mode';
 import { useId, useState } from 'react';
 import { useDraft } from '../../../lib/use-draft';
 import { TONICS } from '../../../music/key-words';
-import { readTuning } from '../../../music/read-tuning';
+import { isAny, readTuning } from '../../../music/read-tuning';
 import { TuningField } from '../../../music/tuning-field';
 import { Button } from '../../../ui/button';
 import { SelectField, TextField } from '../../../ui/fields';
@@ -59,9 +59,13 @@ export function TuneFilters(props: TuneFiltersProps) {
 function MoreFilters({ filters, change, narrow, tuningError }: TuneFiltersProps) {
   const kind = builtInKind(filters.kind);
   const rhythms = useId();
-  const [tuning, typeTuning] = useDraft(filters.tuning, (text) => change({ tuning: text }));
+  const readable = (text: string) =>
+    kind !== undefined && (isAny(text) || readTuning(kind, text).tuned !== null);
+  // Half a tuning is no question to the server; the field says what is missing.
+  const [tuning, typeTuning] = useDraft(filters.tuning, (text) => {
+    if (text === '' || readable(text)) change({ tuning: text });
+  });
   const [rhythm, typeRhythm] = useDraft(filters.rhythm, (text) => change({ rhythm: text }));
-  const readable = kind && readTuning(kind, tuning, { any: true }).tuned !== null;
   return (
     <>
       <SelectField
@@ -85,7 +89,7 @@ function MoreFilters({ filters, change, narrow, tuningError }: TuneFiltersProps)
             placeholder="Any tuning"
             text={tuning}
             value={tuning}
-            error={readable ? undefined : tuningError}
+            error={tuning === filters.tuning ? tuningError : undefined}
             onChange={(event) => typeTuning(event.target.value)}
           />
         </div>
