@@ -35,7 +35,7 @@ export function scoreOrder(session: Session, board: Board<ShownEntry>, goal: Goa
   return { board: ordered ?? board, evening, ...scoreEvening(evening) };
 }
 
-export interface Part {
+interface Part {
   readonly setId: string;
   readonly label: string;
   readonly order: Order;
@@ -71,7 +71,7 @@ export function partsOf(
 /** `the first set`; a name of the host's own stands as it is. */
 const spoken = (title: string) => (/^\w+ set$/.test(title) ? `the ${title.toLowerCase()}` : title);
 
-export interface Moved {
+interface Moved {
   readonly entry: ShownEntry;
   /** Numbers in the evening, from 1. */
   readonly from: number;
@@ -108,7 +108,7 @@ export function proofWords(
   return { proved: false, words: stopped ? `${known} The search ran out of time.` : known };
 }
 
-export interface LeftOut {
+interface LeftOut {
   readonly entry: ShownEntry;
   readonly pegChanges: number;
 }

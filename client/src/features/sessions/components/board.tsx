@@ -1,7 +1,7 @@
 import { DndContext, DragOverlay } from '@dnd-kit/core';
 import type { Session, ShownEntry, UpdateSession } from '@pegwell/shared/contract/sessions';
 import type { Tune } from '@pegwell/shared/contract/tunes';
-import { setTitle, spotAt, standingOf } from '@pegwell/shared/session/board';
+import { spotAt, standingOf } from '@pegwell/shared/session/board';
 import { DEFERENCE } from '@pegwell/shared/music/caution';
 import type { BoardOperation } from '@pegwell/shared/session/board-operations';
 import { priceOf } from '@pegwell/shared/session/board-price';
@@ -10,13 +10,11 @@ import { useCallback, useMemo, useState } from 'react';
 import { newId } from '../../../lib/new-id';
 import { useMedia } from '../../../lib/use-media';
 import { Button } from '../../../ui/button';
-import { Dialog } from '../../../ui/dialog';
 import { useSay } from '../../../ui/status';
-import { cardMenu, moveToPosition } from '../card-menu';
+import { cardMenu } from '../card-menu';
 import { partKinds } from '../changing-kinds';
-import { entryOfOpenPlace, entryOfTune, type AssumedFor } from '../entries';
+import { entryOfTune, type AssumedFor } from '../entries';
 import { focusMenuOf } from '../focus';
-import { entryTitle } from '../hooks/board-state';
 import type { BoardInHand } from '../hooks/use-board';
 import { useBoardDrag } from '../hooks/use-board-drag';
 import { eveningTuneOf } from '../hooks/use-prices';
@@ -25,29 +23,19 @@ import { useUndoKeys } from '../hooks/use-undo-keys';
 import { placeWords, spotOfPrice } from '../price-words';
 import { setMenu } from '../set-menu';
 import { spacedPairs } from '../spaced-pairs';
+import { BoardDialogs, type Asking } from './board-dialogs';
 import { BoardHead } from './board-head';
 import { BoardLanes } from './board-lanes';
-import { DetailsDialog } from './details-dialog';
 import { differenceWords } from './figures';
 import { Finder } from './finder';
-import { FollowDialog } from './follow-dialog';
 import { HeldContext } from './held-context';
 import { BeforeFirst, Break } from './off-clock';
-import { OpenPlaceDialog } from './open-place-dialog';
-import { PositionDialog } from './position-dialog';
-import { RenameDialog } from './rename-dialog';
 import { SetColumn } from './set-column';
 import { CardFace } from './tune-card';
 import cardStyles from './tune-card.module.css';
 import styles from './board.module.css';
 
 const motionFeatures = () => import('../../../lib/motion-features').then(({ features }) => features);
-
-type Asking =
-  | { readonly what: 'finder' | 'details' | 'follow' }
-  | { readonly what: 'position'; readonly entry: ShownEntry }
-  | { readonly what: 'rename'; readonly setId: string }
-  | { readonly what: 'open'; readonly setId: string; readonly entry: ShownEntry | null };
 
 interface BoardProps {
   readonly held: BoardInHand;
@@ -276,63 +264,17 @@ export function Board({ held, mayChange, assumedFor, onSuggest, onGoal, onUpdate
         ) : null}
       </DragOverlay>
 
-      {asking?.what === 'finder' ? (
-        <Dialog open onClose={close} title="Add a tune">
-          {finder(false)}
-        </Dialog>
-      ) : null}
-      {asking?.what === 'details' ? (
-        <DetailsDialog session={session} onSave={onUpdate} onClose={close} />
-      ) : null}
-      {asking?.what === 'follow' ? <FollowDialog session={session} onClose={close} /> : null}
-      {asking?.what === 'position' ? (
-        <PositionDialog
-          board={board}
-          entry={asking.entry}
-          first={firstFree + 1}
-          onClose={close}
-          onMove={(position) => {
-            close();
-            const operation = moveToPosition(board, asking.entry.id, position);
-            if (operation) act(`Moved ${entryTitle(asking.entry)} to ${position + 1}`, [operation]);
-          }}
-        />
-      ) : null}
-      {asking?.what === 'rename' ? (
-        <RenameDialog
-          title={titleOfSet(board, asking.setId)}
-          onClose={close}
-          onRename={(title) => {
-            close();
-            act(`Renamed to ${title}`, [{ type: 'rename-set', setId: asking.setId, title }]);
-          }}
-        />
-      ) : null}
-      {asking?.what === 'open' ? (
-        <OpenPlaceDialog
-          open={asking.entry?.open ?? null}
-          kinds={kinds}
-          assumedFor={assumedFor}
-          onClose={close}
-          onSave={(open) => {
-            close();
-            const entry = entryOfOpenPlace(open, asking.entry?.id ?? newId(), assumedFor);
-            if (asking.entry) {
-              act(`Changed ${entryTitle(entry)}`, [{ type: 'set-content', entryId: entry.id, entry }]);
-              return;
-            }
-            const size = board.sets.find(({ id }) => id === asking.setId)?.entries.length ?? 0;
-            act(`Added ${entryTitle(entry)}`, [
-              { type: 'add-entry', entry, to: spotAt(board, asking.setId, size) },
-            ]);
-          }}
-        />
-      ) : null}
+      <BoardDialogs
+        held={held}
+        asking={asking}
+        onClose={close}
+        act={act}
+        firstFree={firstFree}
+        kinds={kinds}
+        assumedFor={assumedFor}
+        onUpdate={onUpdate}
+        finder={() => finder(false)}
+      />
     </DndContext>
   );
-}
-
-function titleOfSet(board: BoardInHand['board'], setId: string): string {
-  const index = board.sets.findIndex(({ id }) => id === setId);
-  return setTitle(board.sets[index]?.title ?? '', Math.max(0, index));
 }

@@ -94,4 +94,4 @@ function KindTurns({ chair, move, named, minutes }: KindTurnsProps) {
 }
 
 /** A real caution; notes and long ways are said quietly. */
-export const isGrave = (grade: Grade): boolean => grade === 'caution' || grade === 'refused';
+const isGrave = (grade: Grade): boolean => grade === 'caution' || grade === 'refused';

@@ -77,7 +77,7 @@ export const nearestSlot: CollisionDetection = ({
 };
 
 /** Up and down go from slot to slot in playing order, left and right to the set beside. */
-export function slotByArrow(
+function slotByArrow(
   slots: readonly DroppableContainer[],
   over: UniqueIdentifier | null,
   code: string,

@@ -9,7 +9,7 @@ import { slotOf, type DraggedEntry, type DraggedTune } from './drag-slots';
 import { scoreBoard } from './use-scored';
 
 /** `place 3 of 9 in First set` */
-export function standingWords(board: Board<ShownEntry>, entryId: string): string {
+function standingWords(board: Board<ShownEntry>, entryId: string): string {
   const standing = standingOf(board, entryId);
   if (!standing) return 'not on the board';
   const { set, setIndex, index } = standing;
