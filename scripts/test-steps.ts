@@ -90,5 +90,5 @@ export const STEPS: readonly Step[] = [
 ];
 
 function sources(): readonly string[] {
-  return ['shared/src', 'server/src', 'server/test', 'client/src', 'scripts', 'e2e'];
+  return ['shared/src', 'server/src', 'server/test', 'client/src', 'scripts', 'e2e', 'bench'];
 }
