@@ -1,8 +1,7 @@
 import type { Follow } from '@pegwell/shared/contract/live';
 import { type InstrumentKind, standardPitches } from '@pegwell/shared/music/instrument';
 import { retune } from '@pegwell/shared/music/retune';
-import { showTuning } from '@pegwell/shared/music/tuning';
-import { capital, retuneLabel, titleOf, underTitle, yours } from '../follow-words';
+import { capital, retuneLabel, stringLetters, titleOf, underTitle, yours } from '../follow-words';
 import { StringLetters } from './string-letters';
 import { Turns } from './turns';
 import styles from './follow.module.css';
@@ -67,7 +66,7 @@ function Set({ now, kind }: Pick<NowSectionProps, 'now' | 'kind'>) {
       ) : null}
       {!move && pitches && pegChanges > 0 ? (
         <details className={styles.more}>
-          <summary>{`Just come in, tuned to ${showTuning(kind, standard)}?`}</summary>
+          <summary>{`Just come in, tuned to ${stringLetters(kind, standard).join('')}?`}</summary>
           <Turns
             kind={kind}
             when="now"
