@@ -1,7 +1,7 @@
 import { readFileSync } from 'node:fs';
 import path from 'node:path';
 import type { Session } from '@pegwell/shared/contract/sessions';
-import type { Follow } from '@pegwell/shared/contract/live';
+import type { ScoreAnswer } from '@pegwell/shared/contract/ordering';
 import type { Browser, Locator, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { PHONE, person, startBrowser } from './browser';
@@ -82,7 +82,7 @@ describe('an evening, from a list of tunes to a room that follows it', () => {
     expect(tunes).toBeGreaterThanOrEqual(40);
     await host.getByRole('button', { name: `${tunes} new` }).waitFor();
     await host.getByRole('button', { name: `Import ${tunes} tunes` }).click();
-    await host.getByText(`${tunes} added, 0 changed, 0 as they were, 0 left out.`).waitFor();
+    await host.getByText(`${tunes} added, 0 changed, 0 unchanged, 0 left out.`).waitFor();
   });
 
   it('plans an evening for fiddles and banjos', async () => {
@@ -138,12 +138,79 @@ describe('an evening, from a list of tunes to a room that follows it', () => {
     await host.getByText(`${before.score.pegChanges} peg changes as you have it`).waitFor();
     await host.getByRole('button', { name: 'Take this order' }).click();
     await host.getByRole('button', { name: 'Suggest an order' }).waitFor();
+    await expect
+      .poll(async () => (await session()).version, { timeout: 20_000 })
+      .toBeGreaterThan(before.version);
     const after = await session();
-    expect(after.version).toBeGreaterThan(before.version);
     expect(after.score.pegChanges).toBeLessThan(before.score.pegChanges);
     const ids = (each: Session) => each.sets.flatMap((set) => set.entries.map(({ id }) => id));
     expect(ids(after).sort()).toEqual(ids(before).sort());
     expect(after.sets.map((set) => set.entries.length)).toEqual([4, 5]);
+  });
+
+  it('runs the evening, and a phone shows its own instrument what to turn after every step', async () => {
+    const evening = await session();
+    const expected = await turnsOf(host, evening);
+    const titles = evening.sets.flatMap((set) => set.entries.map(({ title }) => title ?? ''));
+    await host.getByRole('link', { name: 'Run the evening' }).click();
+    await host.getByRole('button', { name: 'Start the evening' }).waitFor();
+
+    await phone.goto(`/f/${evening.code}`);
+    await phone.getByRole('button', { name: 'Fiddle', exact: true }).click();
+    await phone.getByRole('heading', { name: new RegExp(`^${titles[0]}`) }).waitFor();
+    await phoneShows(null, 0);
+
+    await host.getByRole('button', { name: 'Start the evening' }).click();
+    for (let at = 0; at < titles.length; at++) {
+      if (at > 0) await host.getByRole('button', { name: /^Next/ }).click();
+      await phoneShows(at, at + 1);
+      const tuned = host.getByRole('button', { name: 'Everyone is in tune' });
+      if (await tuned.isVisible()) {
+        await tuned.click();
+        await tuned.waitFor({ state: 'detached' });
+        await phone.getByText('Playing now', { exact: true }).waitFor({ timeout: TWO_POLLS });
+      }
+    }
+    await host.getByRole('button', { name: 'Finish the evening' }).click();
+    await host.getByRole('button', { name: 'Finish', exact: true }).click();
+    await phone.getByText('This evening is over.').waitFor({ timeout: TWO_POLLS });
+
+    /** Within two polls: the tune that is now with its letters, and what is turned for the next, peg by peg. */
+    async function phoneShows(now: number | null, next: number): Promise<void> {
+      if (now !== null) {
+        const section = phone.getByRole('region', { name: 'Now' });
+        await section.getByRole('heading', { name: titles[now] }).waitFor({ timeout: TWO_POLLS });
+        expect((await section.locator('[role=img] b').allInnerTexts()).join('')).toBe(expected[now]?.to);
+      }
+      if (next >= titles.length) return;
+      const section = phone.getByRole('region', { name: now === null ? 'First' : 'Next' });
+      await section
+        .getByRole('heading', { name: new RegExp(`^${titles[next]},`) })
+        .waitFor({ timeout: TWO_POLLS });
+      const words = expected[next]?.words ?? [];
+      if (words.length === 0) expect(await section.innerText()).toContain('stay as you are');
+      else expect(await section.locator('ol').first().locator('li').allInnerTexts()).toEqual(words);
+    }
+  });
+
+  it('remembers what was played', async () => {
+    await host.getByRole('link', { name: 'Record' }).click();
+    await host.getByText('Second Thursday').first().waitFor();
+  });
+
+  it('downloads the set sheet', async () => {
+    await host.goBack();
+    await host.getByRole('link', { name: 'Evenings' }).click();
+    await host
+      .getByRole('link', { name: /Second Thursday/ })
+      .first()
+      .click();
+    const id = /evenings\/([0-9a-f-]{36})/.exec(host.url())?.[1];
+    await host.getByRole('button', { name: 'Sheet' }).click();
+    await host.getByRole('menuitem', { name: /A4/ }).waitFor();
+    const sheet = await host.request.get(`/api/sessions/${id}/sheet.pdf?paper=a4`);
+    expect(sheet.headers()['content-type']).toBe('application/pdf');
+    expect((await sheet.body()).subarray(0, 5).toString()).toBe('%PDF-');
   });
 
   it('asks nothing of any other host', () => {
@@ -151,6 +218,52 @@ describe('an evening, from a list of tunes to a room that follows it', () => {
     expect(foreignPhone).toEqual([]);
   });
 });
+
+interface Turns {
+  /** The short name. */
+  readonly to: string | null;
+  /** In the order of turning: strings that come down first, then those that go up. */
+  readonly words: readonly string[];
+}
+
+/** The pegs of a fiddle by their standing names, 4th to 1st string (every violin is built so). */
+const PEGS = ['G peg (4th)', 'D peg (3rd)', 'A peg (2nd)', 'E peg (1st)'];
+/** Semitones as people say them: 1 is a half step, 2 a whole step. */
+const STEPS = ['', 'a half step', 'a whole step', '1½ steps', '2 steps', '2½ steps', '3 steps', '3½ steps'];
+
+/** What the stateless score says of the fiddle, in the test's own words. */
+async function turnsOf(page: Page, session: Session): Promise<Turns[]> {
+  const entries = session.sets.flatMap((set) => set.entries);
+  const body = {
+    chairs: session.chairs,
+    openings: session.openings,
+    tunes: entries.map(({ id, key, mode, rhythm, tunings }) => ({
+      id,
+      key,
+      mode,
+      rhythm,
+      tunings: tunings.map(({ kind, accepted }) => ({
+        kind,
+        accepted: accepted.map(({ tuning, capo }) => ({ tuning, capo })),
+      })),
+    })),
+    sets: session.sets.map((set) => set.entries.map(({ id }) => id)),
+  };
+  const answer = (await (await page.request.post('/api/score', { data: body })).json()) as ScoreAnswer;
+  return answer.places.map((place) => {
+    const move = place.kinds.find(({ kind }) => kind === 'fiddle');
+    if (!move) throw new Error('no fiddle in the room');
+    const letters = (name: string | null) => name?.match(/[A-G][#b]?/g) ?? [];
+    const turns = move.deltas.flatMap((delta, string) => {
+      if (delta === 0) return [];
+      const way = `${delta > 0 ? 'up' : 'down'} ${STEPS[Math.abs(delta)]}`;
+      const ends = `from ${letters(move.from)[string]} to ${letters(move.to)[string]}`;
+      return [{ delta, words: `${PEGS[string]}: ${way}, ${ends}` }];
+    });
+    const ordered = [...turns.filter(({ delta }) => delta < 0), ...turns.filter(({ delta }) => delta > 0)];
+    return { to: move.to, words: ordered.map(({ words }) => words) };
+  });
+}
 
 /** As a hand does it: press, move in steps, let go. */
 async function drag(page: Page, from: Locator, to: Locator): Promise<void> {
