@@ -6,7 +6,7 @@ export default defineConfig({
   resolve: { conditions: ['pegwell-source', 'module', 'browser', 'development|production'] },
   test: {
     environment: 'jsdom',
-    testTimeout: 20_000,
+    testTimeout: 60_000,
     include: ['src/**/*.spec.{ts,tsx}'],
     setupFiles: ['src/lib/test-setup.ts'],
   },

@@ -19,5 +19,5 @@ module.exports = {
     ],
   },
   maxWorkers: 2,
-  testTimeout: 30_000,
+  testTimeout: 120_000,
 };

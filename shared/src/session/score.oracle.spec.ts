@@ -259,8 +259,8 @@ describe('the score of absurd evenings', () => {
       const started = performance.now();
       const { score } = scoreEvening(hugeEvening(1, goal));
       expect(score.pegChanges).toBeGreaterThan(0);
-      expect(performance.now() - started).toBeLessThan(20_000);
+      expect(performance.now() - started).toBeLessThan(60_000);
     },
-    40_000,
+    120_000,
   );
 });
