@@ -50,16 +50,20 @@ interface FromStandardProps {
 function FromStandard({ kind, pitches }: FromStandardProps) {
   const standard = standardPitches(kind);
   const words = retuneWords(kind, standard, pitches);
-  // A note (up a tone on a wound string) is said on the tunings page; here only what can break a string.
+  // A note (up a tone on a wound string) is said on the tunings page; here only what can break a string, or
+  // has to be done in two goes.
   const toWatch = cautions(kind, standard, pitches).filter(
-    ({ grade }) => grade === 'caution' || grade === 'refused',
+    ({ grade, twoGoes }) => grade !== 'note' || twoGoes,
   );
   return (
     <div className={styles.turns}>
       <PegStrip kind={kind} from={standard} to={pitches} whenStill="pegs" wordsBeside />
       <p>{words ? `From standard: ${words}` : 'Standard: nothing to turn'}</p>
-      {toWatch.map(({ courseIndex, sentence }) => (
-        <p key={courseIndex} className={styles.caution}>
+      {toWatch.map(({ courseIndex, grade, sentence }) => (
+        <p
+          key={courseIndex}
+          className={grade === 'caution' || grade === 'refused' ? styles.caution : undefined}
+        >
           {sentence}
         </p>
       ))}
