@@ -49,7 +49,7 @@ export class Bound {
     const everyone = compiled.kinds.map((_, k) => k);
     const table = (kinds: readonly number[], work: number): SubsetTable | null => {
       try {
-        const tunings = new TuningMoves(compiled, kinds, goal, limits.joints);
+        const tunings = new TuningMoves(compiled, kinds, goal, limits.joints, steps);
         return new SubsetTable(tunings, plan, this.milestones, work, steps);
       } catch (error) {
         if (error instanceof TooManyStands) return null;

@@ -1,9 +1,10 @@
 import { FREE, type CompiledEntry } from './compiled';
 import type { Joints } from './joints';
+import type { Steps } from './steps';
 import type { Weights } from './weights';
 
 /** More ways than this to tune for one entry, all kinds together, and the search does not try. */
-const MOST_WAYS = 5000;
+const MOST_WAYS = 600;
 
 /** Thrown where an entry has more ways to tune than the search takes on. */
 export class TooManyWays extends Error {}
@@ -38,6 +39,7 @@ export class MoveTable {
   constructor(
     readonly joints: Joints,
     private readonly weights: Weights,
+    private readonly effort: Steps,
   ) {}
 
   /** Two sequences of entries have the same signature where they offer the same tunings and choices. */
@@ -90,7 +92,7 @@ export class MoveTable {
     entries.forEach((entry, index) => {
       const best = new Map<number, Way>();
       for (const way of ways) {
-        for (const step of this.steps(way.to, entry, index > 0 || onClock, index > 0)) {
+        for (const step of this.ways(way.to, entry, index > 0 || onClock, index > 0)) {
           const [high, low] = [way.high + step.high, way.low + step.low];
           const rival = best.get(step.to);
           if (rival && (rival.high < high || (rival.high === high && rival.low <= low))) continue;
@@ -103,7 +105,7 @@ export class MoveTable {
   }
 
   /** Every way to tune for one entry. */
-  private steps(joint: number, entry: CompiledEntry, onClock: boolean, inMedley: boolean): Way[] {
+  private ways(joint: number, entry: CompiledEntry, onClock: boolean, inMedley: boolean): Way[] {
     const { kinds } = this.joints.compiled;
     const { weights, joints } = this;
     const from = joints.stands[joint]!;
@@ -112,6 +114,7 @@ export class MoveTable {
     let count = 1;
     for (const list of entry.options) count *= list?.length ?? 1;
     if (count > MOST_WAYS) throw new TooManyWays();
+    this.effort.take(count);
     choose(0, 0, 0, false, false);
     return ways;
 

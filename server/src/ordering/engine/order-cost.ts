@@ -1,11 +1,12 @@
 import type { Stage } from './stage';
+import type { Steps } from './steps';
 import type { Cost } from './sweep';
 
 /**
  * What an order of units costs at a stage, the best choice included: a walk that keeps, per place, the least
  * cost of each way the kinds can stand.
  */
-export function orderCost(stage: Stage, order: readonly number[]): Cost {
+export function orderCost(stage: Stage, order: readonly number[], steps: Steps): Cost {
   const { plan } = stage;
   let ways = new Map<number, Cost>([[stage.joints.opening, { high: 0, low: 0 }]]);
   let position = 0;
@@ -18,6 +19,7 @@ export function orderCost(stage: Stage, order: readonly number[]): Cost {
     const next = new Map<number, Cost>();
     for (const [joint, cost] of ways) {
       const moves = stage.moves.from(joint, stage.signature[unit]!);
+      steps.take(moves.to.length);
       const moveHigh = offClock ? moves.offHigh : moves.onHigh;
       const moveLow = offClock ? moves.offLow : moves.onLow;
       for (let way = 0; way < moves.to.length; way++) {

@@ -2,7 +2,6 @@ import { Bound, LARGE_BOUND, SMALL_BOUND, type BoundLimits } from './bound';
 import { compile, type Compiled } from './compiled';
 import { dealt, dealtApart } from './deal';
 import { someOrder } from './feasible';
-import { TooManyWays } from './moves';
 import { orderCost } from './order-cost';
 import type { OrderingProblem, Solution } from './ordering-problem';
 import { Stage } from './stage';
@@ -15,6 +14,8 @@ import { weightsFor, type Weights } from './weights';
 export interface SearchSettings {
   /** States kept per position while looking for a good order: before anything is proved, and later. */
   readonly widths: { readonly first: number; readonly later: number };
+  /** About how many steps a look may take. */
+  readonly lookSteps: number;
   /** Bounds to try in turn, with the steps that the first stage may take under each. */
   readonly bounds: readonly { readonly limits: BoundLimits; readonly share: number }[];
   /** After a sweep of fewer steps the next may rise in leaps; dearer ones feel their way. */
@@ -23,6 +24,7 @@ export interface SearchSettings {
 
 export const SETTINGS: SearchSettings = {
   widths: { first: 200, later: 48 },
+  lookSteps: 800_000,
   bounds: [
     { limits: SMALL_BOUND, share: 60_000 },
     { limits: LARGE_BOUND, share: Infinity },
@@ -64,16 +66,18 @@ export class Search {
   ) {
     this.compiled = compile(problem);
     this.weights = weightsFor(this.compiled, problem.goal);
-    this.all = new Stage(this.compiled, plan, this.weights, 'all');
+    this.all = new Stage(this.compiled, plan, this.weights, 'all', steps);
   }
 
-  /** @returns null where the budget ended before any order that keeps the rules was known */
+  /**
+   * @returns null where the budget ended before any order that keeps the rules was known
+   * @throws TooManyWays
+   */
   run(): Found | null {
     try {
       this.search();
     } catch (error) {
       if (error instanceof OutOfSteps) this.stopped = error.reason;
-      else if (error instanceof TooManyWays) this.stopped = 'steps';
       else throw error;
     }
     if (this.best === null) return null;
@@ -92,13 +96,13 @@ export class Search {
     if (start === null) throw new Error('The rules were found to hold');
     const entries = start.flatMap((unit) => plan.units[unit]!.entries);
     this.best = { entries, cost: NEVER };
-    this.best = { entries, cost: orderCost(this.all, start) };
+    this.best = { entries, cost: orderCost(this.all, start, steps) };
 
-    const tunings = new Stage(compiled, plan, weights, 'tunings');
+    const tunings = new Stage(compiled, plan, weights, 'tunings', steps);
     const swept = this.tuningsSwept(tunings);
     if (swept === null) return;
     sweepBack(swept.swept, steps);
-    const keys = new Stage(compiled, plan, weights, 'keys');
+    const keys = new Stage(compiled, plan, weights, 'keys', steps);
     const byTunings = { ...swept.base, coarse: swept.swept };
     this.look({ ...byTunings, stage: keys }, this.settings.widths.later);
     if (this.deepened({ ...byTunings, stage: keys, together: true }) === null) return;
@@ -170,7 +174,11 @@ export class Search {
   private look(base: Base & Pick<SweepOptions, 'stage' | 'coarse'>, width: number): void {
     if (!isLess(this.least, this.best!.cost)) return;
     const under = this.best!.cost;
-    const swept = sweep({ ...base, under, width });
+    // Long evenings of many classes are looked at more narrowly, or looking would take all the steps.
+    const { members, effort } = base.stage;
+    const each = this.plan.setStart.length * members.length * effort;
+    const affordable = Math.max(1, Math.floor(this.settings.lookSteps / each));
+    const swept = sweep({ ...base, under, width: Math.min(width, affordable) });
     if (swept.exact) this.raise(swept.best ?? under);
     if (swept.order !== null) this.offer(base.stage, swept.order);
   }
@@ -186,7 +194,7 @@ export class Search {
   }
 
   private offerEntries(entries: readonly number[]): void {
-    const cost = orderCost(this.all, unitsOf(this.plan, entries));
+    const cost = orderCost(this.all, unitsOf(this.plan, entries), this.steps);
     if (isLess(cost, this.best!.cost)) this.best = { entries, cost };
   }
 

@@ -10,6 +10,7 @@ import { solve } from './solve';
 const BARE: SearchSettings = {
   widths: { first: 1, later: 1 },
   bounds: [{ limits: { joints: 400, together: 1, apart: 1 }, share: Infinity }],
+  lookSteps: 1,
   cheapSweep: 0,
 };
 

@@ -1,6 +1,7 @@
 import type { Compiled } from './compiled';
 import { Joints, type Grain } from './joints';
 import { MoveTable } from './moves';
+import type { Steps } from './steps';
 import type { Plan } from './units';
 import type { Weights } from './weights';
 
@@ -45,10 +46,11 @@ export class Stage {
     readonly plan: Plan,
     weights: Weights,
     readonly closeness: Closeness,
+    steps: Steps,
   ) {
     const grain: Grain = closeness === 'tunings' ? 'tuning' : 'stance';
     this.joints = new Joints(compiled, grain);
-    this.moves = new MoveTable(this.joints, weights);
+    this.moves = new MoveTable(this.joints, weights, steps);
     const { units } = plan;
     const entriesOf = units.map((unit) => unit.entries.map((entry) => compiled.entries[entry]!));
     this.signature = Int32Array.from(entriesOf, (entries) => this.moves.signature(entries));
@@ -115,6 +117,11 @@ export class Stage {
   /** Words of a state: its counts, how all kinds stand, and what the next neighbour sees. */
   get stride(): number {
     return this.words + 2;
+  }
+
+  /** Steps that one state counts for: those of many classes take longer to read. */
+  get effort(): number {
+    return 1 + (this.members.length >> 4);
   }
 
   left(rows: Int32Array, at: number, index: number): number {

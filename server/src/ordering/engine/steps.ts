@@ -30,6 +30,11 @@ export class Steps {
     if (this.shouldStop()) throw new OutOfSteps('time');
   }
 
+  /** Where memory, not time, has run out. */
+  end(): never {
+    throw new OutOfSteps('steps');
+  }
+
   /** The same count under a nearer end: for a part of the search that must not eat the rest. */
   within(part: number): Steps {
     return new PartOfSteps(this, part);

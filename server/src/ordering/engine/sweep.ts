@@ -15,8 +15,8 @@ export const NEVER: Cost = { high: Infinity, low: Infinity };
 
 export const isLess = (a: Cost, b: Cost): boolean => a.high < b.high || (a.high === b.high && a.low < b.low);
 
-/** The most states that a layer's columns may take, all layers together: some 100 MB. */
-const MOST_STATES = 1_500_000;
+/** The most integers that the states of all layers may take: some 150 MB with their columns and tables. */
+const MOST_INTEGERS = 12_000_000;
 
 /** All layers of a stage, kept so that a finer stage can read its cost to go. */
 export interface Swept {
@@ -86,14 +86,14 @@ export function sweep(options: SweepOptions): Swept {
     }
     for (let row = 0; row < layer.size; row++) {
       successors.after(layer, row, position);
-      steps.take(successors.count + 1);
+      steps.take((successors.count + 1) * stage.effort);
       for (let index = 0; index < successors.count; index++) {
         const unit = successors.unit[index]!;
         const next = position + plan.units[unit]!.entries.length;
         follow(layer, row, position, next, unit, index);
       }
     }
-    if (states > MOST_STATES) steps.take(Infinity);
+    if (states * (stage.stride + 6) > MOST_INTEGERS) steps.end();
   }
 
   const last = layers[count]!;
@@ -191,7 +191,7 @@ export function sweepBack({ stage, layers }: Swept, steps: Steps): void {
     if (position === count) continue;
     for (let row = 0; row < layer.size; row++) {
       successors.after(layer, row, position);
-      steps.take(successors.count + 1);
+      steps.take((successors.count + 1) * stage.effort);
       for (let index = 0; index < successors.count; index++) {
         const unit = successors.unit[index]!;
         const next = position + plan.units[unit]!.entries.length;

@@ -1,5 +1,6 @@
 import type { Goal } from '@pegwell/shared/session/evening';
 import type { Compiled, CompiledEntry } from './compiled';
+import type { Steps } from './steps';
 
 export interface TuningMove {
   /** The joint stand it leads to. */
@@ -31,12 +32,13 @@ export class TuningMoves {
   private readonly peg: number;
   private readonly turn: number;
 
-  /** @throws TooManyStands */
+  /** @throws TooManyStands, OutOfSteps */
   constructor(
     private readonly compiled: Compiled,
     readonly kinds: readonly number[],
     private readonly goal: Goal,
     mostJoints: number,
+    steps: Steps,
   ) {
     const groups: (readonly (readonly number[] | null)[])[] = [];
     const groupByKey = new Map<string, number>();
@@ -59,6 +61,7 @@ export class TuningMoves {
     const moves: (readonly TuningMove[])[][] = [];
     for (let joint = 0; joint < this.joints.length; joint++) {
       if (joint >= mostJoints) throw new TooManyStands();
+      steps.take(groups.length * kinds.length);
       moves.push(groups.map((lists) => this.movesFrom(joint, lists)));
     }
     this.moves = moves;
