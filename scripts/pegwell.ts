@@ -10,6 +10,7 @@ import { test } from './test';
 const HELP = `./docker-free-dev.sh          develop: database, server and pages, with the demo circle; Ctrl-C stops all
 ./docker-free-dev.sh start    built, as in production: one process for API and pages, no demo unless PEGWELL_DEMO=yes
 ./docker-free-dev.sh test     every check; "test --only lint,shared,client,build,server,e2e" for some
+./docker-free-dev.sh pictures every page's picture in both lights, at 390 and 1360 px, into pictures/
 ./docker-free-dev.sh stop     stop what runs, the database included
 ./docker-free-dev.sh reset    remove the database and everything else in .data/ (asks first)`;
 
@@ -28,6 +29,10 @@ async function main([word, ...words]: readonly string[]): Promise<number> {
     case 'test':
       endOnSignals({ interrupted: 130, terminated: 143 });
       return test(words);
+    case 'pictures':
+      endOnSignals({ interrupted: 130, terminated: 143 });
+      // Loaded here alone: a browser's driver has no part in a start.
+      return (await import('./pictures')).pictures(words);
     case 'help':
     case '--help':
     case '-h':

@@ -13,15 +13,23 @@ import {
   type SeenPage,
 } from '../e2e/pages';
 import { freshDatabase, startSite } from '../e2e/site';
+import { findBrowser } from './browser';
+import { build } from './build';
 import { inRoot } from './places';
-import { say } from './sentence';
+import { say, Sentence } from './sentence';
+import { throwawayDatabase } from './throwaway-database';
 
 const FOLDER = inRoot('pictures');
 const SIZES = { laptop: LAPTOP, phone: PHONE } as const;
 const LIGHTS: readonly Light[] = ['day', 'lamp'];
 
 /** @param only names of pages; none is all of them */
-export async function takePictures(only: readonly string[]): Promise<number> {
+export async function pictures(only: readonly string[]): Promise<number> {
+  for (const workspace of ['shared', 'server', 'client'] as const) {
+    if ((await build(workspace, 'show')) !== 0) throw new Sentence(`${workspace} does not build; see above.`);
+  }
+  await findBrowser();
+  process.env['PEGWELL_TEST_DATABASE_URL'] ??= await throwawayDatabase();
   if (only.length === 0) rmSync(FOLDER, { recursive: true, force: true });
   mkdirSync(FOLDER, { recursive: true });
   const database = await freshDatabase();
