@@ -4,7 +4,7 @@ import { TuningText } from '../pictures/tuning-text';
 import styles from './music.module.css';
 
 /** A tuning with its capo, as it is typed and read back: `gDGBD capo 2`. */
-export function tunedText({ tuning, capo }: Pick<ShownTuning, 'tuning' | 'capo'>): string {
+function tunedText({ tuning, capo }: Pick<ShownTuning, 'tuning' | 'capo'>): string {
   return capo === 0 ? tuning : `${tuning} capo ${capo}`;
 }
 

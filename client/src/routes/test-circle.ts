@@ -8,7 +8,7 @@ import { ok, type Answers } from '../lib/mock-api';
 /** Ids as the server gives them, for tests: `id(3)`. */
 export const id = (number: number): string => `00000000-0000-4000-8000-${String(number).padStart(12, '0')}`;
 
-export const CIRCLE = id(1);
+const CIRCLE = id(1);
 export const at = (path: string): string => `/c/${CIRCLE}/${path}`;
 export const api = (method: string, path: string): string => `${method} /api/circles/${CIRCLE}${path}`;
 

@@ -4,7 +4,7 @@ import { parseTuning } from '@pegwell/shared/music/tuning';
 import { ProblemError, type ProblemIssue } from '../../lib/problem';
 
 /** What people of a kind arrive tuned to: standard, whatever the first tune wants, or a tuning that is typed. */
-export type Arrival = 'standard' | 'first' | 'typed';
+type Arrival = 'standard' | 'first' | 'typed';
 
 export interface ChairValues {
   readonly kind: string;

@@ -1,6 +1,6 @@
 import type { ImportAction, ImportReport } from '@pegwell/shared/contract/tunes';
 
-export interface ImportRow {
+interface ImportRow {
   readonly line: number;
   readonly title: string;
   readonly action: ImportAction;

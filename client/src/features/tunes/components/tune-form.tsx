@@ -11,7 +11,7 @@ import styles from './tune-form.module.css';
 import { TuningsField } from './tunings-field';
 
 /** What the circle takes a kind to have in a key, as shown, or `any`. */
-export type AssumedFor = (kindId: string, key: string, mode: Mode) => string;
+type AssumedFor = (kindId: string, key: string, mode: Mode) => string;
 
 interface TuneFormProps {
   readonly initial: TuneFormValues;
