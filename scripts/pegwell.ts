@@ -32,7 +32,7 @@ async function main([word, ...words]: readonly string[]): Promise<number> {
     case 'pictures':
       endOnSignals({ interrupted: 130, terminated: 143 });
       // Loaded here alone: a browser's driver has no part in a start.
-      return (await import('./pictures')).pictures(words);
+      return (await import('./pictures.js')).pictures(words);
     case 'help':
     case '--help':
     case '-h':
