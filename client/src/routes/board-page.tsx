@@ -11,6 +11,7 @@ import { useBoard } from '../features/sessions/hooks/use-board';
 import { sentenceOf } from '../lib/problem';
 import { useMedia } from '../lib/use-media';
 import { LinkButton } from '../ui/button';
+import { Moving } from '../ui/moving';
 import { Page } from '../ui/page';
 import { Failing, Loading } from '../ui/states';
 import { useSay } from '../ui/status';
@@ -20,7 +21,7 @@ import { useAssumedFor } from './use-assumed-for';
 const LOOK = 5_000;
 
 /** Milliseconds for which the old order is seen again before its cards travel to the new one. */
-const SETTLE = 450;
+const SETTLE = 600;
 
 /** One evening: built by a host, read by a player. */
 export function BoardPage() {
@@ -35,7 +36,9 @@ export function BoardPage() {
   return (
     <Page>
       {session.data && accountId ? (
-        <Evening key={sessionId} session={session.data} accountId={accountId} />
+        <Moving>
+          <Evening key={sessionId} session={session.data} accountId={accountId} />
+        </Moving>
       ) : session.isError ? (
         <Failing
           title="This evening cannot be shown"
@@ -53,6 +56,12 @@ export function BoardPage() {
   );
 }
 
+interface Taken {
+  readonly label: string;
+  readonly version: number;
+  readonly order: Order;
+}
+
 function Evening({ session, accountId }: { readonly session: Session; readonly accountId: string }) {
   const held = useBoard(session, accountId);
   const queries = useQueryClient();
@@ -64,6 +73,8 @@ function Evening({ session, accountId }: { readonly session: Session; readonly a
 
   const suggesting = search.has('suggest') && mayChange;
   const suggested = useRef(suggesting);
+  /** An order that is taken once the board is seen again. */
+  const taken = useRef<Taken | null>(null);
 
   const update = async (changes: UpdateSession) => {
     const changed = await updateSession(session.id, changes);
@@ -71,10 +82,7 @@ function Evening({ session, accountId }: { readonly session: Session; readonly a
     held.receive(changed);
   };
 
-  /** Back to the board first, so that the cards are seen to travel. */
-  const take = async (label: string, version: number, order: Order) => {
-    setSearch({}, { replace: true });
-    if (!calm) await new Promise((go) => setTimeout(go, SETTLE));
+  const accept = async ({ label, version, order }: Taken) => {
     try {
       await held.accept(label, { version, sets: order.map((ids) => [...ids]) });
       say(`${label}.`, { label: 'Undo', onPress: () => held.takeBack() });
@@ -87,9 +95,13 @@ function Evening({ session, accountId }: { readonly session: Session; readonly a
   useEffect(() => {
     if (suggested.current === suggesting) return;
     suggested.current = suggesting;
+    const order = taken.current;
+    taken.current = null;
+    // Seen in its old order first, so that the cards are seen to travel.
+    if (order) setTimeout(() => void accept(order), calm ? 0 : SETTLE);
     document.getElementById('main')?.focus({ preventScroll: true });
     window.scrollTo(0, 0);
-  }, [suggesting]);
+  });
 
   if (suggesting) {
     return (
@@ -97,7 +109,10 @@ function Evening({ session, accountId }: { readonly session: Session; readonly a
         session={held.session}
         board={held.board}
         save={held.flush}
-        onTake={(label, version, order) => void take(label, version, order)}
+        onTake={(label, version, order) => {
+          taken.current = { label, version, order };
+          setSearch({}, { replace: true });
+        }}
         onKeep={() => setSearch({}, { replace: true })}
       />
     );

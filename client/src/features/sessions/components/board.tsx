@@ -5,7 +5,7 @@ import { spotAt, standingOf } from '@pegwell/shared/session/board';
 import { DEFERENCE } from '@pegwell/shared/music/caution';
 import type { BoardOperation } from '@pegwell/shared/session/board-operations';
 import { priceOf } from '@pegwell/shared/session/board-price';
-import { LayoutGroup, LazyMotion, MotionConfig } from 'framer-motion';
+import { LayoutGroup } from 'framer-motion';
 import { useCallback, useMemo, useState } from 'react';
 import { newId } from '../../../lib/new-id';
 import { useMedia } from '../../../lib/use-media';
@@ -34,8 +34,6 @@ import { SetColumn } from './set-column';
 import { CardFace } from './tune-card';
 import cardStyles from './tune-card.module.css';
 import styles from './board.module.css';
-
-const motionFeatures = () => import('../../../lib/motion-features').then(({ features }) => features);
 
 interface BoardProps {
   readonly held: BoardInHand;
@@ -166,76 +164,72 @@ export function Board({ held, mayChange, assumedFor, onSuggest, onGoal, onUpdate
             </div>
           ) : null}
           <HeldContext value={{ heldId: drag.held?.id ?? null, target: drag.target }}>
-            <LazyMotion features={motionFeatures}>
-              <MotionConfig reducedMotion="user" transition={{ duration: 0.45, ease: [0.2, 0.7, 0.2, 1] }}>
-                <LayoutGroup>
-                  <div className={styles.sets}>
-                    {board.sets.map((set, setIndex) => {
-                      const start = board.sets
-                        .slice(0, setIndex)
-                        .reduce((sum, { entries }) => sum + entries.length, 0);
-                      const next = board.sets.slice(setIndex + 1).find(({ entries }) => entries.length > 0);
-                      const breaks = next !== undefined && start + set.entries.length >= firstFree;
-                      return (
-                        <SetColumn
-                          key={set.id}
-                          set={set}
-                          setIndex={setIndex}
-                          start={start}
-                          places={byId}
-                          chairs={chairs}
-                          changing={changing}
-                          firstFree={firstFree}
-                          nowEntryId={nowId}
-                          spaced={spaced}
-                          order={order}
-                          cardMenu={
-                            mayChange
-                              ? (entry) =>
-                                  cardMenu(session, board, entry, firstFree, {
-                                    perform: act,
-                                    askPosition: (each) => setAsking({ what: 'position', entry: each }),
-                                    editOpenPlace: (each) =>
-                                      setAsking({ what: 'open', setId: set.id, entry: each }),
-                                  })
-                              : null
-                          }
-                          menu={
-                            mayChange
-                              ? setMenu(board, setIndex, firstFree, {
-                                  perform: act,
-                                  rename: (setId) => setAsking({ what: 'rename', setId }),
-                                })
-                              : null
-                          }
-                          after={
-                            set.entries.length > 0 && breaks ? (
-                              <Break place={byId.get(next.entries[0]?.id ?? '')} chairs={chairs} />
-                            ) : null
-                          }
-                        >
-                          {mayChange ? (
-                            <div className={styles.below}>
-                              {wide ? null : (
-                                <Button look="plain" onClick={() => setAsking({ what: 'finder' })}>
-                                  Add a tune
-                                </Button>
-                              )}
-                              <Button
-                                look="quiet"
-                                onClick={() => setAsking({ what: 'open', setId: set.id, entry: null })}
-                              >
-                                Add an open place
-                              </Button>
-                            </div>
-                          ) : null}
-                        </SetColumn>
-                      );
-                    })}
-                  </div>
-                </LayoutGroup>
-              </MotionConfig>
-            </LazyMotion>
+            <LayoutGroup>
+              <div className={styles.sets}>
+                {board.sets.map((set, setIndex) => {
+                  const start = board.sets
+                    .slice(0, setIndex)
+                    .reduce((sum, { entries }) => sum + entries.length, 0);
+                  const next = board.sets.slice(setIndex + 1).find(({ entries }) => entries.length > 0);
+                  const breaks = next !== undefined && start + set.entries.length >= firstFree;
+                  return (
+                    <SetColumn
+                      key={set.id}
+                      set={set}
+                      setIndex={setIndex}
+                      start={start}
+                      places={byId}
+                      chairs={chairs}
+                      changing={changing}
+                      firstFree={firstFree}
+                      nowEntryId={nowId}
+                      spaced={spaced}
+                      order={order}
+                      cardMenu={
+                        mayChange
+                          ? (entry) =>
+                              cardMenu(session, board, entry, firstFree, {
+                                perform: act,
+                                askPosition: (each) => setAsking({ what: 'position', entry: each }),
+                                editOpenPlace: (each) =>
+                                  setAsking({ what: 'open', setId: set.id, entry: each }),
+                              })
+                          : null
+                      }
+                      menu={
+                        mayChange
+                          ? setMenu(board, setIndex, firstFree, {
+                              perform: act,
+                              rename: (setId) => setAsking({ what: 'rename', setId }),
+                            })
+                          : null
+                      }
+                      after={
+                        set.entries.length > 0 && breaks ? (
+                          <Break place={byId.get(next.entries[0]?.id ?? '')} chairs={chairs} />
+                        ) : null
+                      }
+                    >
+                      {mayChange ? (
+                        <div className={styles.below}>
+                          {wide ? null : (
+                            <Button look="plain" onClick={() => setAsking({ what: 'finder' })}>
+                              Add a tune
+                            </Button>
+                          )}
+                          <Button
+                            look="quiet"
+                            onClick={() => setAsking({ what: 'open', setId: set.id, entry: null })}
+                          >
+                            Add an open place
+                          </Button>
+                        </div>
+                      ) : null}
+                    </SetColumn>
+                  );
+                })}
+              </div>
+            </LayoutGroup>
           </HeldContext>
           {mayChange ? (
             <div className={styles.addSet}>
