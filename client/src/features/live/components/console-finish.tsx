@@ -17,8 +17,13 @@ export function ConsoleFinish({ left, taking, onFinish }: ConsoleFinishProps) {
   const close = () => setAsking(false);
   return (
     <>
-      <Button look="plain" disabled={taking !== null} onClick={() => setAsking(true)}>
-        Finish the evening
+      <Button
+        look="plain"
+        aria-label="Finish the evening"
+        disabled={taking !== null}
+        onClick={() => setAsking(true)}
+      >
+        Finish
       </Button>
       <Dialog
         open={asking}

@@ -32,22 +32,27 @@ export function ConsoleNow({ state, entries, mayRun, taking, onStep }: ConsoleNo
   });
 
   const steps = useRef<HTMLDivElement>(null);
+  const seen = useRef(phase);
 
   // A button that was pressed may be gone by now: the keyboard goes on with the likeliest step.
   useEffect(() => {
+    if (seen.current === phase) return;
+    seen.current = phase;
     if (document.activeElement === document.body) steps.current?.querySelector('button')?.focus();
   }, [phase]);
 
   if (status === 'finished') return <Finished called={called.length} />;
   if (status === 'planned') {
     return (
-      <section aria-label="Now">
-        <h2 className={styles.title}>Not begun yet</h2>
-        <p className={styles.key}>
-          {next
-            ? `First comes ${titleOf(tuneOf(next))}.`
-            : 'There is no tune on the board yet. Put one there first.'}
-        </p>
+      <>
+        <section aria-label="Now">
+          <h2 className={styles.title}>Not begun yet</h2>
+          <p className={styles.key}>
+            {next
+              ? `First comes ${titleOf(tuneOf(next))}.`
+              : 'There is no tune on the board yet. Put one there first.'}
+          </p>
+        </section>
         {mayRun && next ? (
           <div className={styles.steps}>
             <Button size="large" {...press('start')} busy={taking === 'start' && 'Starting'}>
@@ -55,7 +60,7 @@ export function ConsoleNow({ state, entries, mayRun, taking, onStep }: ConsoleNo
             </Button>
           </div>
         ) : null}
-      </section>
+      </>
     );
   }
   const tuning = phase === 'tuning';
@@ -107,14 +112,12 @@ function Finished({ called }: { readonly called: number }) {
   return (
     <section aria-label="Now">
       <h2 className={styles.title}>Good night</h2>
-      <p
-        className={styles.key}
-      >{`${count(called, 'tune')} called. The evening is in the circle’s record.`}</p>
-      <div className={styles.steps}>
+      <p className={styles.key}>{`${count(called, 'tune')} called.`}</p>
+      <p className={styles.record}>
         <LinkButton to={`/c/${circleId}/record`} size="large">
           See the record
         </LinkButton>
-      </div>
+      </p>
     </section>
   );
 }

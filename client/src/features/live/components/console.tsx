@@ -61,9 +61,11 @@ export function Console({ session, onStep }: ConsoleProps) {
         <LinkButton to={`/c/${session.circleId}/evenings/${session.id}`} look="plain">
           The board
         </LinkButton>
-        <LinkButton to={`/f/${session.code}/room`} look="plain" target="_blank">
-          Screen for the room
-        </LinkButton>
+        {state.status === 'finished' ? null : (
+          <LinkButton to={`/f/${session.code}/room`} look="plain" target="_blank">
+            Screen for the room
+          </LinkButton>
+        )}
         {mayRun && state.status === 'live' ? (
           <ConsoleFinish
             left={entries.length - state.called.length}
