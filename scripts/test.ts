@@ -117,6 +117,8 @@ export async function test(words: readonly string[]): Promise<number> {
   mkdirSync(LOGS, { recursive: true });
   const steps = chosen(parts);
   const results = await runSteps(steps, await environment(parts), filters);
+  // Interrupted: what was not tried is neither passed nor failed.
+  if (isEnding()) return 1;
   say();
   for (const part of PARTS) {
     const ran = steps
