@@ -54,14 +54,13 @@ function walk(
       const inMedley =
         previous !== null &&
         evening.medleys.some((medley) => medley.some((m, i) => m === previous!.id && medley[i + 1] === id));
-      let stop = false;
-      let changed = false;
+      const did = { stop: false, change: false };
       kinds.forEach((kind, k) => {
-        const position = choice[at]![k]!;
-        if (position === null) return;
+        const position = choice[at]![k];
+        if (position === null || position === undefined) return;
         const { count, kind: instrument } = evening.chairs.find((chair) => chair.kind.id === kind)!;
         const to = (tune.accepted[kind] as readonly Tuned[])[position]!;
-        const from = has[k]!;
+        const from = has[k] ?? null;
         has[k] = to;
         if (position > 0) score.secondChoices += count;
         if (from === null) return;
@@ -71,15 +70,15 @@ function walk(
           score.pegChanges += count * pegs;
           score.semitones += count * pegs * Math.abs(delta);
           if (!onClock) score.offClockPegChanges += count * pegs;
-          stop = changed = true;
+          did.stop = did.change = true;
         });
         if (from.capo !== to.capo) {
-          changed = true;
+          did.change = true;
           if (onClock) score.capoMoves += count;
         }
       });
-      if (stop && onClock) score.retuneStops++;
-      if (changed && inMedley) score.ruleBreaks++;
+      if (did.stop && onClock) score.retuneStops++;
+      if (did.change && inMedley) score.ruleBreaks++;
       if (onClock && previous !== null) {
         const spaced = [previous, tune].every(
           ({ rhythm }) => rhythm !== null && evening.spacedRhythms.includes(rhythm.toLowerCase()),

@@ -38,28 +38,27 @@ export function scoreEvening(evening: Evening): Scored {
   } satisfies Score;
   const before = kinds.map(() => 0);
   const scoredPlaces = places.map(({ tune, offClock, inMedley, spacedPair, keyChange }, index): Place => {
-    let pegChanges = 0;
-    let turned = false;
-    let changed = false;
-    const moves = kinds.map(({ kind, stands, steps }, k): KindMove => {
+    const taken = kinds.map(({ steps }, k) =>
+      steps[index]![before[k]!]!.find(({ to }) => to === choices[index]![k])!,
+    );
+    const moves = kinds.map(({ kind, stands }, k): KindMove => {
+      const step = taken[k]!;
       const from = stands[index]![before[k]!]!;
-      const chosen = choices[index]![k]!;
-      const to = stands[index + 1]![chosen]!;
-      const step = steps[index]![before[k]!]!.find((candidate) => candidate.to === chosen)!;
-      before[k] = chosen;
-      pegChanges += step.pegs;
-      turned ||= step.turns;
-      changed ||= step.changes;
+      const to = stands[index + 1]![step.to]!;
+      return { kind: kind.id, from: from.tuned, to: to.tuned, ...step.perChair, choice: to.position };
+    });
+    for (const [k, step] of taken.entries()) {
+      before[k] = step.to;
       score.secondChoices += step.second;
       score.capoMoves += step.capo;
       score.semitones += step.semitones;
-      return { kind: kind.id, from: from.tuned, to: to.tuned, ...step.perChair, choice: to.position };
-    });
+    }
+    const pegChanges = taken.reduce((sum, { pegs }) => sum + pegs, 0);
     score.pegChanges += pegChanges;
     if (offClock) score.offClockPegChanges += pegChanges;
-    else if (turned) score.retuneStops += 1;
+    else if (taken.some(({ turns }) => turns)) score.retuneStops += 1;
     if (spacedPair) score.ruleBreaks += 1;
-    if (inMedley && changed) score.ruleBreaks += 1;
+    if (inMedley && taken.some((step) => step.changes)) score.ruleBreaks += 1;
     if (keyChange) score.keyChanges += 1;
     return { before: tune.id, offClock, pegChanges, kinds: moves };
   });
