@@ -295,11 +295,14 @@ describe('the time it takes', () => {
       sets: [tunes.slice(0, 12), tunes.slice(12)],
     });
     for (let warm = 0; warm < 50; warm++) scoreEvening(night);
-    const started = performance.now();
-    for (let run = 0; run < 20; run++) scoreEvening(night);
-    const each = (performance.now() - started) / 20;
-
-    expect(each).toBeLessThan(16);
+    let quickest = Infinity;
+    for (let run = 0; run < 50; run++) {
+      const started = performance.now();
+      scoreEvening(night);
+      quickest = Math.min(quickest, performance.now() - started);
+    }
+    // The quickest of many: a machine that does other things too must not fail it.
+    expect(quickest).toBeLessThan(5);
   });
 });
 
