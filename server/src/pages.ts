@@ -14,13 +14,19 @@ export function servePages(app: NestExpressApplication): void {
   const index = join(PAGES, 'index.html');
   if (!existsSync(index)) return;
   app.use('/assets', express.static(join(PAGES, 'assets'), { immutable: true, maxAge: '365d' }), notThere);
-  app.use(express.static(PAGES, { index: false, maxAge: 0 }));
+  const files = express.static(PAGES, { index: false, maxAge: 0 });
   app.use((request: Request, response: Response, next: NextFunction) => {
-    if (request.method !== 'GET' && request.method !== 'HEAD') return next();
-    if (request.path === '/api' || request.path.startsWith('/api/')) return next();
+    // The API is never a file: phones that poll do not make the disk look for one.
+    if (isApi(request)) next();
+    else files(request, response, next);
+  });
+  app.use((request: Request, response: Response, next: NextFunction) => {
+    if ((request.method !== 'GET' && request.method !== 'HEAD') || isApi(request)) return next();
     response.set('Cache-Control', 'no-cache').sendFile(index);
   });
 }
+
+const isApi = ({ path }: Request): boolean => path === '/api' || path.startsWith('/api/');
 
 /** A file of an older build: the browser should ask for the page again, not be given it as a script. */
 function notThere(_request: Request, response: Response): void {
