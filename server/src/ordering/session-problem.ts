@@ -9,7 +9,11 @@ import type { OrderingProblem } from './engine/ordering-problem';
 export function problemOf(
   stored: StoredEvening,
   goal: Goal,
-): { readonly problem: OrderingProblem; restore(sets: readonly (readonly string[])[]): string[][] } {
+): {
+  readonly problem: OrderingProblem;
+  /** The whole board's sets, from the order of what is left. */
+  readonly restore: (sets: readonly (readonly string[])[]) => string[][];
+} {
   const evening = scoredEvening(stored);
   const ids = evening.sets.flat();
   const called = new Set(stored.session.status === 'live' ? stored.session.progress?.called : []);
