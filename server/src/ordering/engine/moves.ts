@@ -126,7 +126,7 @@ export class MoveTable {
         return;
       }
       const kind = kinds[k]!;
-      const list = entry.options[k]!;
+      const list = entry.options[k] ?? null;
       if (list === null) {
         to[k] = from[k]!;
         choose(k + 1, high, low, turns, changes);

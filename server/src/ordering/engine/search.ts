@@ -91,7 +91,7 @@ export class Search {
   }
 
   private search(): void {
-    const { compiled, plan, problem, weights, steps } = this;
+    const { compiled, plan, weights, steps } = this;
     const start = this.hostUnits() ?? someOrder(plan, steps);
     if (start === null) throw new Error('The rules were found to hold');
     const entries = start.flatMap((unit) => plan.units[unit]!.entries);
@@ -106,7 +106,7 @@ export class Search {
     const byTunings = { ...swept.base, coarse: swept.swept };
     this.look({ ...byTunings, stage: keys }, this.settings.widths.later);
     if (this.deepened({ ...byTunings, stage: keys, together: true }) === null) return;
-    if (!isLess(this.least, this.best!.cost)) return;
+    if (!isLess(this.least, this.best.cost)) return;
 
     // Only spaced rhythms stand between the bound and the best order known.
     const coarse = this.deepened({ ...byTunings, stage: keys });
@@ -207,11 +207,11 @@ export class Search {
 
   /** Leading levels on which the bound has reached the best order. */
   private proven(cost: Cost): number {
-    const { levels, read } = this.weights;
+    const { weights } = this;
     if (cost.high === Infinity) return 0;
-    const bound = read(this.least.high, this.least.low);
-    const differs = read(cost.high, cost.low).findIndex((value, level) => value !== bound[level]);
-    return Math.min(levels, differs === -1 ? 7 : differs);
+    const bound = weights.read(this.least.high, this.least.low);
+    const differs = weights.read(cost.high, cost.low).findIndex((value, level) => value !== bound[level]);
+    return Math.min(weights.levels, differs === -1 ? 7 : differs);
   }
 
   /** The host's order in units; null where it breaks a rule. */

@@ -72,11 +72,10 @@ export class Successors {
       return;
     }
     if (!this.alive(rows, at, position)) return;
-    if (this.together && this.openFrom <= position && this.staysTogether(rows, at, position)) return;
+    if (this.together && this.openFrom <= position && this.staysTogether(rows, at)) return;
     for (let c = 0; c < stage.members.length; c++) {
       if (stage.left(rows, at, c) === 0) continue;
-      const fits = this.fits[c]!;
-      if (fits !== null && fits[position] === 0) continue;
+      if (this.fits[c]?.[position] === 0) continue;
       if (!this.mayCome(this.waits[c]!, rows, at, position)) continue;
       this.place(stage.members[c]![0]!, rows, at, position);
     }
@@ -88,7 +87,7 @@ export class Successors {
    * costs no more than it did (the triangle inequality). Not so for spaced rhythms, which it may keep apart.
    * What is left out so has its like at this stage, but not at a finer one: no table may be read from it.
    */
-  private staysTogether(rows: Int32Array, at: number, position: number): boolean {
+  private staysTogether(rows: Int32Array, at: number): boolean {
     const { stage } = this;
     if (this.spacedLeft(rows, at) > 1) return false;
     const joint = rows[at + stage.words]!;

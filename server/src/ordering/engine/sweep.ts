@@ -122,7 +122,7 @@ export function sweep(options: SweepOptions): Swept {
     unit: number,
     index: number,
   ): void {
-    let high = layer.high[row]! + successors.high[index]!;
+    const high = layer.high[row]! + successors.high[index]!;
     let low = layer.low[row]! + successors.low[index]!;
     if (moved !== undefined) low += moved.weight * movedBy(moved.hostUnitAt, stage, unit, position, next);
     if (high > under.high || (high === under.high && low >= under.low)) {

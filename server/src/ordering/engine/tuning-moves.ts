@@ -104,7 +104,7 @@ export class TuningMoves {
   private tuningsOf({ options }: CompiledEntry): readonly (readonly number[] | null)[] {
     return this.kinds.map((k) => {
       const { tuningOf } = this.compiled.kinds[k]!;
-      const list = options[k]!;
+      const list = options[k] ?? null;
       return list && [...new Set(list.map(({ stance }) => tuningOf[stance]!))].sort((a, b) => a - b);
     });
   }

@@ -23,7 +23,7 @@ export class Solver {
 
   /** Starts the thread before the first host asks: for the running server, not for every test of it. */
   warm(): void {
-    void this.pool;
+    this.started ??= pool();
   }
 
   /**
@@ -37,7 +37,8 @@ export class Solver {
     const callOff = (): void => void Atomics.store(called, 0, 1);
     signal?.addEventListener('abort', callOff, { once: true });
     try {
-      const answer = await this.pool.run({ problem: plain(problem), limitMs: limitMs ?? null, called });
+      this.started ??= pool();
+      const answer = await this.started.run({ problem: plain(problem), limitMs: limitMs ?? null, called });
       signal?.throwIfAborted();
       return answer;
     } finally {
@@ -60,16 +61,16 @@ export class Solver {
   onApplicationShutdown(): Promise<void> {
     return this.close();
   }
+}
 
-  private get pool(): Piscina<SolveTask, Answer> {
-    return (this.started ??= new Piscina<SolveTask, Answer>({
-      filename: WORKER,
-      minThreads: 1,
-      maxThreads: 1,
-      idleTimeout: Infinity,
-      execArgv: WRITTEN ? ['--import', 'tsx', '--conditions', 'pegwell-source'] : [],
-    }));
-  }
+function pool(): Piscina<SolveTask, Answer> {
+  return new Piscina<SolveTask, Answer>({
+    filename: WORKER,
+    minThreads: 1,
+    maxThreads: 1,
+    idleTimeout: Infinity,
+    execArgv: WRITTEN ? ['--import', 'tsx', '--conditions', 'pegwell-source'] : [],
+  });
 }
 
 /** Only what the engine reads, so that nothing that cannot be cloned goes to the thread. */
