@@ -38,6 +38,8 @@ export interface Found {
   readonly entries: readonly number[];
   readonly provenLevels: number;
   readonly lowerBound: number;
+  /** Whether the host's order keeps the rules. */
+  readonly hostHolds: boolean;
   readonly stopped: Solution['stopped'];
 }
 
@@ -86,6 +88,7 @@ export class Search {
       entries: this.best.entries,
       provenLevels: this.proven(this.best.cost),
       lowerBound: lowerBound!,
+      hostHolds: this.hostUnits() !== null,
       stopped: this.stopped,
     };
   }

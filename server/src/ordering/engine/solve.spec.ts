@@ -212,3 +212,90 @@ describe('the order found, against every order there is', () => {
     for (let seed = 2001; seed <= 2030; seed++) checkAgainstEnumeration(seed, 7);
   }, 300_000);
 });
+
+describe('what no evening should ask for', () => {
+  const kinds = ['fiddle', 'banjo', 'mandolin'];
+  const lists = (tune: number) =>
+    Object.fromEntries(
+      kinds.map((kind, k) => {
+        const [first, ...rest] = POOLS[kind]!;
+        const tuned = Array.from({ length: 20 }, (_, index) => ({
+          pitches: [...rest, first!][(index + tune + k) % POOLS[kind]!.length]!.split(' '),
+          capo: index % 12,
+        }));
+        return [kind, tuned];
+      }),
+    );
+  const ids = Array.from({ length: 12 }, (_, index) => `t${index}`);
+  const rich: OrderingProblem = {
+    chairs: kinds.map((kind) => ({ kind: builtInKind(kind)!, count: 1 })),
+    openings: Object.fromEntries(
+      kinds.map((kind) => [kind, { pitches: POOLS[kind]![0]!.split(' '), capo: 0 }]),
+    ),
+    goal: 'pegs',
+    spacedRhythms: [],
+    tunes: ids.map((id, tune) => ({ id, tonic: tune, rhythm: null, accepted: lists(tune) })),
+    sets: [ids],
+    medleys: [],
+    pins: {},
+    befores: [],
+  };
+
+  it('answers lists with thousands of ways together, claims nothing, and is not worse than the host', () => {
+    const answer = solve(rich);
+    if (answer.outcome !== 'solution') throw new Error(answer.outcome);
+    checkSolution(rich, answer);
+    expect(answer).toMatchObject({ provenLevels: 0, optimal: false, lowerBound: 0 });
+    expect(compareScores(answer.score, scoreEvening(rich).score, 'pegs')).toBeLessThanOrEqual(0);
+  }, 60_000);
+
+  it('answers an empty evening with zeros, proved, and one tune as it is', () => {
+    const empty = solve({ ...rich, tunes: [], sets: [] });
+    expect(empty).toMatchObject({
+      outcome: 'solution',
+      optimal: true,
+      provenLevels: 7,
+      lowerBound: 0,
+      sets: [],
+    });
+    const one = solve({
+      ...rich,
+      sets: [['t3']],
+      tunes: rich.tunes.map((tune) => ({ ...tune, accepted: {} })),
+    });
+    expect(one).toMatchObject({ outcome: 'solution', optimal: true, sets: [['t3']], moved: [] });
+  });
+
+  it.each([
+    ['a pin past the end', { pins: { t1: 12 } }, [{ rule: 'pin', ids: ['t1'] }]],
+    [
+      'two pins on one place',
+      { pins: { t1: 4, t2: 4, t3: 5 } },
+      [
+        { rule: 'pin', ids: ['t1'] },
+        { rule: 'pin', ids: ['t2'] },
+      ],
+    ],
+    [
+      'a circle of pairs',
+      {
+        befores: [
+          ['t1', 't2'],
+          ['t5', 't6'],
+          ['t2', 't1'],
+        ] as [string, string][],
+      },
+      [
+        { rule: 'before', ids: ['t1', 't2'] },
+        { rule: 'before', ids: ['t2', 't1'] },
+      ],
+    ],
+    [
+      'a medley longer than any set',
+      { medleys: [ids.slice(0, 7)], sets: [ids.slice(0, 6), ids.slice(6)] },
+      [{ rule: 'medley', ids: ids.slice(0, 7) }],
+    ],
+  ])('names the rules of %s', (_, rules, clashes) => {
+    expect(solve({ ...rich, ...rules })).toEqual({ outcome: 'clash', clashes });
+  });
+});

@@ -1,4 +1,4 @@
-import { scoreEvening } from '@pegwell/shared/session/score';
+import { compareScores, scoreEvening } from '@pegwell/shared/session/score';
 import { clashing, rulesOf } from './clash';
 import { hostRules } from './host-rules';
 import { TooManyWays } from './moves';
@@ -70,7 +70,24 @@ function searched(
     ),
   }));
   const found = new Search({ ...problem, tunes }, plan, steps, settings).run();
-  return found && { ...found, provenLevels: 0, lowerBound: 0, stopped: found.stopped ?? 'steps' };
+  if (found === null) return null;
+  const host = found.entries.map((_, position) => position);
+  const entries = found.hostHolds && !isBetter(problem, found.entries) ? host : found.entries;
+  return { ...found, entries, provenLevels: 0, lowerBound: 0, stopped: found.stopped ?? 'steps' };
+}
+
+/** Whether an order is better than the host's, all choices allowed. */
+function isBetter(problem: OrderingProblem, entries: readonly number[]): boolean {
+  const order = problem.sets.flat();
+  const ids = entries.map((entry) => order[entry]!);
+  const { score } = scoreEvening({ ...problem, sets: inSets(problem, ids) });
+  return compareScores(score, scoreEvening(problem).score, problem.goal) < 0;
+}
+
+/** Ids in sets of the host's sizes. */
+function inSets(problem: OrderingProblem, ids: readonly string[]): string[][] {
+  let from = 0;
+  return problem.sets.map(({ length }) => ids.slice(from, (from += length)));
 }
 
 function solutionOf(
@@ -80,8 +97,7 @@ function solutionOf(
   steps: number,
 ): Solution {
   const ids = found.entries.map((entry) => order[entry]!);
-  let from = 0;
-  const sets = problem.sets.map(({ length }) => ids.slice(from, (from += length)));
+  const sets = inSets(problem, ids);
   return {
     outcome: 'solution',
     sets,
