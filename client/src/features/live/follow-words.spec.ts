@@ -1,6 +1,17 @@
 import { builtInKind } from '@pegwell/shared/music/instrument';
 import { describe, expect, it } from 'vitest';
-import { agoOf, priceOf, retuneLabel, stringLetters, titleOf, underTitle, untilRetune } from './follow-words';
+import {
+  agoOf,
+  inOrder,
+  priceOf,
+  retuneLabel,
+  sidesOf,
+  stringLetters,
+  titleOf,
+  turnNow,
+  underTitle,
+  untilRetune,
+} from './follow-words';
 import { move } from './follow-fixtures';
 
 const banjo = builtInKind('banjo')!;
@@ -24,6 +35,15 @@ describe('what the phone says', () => {
     expect(retuneLabel(move('fiddle', 'GDAE', 'ADAE'))).toBe('retune 1 peg');
     expect(priceOf(move('banjo', 'gDGBD', 'gDGBD capo 2'))).toBe('capo on at fret 2');
     expect(retuneLabel(move('banjo', 'gCGCD capo 2', 'gDGBD'))).toBe('retune 2 pegs, capo off');
+  });
+
+  it('says what to do now, a capo that goes before the pegs and one that comes after them', () => {
+    // score.md, "Words of safety": first capo off.
+    const [off, on] = [move('banjo', 'gCGCD capo 2', 'gDGBD'), move('banjo', 'gCGCD', 'gDGBD capo 2')];
+    expect(turnNow(move('fiddle', 'GDAE', 'ADAE'))).toBe('Retune 1 peg now');
+    expect(turnNow(off)).toBe('Now retune 2 pegs, capo off');
+    expect(inOrder('capo off', ['pegs'], sidesOf(off)!.to)).toEqual(['Capo off', 'pegs']);
+    expect(inOrder('capo on at fret 2', ['pegs'], sidesOf(on)!.to)).toEqual(['pegs', 'Capo on at fret 2']);
   });
 
   it('writes a banjo’s fifth in lower case', () => {

@@ -33,6 +33,18 @@ export function retuneLabel(move: FollowMove): string {
   return move.pegChanges > 0 ? `retune ${priceOf(move)}` : priceOf(move);
 }
 
+/** `Retune 1 peg now`; with a capo `Now retune 2 pegs, capo off`. */
+export function turnNow(move: FollowMove): string {
+  const label = retuneLabel(move);
+  return capoOf(move) === '' ? `${capital(label)} now` : `Now ${label}`;
+}
+
+/** What is done, in words and in order: a capo that goes is first, one that comes is last. */
+export function inOrder(capo: string, turned: readonly string[], to: Tuned): readonly string[] {
+  if (capo === '') return turned;
+  return to.capo === 0 ? [capital(capo), ...turned] : [...turned, capital(capo)];
+}
+
 function capoOf({ capoFrom, capoTo }: FollowMove): string {
   return capoFrom === null || capoTo === null ? '' : capoWords(capoFrom, capoTo);
 }

@@ -27,7 +27,7 @@ export function FollowView({ follow, kind }: FollowViewProps) {
           <h1>{title}</h1>
           <p>
             {status === 'finished'
-              ? 'This evening is over. Good night, and safe home.'
+              ? 'Over for tonight. Good night, and safe home.'
               : `Not begun yet. ${momentOf(follow.startsAt, follow.timeZone)}. This page changes by itself.`}
           </p>
           {status === 'planned' && !next ? <p>No tune is planned yet.</p> : null}

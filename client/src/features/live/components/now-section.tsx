@@ -1,7 +1,7 @@
 import type { Follow } from '@pegwell/shared/contract/live';
 import { type InstrumentKind, standardPitches } from '@pegwell/shared/music/instrument';
 import { retune } from '@pegwell/shared/music/retune';
-import { capital, retuneLabel, stringLetters, titleOf, underTitle, yours } from '../follow-words';
+import { capital, stringLetters, titleOf, turnNow, underTitle, yours } from '../follow-words';
 import { StringLetters } from './string-letters';
 import { Turns } from './turns';
 import styles from './follow.module.css';
@@ -37,7 +37,7 @@ export function NowSection({ now, kind, inRoom }: NowSectionProps) {
       ) : null}
       {turning ? (
         <>
-          <p className={styles.turn}>{`${capital(retuneLabel(move))} now`}</p>
+          <p className={styles.turn}>{turnNow(move)}</p>
           <Turns kind={kind} move={move} when="now" />
         </>
       ) : (

@@ -1,12 +1,13 @@
 import type { Follow, FollowMove, FollowTune } from '@pegwell/shared/contract/live';
 import { cautions, DEFERENCE, worstGrade } from '@pegwell/shared/music/caution';
 import { builtInKind, type InstrumentKind } from '@pegwell/shared/music/instrument';
+import { TURNING_HABITS } from '@pegwell/shared/music/retune-steps';
 import { capoWords, turns } from '@pegwell/shared/music/words';
 import { momentOf } from '../../../lib/format';
 import type { ReactNode } from 'react';
 import { PegStrip } from '../../../pictures/peg-strip';
 import { announcement } from '../announcement';
-import { capital, priceOf, retuneLabel, sidesOf, titleOf, underTitle } from '../follow-words';
+import { inOrder, priceOf, retuneLabel, sidesOf, titleOf, turnNow, underTitle } from '../follow-words';
 import { named } from './next-section';
 import { StringLetters } from './string-letters';
 import styles from './room.module.css';
@@ -54,7 +55,7 @@ export function RoomView({ follows, aside }: RoomViewProps) {
           ))}
         </ul>
       ) : null}
-      {turning ? <p className={styles.limits}>{DEFERENCE}</p> : null}
+      {turning ? <p className={styles.limits}>{[...TURNING_HABITS, DEFERENCE].join(' ')}</p> : null}
       {now && next ? <Next follows={follows} next={next} /> : null}
     </>
   );
@@ -106,22 +107,25 @@ function TurnsOfRoom({ kind, tune, now }: TurnsOfRoomProps) {
   const { from, to } = sides;
   const found = cautions(kind, from.pitches, to.pitches);
   const grave = found.filter(({ grade, twoGoes }) => grade !== 'note' || twoGoes);
-  const capo = capital(capoWords(from.capo, to.capo));
+  const steps = inOrder(
+    capoWords(from.capo, to.capo),
+    turns(kind, from.pitches, to.pitches).map(({ short }) => short),
+    to,
+  );
   return (
     <>
-      <p
-        className={styles.turn}
-      >{`${capital(retuneLabel(tune.retune))} ${now ? 'now' : 'for the first tune'}`}</p>
+      <p className={styles.turn}>
+        {now ? turnNow(tune.retune) : `For the first tune: ${retuneLabel(tune.retune)}`}
+      </p>
       {worstGrade(found) === 'refused' ? null : (
         <div className={styles.turns}>
           {tune.retune.pegChanges > 0 ? (
             <PegStrip kind={kind} from={from.pitches} to={to.pitches} size="large" wordsBeside />
           ) : null}
           <ol className={styles.steps}>
-            {turns(kind, from.pitches, to.pitches).map(({ short }) => (
-              <li key={short}>{short}</li>
+            {steps.map((step) => (
+              <li key={step}>{step}</li>
             ))}
-            {capo ? <li>{capo}</li> : null}
           </ol>
         </div>
       )}

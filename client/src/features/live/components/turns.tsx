@@ -6,7 +6,7 @@ import { capoWords, turns } from '@pegwell/shared/music/words';
 import { useState } from 'react';
 import { PegStrip } from '../../../pictures/peg-strip';
 import { Button } from '../../../ui/button';
-import { capital, sidesOf } from '../follow-words';
+import { inOrder, sidesOf } from '../follow-words';
 import styles from './turns.module.css';
 
 interface TurnsProps {
@@ -27,8 +27,11 @@ export function Turns({ kind, move, when }: TurnsProps) {
   const { from, to } = sides;
   const found = cautions(kind, from.pitches, to.pitches);
   const refused = worstGrade(found) === 'refused' && !goesOn;
-  const capo = capital(capoWords(from.capo, to.capo));
-  const soon = [...turns(kind, from.pitches, to.pitches).map(({ full }) => full), ...(capo ? [capo] : [])];
+  const soon = inOrder(
+    capoWords(from.capo, to.capo),
+    turns(kind, from.pitches, to.pitches).map(({ full }) => full),
+    to,
+  );
   const pegsTurn = move.pegChanges > 0;
   return (
     <div className={styles.turns}>
