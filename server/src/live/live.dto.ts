@@ -6,7 +6,6 @@ import {
   liveStepSchema,
   playsSchema,
 } from '@pegwell/shared/contract/live';
-import { pageQuerySchema } from '@pegwell/shared/contract/page';
 import { createZodDto } from 'nestjs-zod';
 
 export class LiveStepDto extends createZodDto(liveStepSchema) {}
@@ -15,4 +14,3 @@ export class FollowQueryDto extends createZodDto(followQuerySchema) {}
 export class FollowDto extends createZodDto(followSchema) {}
 export class PlaysDto extends createZodDto(playsSchema) {}
 export class CirclePlayPageDto extends createZodDto(circlePlayPageSchema) {}
-export class PlaysQueryDto extends createZodDto(pageQuerySchema) {}

@@ -3,7 +3,8 @@ import { ApiParam, ApiResponse, ApiTags } from '@nestjs/swagger';
 import type { CirclePlay, Play } from '@pegwell/shared/contract/live';
 import type { Page } from '@pegwell/shared/contract/page';
 import { AsMember, ForMembers, ForSessionMembers, type Member } from '../common/access';
-import { CirclePlayPageDto, PlaysDto, PlaysQueryDto } from './live.dto';
+import { PageQueryDto } from '../common/page.dto';
+import { CirclePlayPageDto, PlaysDto } from './live.dto';
 import { RecordService } from './record.service';
 
 @ApiTags('record')
@@ -22,7 +23,7 @@ export class RecordController {
   @ForMembers('record.read')
   @ApiParam({ name: 'circleId', format: 'uuid' })
   @ApiResponse({ status: 200, type: CirclePlayPageDto.Output, description: 'Newest first.' })
-  ofCircle(@AsMember() member: Member, @Query() query: PlaysQueryDto): Promise<Page<CirclePlay>> {
+  ofCircle(@AsMember() member: Member, @Query() query: PageQueryDto): Promise<Page<CirclePlay>> {
     return this.record.ofCircle(member, query);
   }
 }
