@@ -112,7 +112,7 @@ describe('every page of the demo', () => {
       );
       await context.close();
     }
-  });
+  }, 300_000);
 
   it('sends pages with a Content-Security-Policy that lets nothing in from elsewhere', async () => {
     const answer = await host.request.get('/');
@@ -137,9 +137,10 @@ describe('every page of the demo', () => {
     expect(scripts.size).toBeGreaterThan(1);
     expect(bytes).toBeLessThan(PHONE_BUDGET);
     process.stdout.write(`the phone page loads ${(bytes / 1000).toFixed(1)} kB of compressed JavaScript\n`);
-    // And that is how the server sends it.
-    const first = await fetch([...scripts.keys()][0] ?? '', { headers: { 'accept-encoding': 'gzip' } });
-    expect(first.headers.get('content-encoding')).toBe('gzip');
+    // And that is how the server sends it; what is smaller than a packet goes as it is.
+    const [largest] = [...scripts].sort(([, a], [, b]) => b - a);
+    const sent = await fetch(largest?.[0] ?? '', { headers: { 'accept-encoding': 'gzip' } });
+    expect(sent.headers.get('content-encoding')).toBe('gzip');
     await context.close();
   });
 });

@@ -173,7 +173,7 @@ describe('an evening, from a list of tunes to a room that follows it', () => {
     }
     await host.getByRole('button', { name: 'Finish the evening' }).click();
     await host.getByRole('button', { name: 'Finish', exact: true }).click();
-    await phone.getByText('This evening is over.').waitFor({ timeout: TWO_POLLS });
+    await phone.getByText('This evening is over.').first().waitFor({ timeout: TWO_POLLS });
 
     /** Within two polls: the tune that is now with its letters, and what is turned for the next, peg by peg. */
     async function phoneShows(now: number | null, next: number): Promise<void> {
@@ -194,7 +194,7 @@ describe('an evening, from a list of tunes to a room that follows it', () => {
   });
 
   it('remembers what was played', async () => {
-    await host.getByRole('link', { name: 'Record' }).click();
+    await host.getByRole('link', { name: 'Record', exact: true }).click();
     await host.getByText('Second Thursday').first().waitFor();
   });
 
