@@ -115,6 +115,8 @@ describe('an evening, from a list of tunes to a room that follows it', () => {
       for (const title of titles) {
         await host.getByLabel('Find a tune').fill(title);
         const row = host.locator('aside li', { hasText: title });
+        // The list has settled on what was typed: nothing moves under the hand any more.
+        await expect.poll(() => host.locator('aside li').count(), { timeout: 20_000 }).toBe(1);
         await row.waitFor();
         await drag(host, row.locator('b'), set.getByRole('button', { name: 'Add an open place' }));
         await set.getByRole('article', { name: new RegExp(`^${title},`) }).waitFor();
