@@ -167,9 +167,3 @@ export const sessionSummarySchema = sessionSchema
   .extend({ tunes: z.number().int(), sets: z.number().int() });
 export type SessionSummary = z.infer<typeof sessionSummarySchema>;
 export const sessionPageSchema = pageOf(sessionSummarySchema);
-
-export const boardVersionSchema = z.object({
-  version: z.number().int(),
-  savedBy: z.string().nullable(),
-  savedAt: z.string(),
-});
