@@ -3,6 +3,7 @@ import type { Compiled } from './compiled';
 import type { Stage } from './stage';
 import type { Steps } from './steps';
 import { SubsetTable, type Milestone } from './subset-table';
+import { TreeBound } from './tree-bound';
 import { TooManyStands, TuningMoves } from './tuning-moves';
 import type { Plan } from './units';
 import type { Weights } from './weights';
@@ -25,10 +26,11 @@ const MOST_MILESTONES = 4;
 
 /**
  * What the first two levels still cost at least, from the tunings alone. A table over all kinds is the best
- * bound; where it had to leave groups out, tables of fewer kinds each stand beside it, whose pegs add up.
+ * bound; where it had to leave groups out, spanning trees over all of them stand beside it, and tables of fewer
+ * kinds each, whose pegs add up.
  */
 export class Bound {
-  private readonly parts: readonly (readonly SubsetTable[])[];
+  private readonly parts: readonly (readonly TuningBound[])[];
   private readonly milestones: readonly Milestone[];
   /** By position: milestones at or after it. */
   private readonly milestonesAhead: Int32Array;
@@ -57,7 +59,8 @@ export class Bound {
       }
     };
     const together = table(everyone, limits.together);
-    const parts: (readonly SubsetTable[])[] = together ? [[together]] : [];
+    const parts: (readonly TuningBound[])[] = together ? [[together]] : [];
+    if (together && !together.complete) parts.push([new TreeBound(together.tunings, plan, steps)]);
     if (everyone.length > 1 && !together?.complete) {
       parts.push(clusters(everyone, (kinds) => table(kinds, limits.apart)));
     }
@@ -131,6 +134,8 @@ export class Bound {
     return made;
   }
 }
+
+type TuningBound = Pick<SubsetTable, 'tunings' | 'bitsOf' | 'toGo'>;
 
 interface Awaited {
   readonly ofClass: Int32Array;

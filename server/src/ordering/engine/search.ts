@@ -18,7 +18,7 @@ export interface SearchSettings {
   readonly lookSteps: number;
   /** Bounds to try in turn, with the steps that the first stage may take under each. */
   readonly bounds: readonly { readonly limits: BoundLimits; readonly share: number }[];
-  /** After a sweep of fewer steps the next may rise in leaps; dearer ones feel their way. */
+  /** Sweeps of fewer steps are cheap: the next may rise further. */
   readonly cheapSweep: number;
 }
 
@@ -143,14 +143,17 @@ export class Search {
   /**
    * Sweeps all states of a stage that can lead to less than the best order known. Where the bound is far from
    * that order, with lower ceilings first: what lies under a ceiling that nothing reaches must be looked at
-   * anyway to prove the best, and each such ceiling raises the bound.
+   * anyway to prove the best, and each such ceiling raises the bound (Korf 1985, iterative deepening).
    *
    * @returns null where nothing at this stage can cost less than the best order
    */
   private deepened(base: Base & Pick<SweepOptions, 'stage' | 'coarse' | 'together'>): Swept | null {
     const { peg, stop } = this.weights;
-    const [small, large] = [Math.min(peg, stop), Math.max(peg, stop)];
-    for (let rise = 4 * small; ;) {
+    const small = Math.min(peg, stop);
+    const large = Math.max(peg, stop);
+    let rise = small;
+    let dearest = this.settings.cheapSweep;
+    for (;;) {
       const best = this.best!.cost;
       if (!isLess(this.least, best)) return null;
       const before = this.steps.taken;
@@ -160,8 +163,13 @@ export class Search {
       if (swept.best === null) {
         this.raise(isLess(swept.nextLeast, under) ? under : swept.nextLeast);
         if (under === best) return null;
-        const cheap = this.steps.taken - before < this.settings.cheapSweep;
-        rise = cheap ? Math.max(large, 1.5 * rise) : 4 * small;
+        // Where a higher ceiling hardly cost more, the next may rise further; else it feels its way, unless the
+        // best order known is so near that most of its levels are reached in a leap or two.
+        const took = this.steps.taken - before;
+        const gap = best.high - this.least.high;
+        rise = took < 1.5 * dearest ? 2 * rise : small;
+        if (gap <= 3 * large) rise = Math.max(rise, gap / 3);
+        dearest = Math.max(dearest, took);
         continue;
       }
       this.raise(swept.best);
