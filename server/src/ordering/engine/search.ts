@@ -12,23 +12,26 @@ import { weightsFor, type Weights } from './weights';
 
 /** How a search goes about its work; every setting leads to the same scores and, given steps, proofs. */
 export interface SearchSettings {
-  /** States kept per position while looking for a good order: before anything is proved, and later. */
-  readonly widths: { readonly first: number; readonly later: number };
   /** About how many steps a look may take. */
   readonly lookSteps: number;
-  /** Bounds to try in turn, with the steps that the first stage may take under each. */
-  readonly bounds: readonly { readonly limits: BoundLimits; readonly share: number }[];
+  /**
+   * Bounds to try in turn, how many states are kept per position while looking for a good order under each, and
+   * the steps that the first stage may then take.
+   */
+  readonly bounds: readonly { readonly limits: BoundLimits; readonly width: number; readonly share: number }[];
+  /** States kept per position while looking at a closer stage. */
+  readonly closerWidth: number;
   /** Sweeps of fewer steps are cheap: the next may rise further. */
   readonly cheapSweep: number;
 }
 
 export const SETTINGS: SearchSettings = {
-  widths: { first: 200, later: 48 },
   lookSteps: 800_000,
   bounds: [
-    { limits: SMALL_BOUND, share: 60_000 },
-    { limits: LARGE_BOUND, share: Infinity },
+    { limits: SMALL_BOUND, width: 32, share: 60_000 },
+    { limits: LARGE_BOUND, width: 200, share: Infinity },
   ],
+  closerWidth: 24,
   cheapSweep: 5_000,
 };
 
@@ -107,7 +110,7 @@ export class Search {
     sweepBack(swept.swept, steps);
     const keys = new Stage(compiled, plan, weights, 'keys', steps);
     const byTunings = { ...swept.base, coarse: swept.swept };
-    this.look({ ...byTunings, stage: keys }, this.settings.widths.later);
+    this.look({ ...byTunings, stage: keys }, this.settings.closerWidth);
     if (this.deepened({ ...byTunings, stage: keys, together: true }) === null) return;
     if (!isLess(this.least, this.best.cost)) return;
 
@@ -116,20 +119,20 @@ export class Search {
     if (coarse === null) return;
     sweepBack(coarse, steps);
     const byKeys = { ...swept.base, coarse };
-    this.look({ ...byKeys, stage: this.all }, this.settings.widths.later);
+    this.look({ ...byKeys, stage: this.all }, this.settings.closerWidth);
     this.deepened({ ...byKeys, stage: this.all, together: true });
   }
 
   /** The first stage, under a bound that is quickly made, and where that leaves too much, a better one. */
   private tuningsSwept(stage: Stage): { readonly swept: Swept; readonly base: Base } | null {
     const { compiled, plan, problem, weights, steps } = this;
-    for (const { limits, share } of this.settings.bounds) {
+    for (const { limits, width, share } of this.settings.bounds) {
       const bound = new Bound(compiled, plan, problem.goal, weights, limits, steps);
       const root = new Int32Array(stage.stride);
       stage.start(root);
       this.raise({ high: bound.toGo(stage, root, 0, 0), low: 0 });
       const base: Base = { bound, steps, keyWeight: weights.key };
-      this.look({ ...base, stage, coarse: null }, this.settings.widths.first);
+      this.look({ ...base, stage, coarse: null }, width);
       try {
         const swept = this.deepened({ ...base, steps: steps.within(share), stage, coarse: null });
         return swept && { swept, base };

@@ -8,8 +8,8 @@ import { solve } from './solve';
 
 /** Hardly any looking ahead, and a bound that sees next to nothing: the sweeps must do it all. */
 const BARE: SearchSettings = {
-  widths: { first: 1, later: 1 },
-  bounds: [{ limits: { joints: 400, together: 1, apart: 1 }, share: Infinity }],
+  closerWidth: 1,
+  bounds: [{ limits: { joints: 400, together: 1, apart: 1 }, width: 1, share: Infinity }],
   lookSteps: 1,
   cheapSweep: 0,
 };

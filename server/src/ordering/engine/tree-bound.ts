@@ -108,7 +108,10 @@ export class TreeBound {
         if (near[bit]! < least) [next, least] = [bit, near[bit]!];
       }
       cost += least;
-      if (degrees) [degrees[next]!++, degrees[from[next]!]!++];
+      if (degrees) {
+        degrees[next]!++;
+        degrees[from[next]!]!++;
+      }
       at = next;
     }
     if (degrees) degrees[last]!++;
