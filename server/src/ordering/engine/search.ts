@@ -18,7 +18,11 @@ export interface SearchSettings {
    * Bounds to try in turn, how many states are kept per position while looking for a good order under each, and
    * the steps that the first stage may then take.
    */
-  readonly bounds: readonly { readonly limits: BoundLimits; readonly width: number; readonly share: number }[];
+  readonly bounds: readonly {
+    readonly limits: BoundLimits;
+    readonly width: number;
+    readonly share: number;
+  }[];
   /** States kept per position while looking at a closer stage. */
   readonly closerWidth: number;
   /** Sweeps of fewer steps are cheap: the next may rise further. */
