@@ -1,58 +1,36 @@
 import type { Session, UpdateSession } from '@pegwell/shared/contract/sessions';
-import { useQuery, useQueryClient } from '@tanstack/react-query';
+import { useQueryClient } from '@tanstack/react-query';
 import { useEffect, useRef } from 'react';
-import { useParams, useSearchParams } from 'react-router-dom';
+import { useSearchParams } from 'react-router-dom';
 import { useMe } from '../features/accounts/hooks/use-me';
 import type { Order } from '../features/ordering/compare';
 import { SuggestionView } from '../features/ordering/components/suggestion-view';
-import { getSession, sessionKey, updateSession } from '../features/sessions/api/session';
+import { sessionKey, updateSession } from '../features/sessions/api/session';
 import { Board } from '../features/sessions/components/board';
 import { useBoard } from '../features/sessions/hooks/use-board';
 import { sentenceOf } from '../lib/problem';
 import { useMedia } from '../lib/use-media';
-import { LinkButton } from '../ui/button';
 import { Moving } from '../ui/moving';
-import { Page } from '../ui/page';
-import { Failing, Loading } from '../ui/states';
 import { useSay } from '../ui/status';
+import { EveningLoaded } from './evening-loaded';
 import { useAssumedFor } from './use-assumed-for';
-
-/** Milliseconds between two looks at what the other hosts do, while the page is seen. */
-const LOOK = 5_000;
 
 /** Milliseconds for which the old order is seen again before its cards travel to the new one. */
 const SETTLE = 600;
 
 /** One evening: built by a host, read by a player. */
 export function BoardPage() {
-  const { sessionId = '' } = useParams();
   const accountId = useMe().data?.user.id;
-  const session = useQuery({
-    queryKey: sessionKey(sessionId),
-    queryFn: ({ signal }) => getSession(sessionId, signal),
-    refetchInterval: LOOK,
-    staleTime: 0,
-  });
   return (
-    <Page>
-      {session.data && accountId ? (
-        <Moving>
-          <Evening key={sessionId} session={session.data} accountId={accountId} />
-        </Moving>
-      ) : session.isError ? (
-        <Failing
-          title="This evening cannot be shown"
-          error={session.error}
-          onRetry={() => void session.refetch()}
-        >
-          <LinkButton to="../evenings" look="outline">
-            To the evenings
-          </LinkButton>
-        </Failing>
-      ) : (
-        <Loading what="the evening" />
-      )}
-    </Page>
+    <EveningLoaded>
+      {(session) =>
+        accountId && (
+          <Moving>
+            <Evening key={session.id} session={session} accountId={accountId} />
+          </Moving>
+        )
+      }
+    </EveningLoaded>
   );
 }
 
