@@ -1,7 +1,9 @@
 // The words of ./docker-free-dev.sh.
+import { createRequire } from 'node:module';
 import { end, endOnSignals, isEnding } from './ending';
 import { say, Sentence } from './sentence';
 import { develop } from './develop';
+import type * as Pictures from './pictures';
 import { reset } from './reset';
 import { start } from './start';
 import { stop } from './stop';
@@ -31,8 +33,7 @@ async function main([word, ...words]: readonly string[]): Promise<number> {
       return test(words);
     case 'pictures':
       endOnSignals({ interrupted: 130, terminated: 143 });
-      // Loaded here alone: a browser's driver has no part in a start.
-      return (await import('./pictures.js')).pictures(words);
+      return picturesOf(words);
     case 'help':
     case '--help':
     case '-h':
@@ -41,6 +42,12 @@ async function main([word, ...words]: readonly string[]): Promise<number> {
     default:
       throw new Sentence(`There is no word "${word}" here. These are:\n${HELP}`);
   }
+}
+
+/** Loaded here alone: a browser's driver has no part in a start. (`import()` does not see TypeScript here.) */
+function picturesOf(words: readonly string[]): Promise<number> {
+  const { pictures } = createRequire(__filename)('./pictures') as typeof Pictures;
+  return pictures(words);
 }
 
 main(process.argv.slice(2)).then(end, (error: unknown) => {
