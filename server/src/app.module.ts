@@ -13,6 +13,7 @@ import { HealthController } from './health/health.controller';
 import { LiveModule } from './live/live.module';
 import { logging } from './logging';
 import { OrderingModule } from './ordering/ordering.module';
+import { RacksModule } from './racks/racks.module';
 import { SessionsModule } from './sessions/sessions.module';
 import { SheetsModule } from './sheets/sheets.module';
 import { TunesModule } from './tunes/tunes.module';
@@ -37,6 +38,7 @@ export class AppModule {
         TunesModule,
         SessionsModule,
         OrderingModule,
+        RacksModule,
         LiveModule,
         SheetsModule,
         DemoModule,

@@ -1,6 +1,7 @@
 import { BUILT_IN_KINDS, builtInKind } from '@pegwell/shared/music/instrument';
 import type { CirclePlay, Play } from '@pegwell/shared/contract/live';
 import type { SessionSuggestion } from '@pegwell/shared/contract/ordering';
+import type { Racks } from '@pegwell/shared/contract/racks';
 import type { Session, SessionSummary } from '@pegwell/shared/contract/sessions';
 import type { Tune } from '@pegwell/shared/contract/tunes';
 import { parseTuning } from '@pegwell/shared/music/tuning';
@@ -125,6 +126,17 @@ describe('the demo circle', () => {
     expect(after.retuneStops).toBeLessThan(before.retuneStops);
     expect(provenLevels).toBeGreaterThanOrEqual(2);
     expect(moved.length).toBeGreaterThan(0);
+  });
+
+  it('has a player with two fiddles, who turns fewer pegs than with one', async () => {
+    const answer = await host.get(`/api/sessions/${coming.id}/racks`).expect(200);
+    const { items } = answer.body as Racks;
+    expect(items.map(({ player, instruments }) => [player, instruments.length])).toEqual([
+      ['Neva Thistlemere', 2],
+    ]);
+    const { plan } = items[0]!;
+    expect(plan!.cost.pegChanges).toBeLessThan(plan!.alone.pegChanges);
+    expect(plan!.cost.stops).toBeLessThan(plan!.alone.stops);
   });
 
   it('remembers an evening that is over: every tune with its times, one after the other, the last one left out', async () => {

@@ -5,6 +5,7 @@ import { AccountsService } from '../accounts/accounts.service';
 import { CirclesService } from '../circles/circles.service';
 import type { Account, Member } from '../common/access';
 import { DATABASE, type RootDatabase } from '../database/database';
+import { RacksService } from '../racks/racks.service';
 import { BoardService } from '../sessions/board.service';
 import { walkOf, type StoredEvening, type Walk } from '../sessions/evening';
 import { EveningsService } from '../sessions/evenings.service';
@@ -12,7 +13,7 @@ import { shown } from '../sessions/present';
 import { SessionsService } from '../sessions/sessions.service';
 import { ImportService } from '../tunes/files/import.service';
 import { DemoRepository } from './demo.repository';
-import { COMING, DEMO_CHAIRS, DEMO_CIRCLE, demoDates, PAST, type DemoEvening } from './evenings';
+import { COMING, DEMO_CHAIRS, DEMO_CIRCLE, demoDates, PAST, TWO_FIDDLES, type DemoEvening } from './evenings';
 import { INVENTED, INVENTED_SOURCE } from './invented-tunes';
 import { DEMO_HOST, DEMO_PASSWORD, DEMO_PEOPLE } from './people';
 import { playedBefore, type DemoPlay } from './played';
@@ -30,6 +31,7 @@ export class DemoService {
     private readonly sessions: SessionsService,
     private readonly board: BoardService,
     private readonly evenings: EveningsService,
+    private readonly racks: RacksService,
     private readonly demo: DemoRepository,
   ) {}
 
@@ -40,7 +42,8 @@ export class DemoService {
     const dates = demoDates(now);
     const past = await this.seedEvening(host, PAST, dates.past, tuneIds);
     await this.playThrough(past.id);
-    await this.seedEvening(host, COMING, dates.coming, tuneIds);
+    const coming = await this.seedEvening(host, COMING, dates.coming, tuneIds);
+    await this.racks.create(coming.id, TWO_FIDDLES);
   }
 
   private async seedCircle(): Promise<Member> {

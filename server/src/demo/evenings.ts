@@ -1,3 +1,4 @@
+import type { CreateRack } from '@pegwell/shared/contract/racks';
 import { DateTime } from 'luxon';
 
 /** An evening as its host wrote it down: tunes by title, set by set. */
@@ -17,6 +18,13 @@ export const DEMO_CHAIRS = [
   { kind: 'fiddle', count: 5 },
   { kind: 'banjo', count: 2 },
 ] as const;
+
+/** What one of them brings to the coming evening; the second is tuned at home to what the plan says. */
+export const TWO_FIDDLES: CreateRack = {
+  player: 'Neva Thistlemere',
+  kind: 'fiddle',
+  instruments: [{ arrives: 'opening' }, { arrives: 'free' }],
+};
 
 /** In the order in which the tunes came to mind: any host would wish for a better one. */
 export const COMING: DemoEvening = {

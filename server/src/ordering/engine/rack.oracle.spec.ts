@@ -167,11 +167,11 @@ function replay(
   for (const [place, { id, offClock, announced }] of tunes.entries()) {
     const here = turns.filter(({ before }) => before === id);
     for (const { instrument, from, to, deltas, pegChanges, semitones } of here) {
-      const again = retune(kind, from, to);
-      if (!same(rack[instrument]!, from) || again.deltas.join() !== deltas.join()) return null;
+      const again = retune(kind, from.pitches, to.pitches);
+      if (!same(rack[instrument]!, from.pitches) || again.deltas.join() !== deltas.join()) return null;
       if (again.pegChanges !== pegChanges || again.semitones !== semitones) return null;
       cost += valueOf({ pegChanges, stops: 0, semitones });
-      rack[instrument] = to;
+      rack[instrument] = to.pitches;
     }
     if (here.length > 0 && !offClock) cost += STOP;
     const { instrument, tuned } = played[place]!;

@@ -26,6 +26,7 @@ function tunesOf(sets: readonly (readonly (string | null)[])[]): RackTune[] {
 }
 
 const pitches = (text: string) => text.split(' ');
+const bare = (text: string) => ({ pitches: pitches(text), capo: 0 });
 
 describe('a rack plan', () => {
   it('is what one works out by hand: a second fiddle saves eight pegs of ten, and all five stops', () => {
@@ -41,7 +42,7 @@ describe('a rack plan', () => {
     expect(played.map(({ instrument }) => instrument)).toEqual([0, 1, 0, 1, 0, 1]);
     expect(turns).toEqual([
       {
-        ...{ before: '0.0', offClock: true, instrument: 1, from: pitches(GDAE), to: pitches(AEAE) },
+        ...{ before: '0.0', needed: '0.1', offClock: true, instrument: 1, from: bare(GDAE), to: bare(AEAE) },
         ...{ deltas: [2, 2, 0, 0], pegChanges: 2, semitones: 4 },
       },
     ]);
@@ -59,8 +60,8 @@ describe('a rack plan', () => {
   it('retunes a resting fiddle in the break, tunes before it is needed', () => {
     const tunes = tunesOf([[GDAE], [ADAE, ADAE, DDAD]]);
     const { cost, turns } = plan({ kind: fiddle, starts: [pitches(ADAE), pitches(GDAE)], tunes });
-    expect(turns.map(({ before, instrument, to }) => [before, instrument, to])).toEqual([
-      ['1.0', 1, pitches(DDAD)],
+    expect(turns.map(({ before, needed, instrument, to }) => [before, needed, instrument, to])).toEqual([
+      ['1.0', '1.2', 1, bare(DDAD)],
     ]);
     expect(cost).toEqual({ pegChanges: 2, stops: 0, semitones: 7 });
   });

@@ -3,6 +3,7 @@ import { read, refused, type Parsed } from '@pegwell/shared/music/parsed';
 import { midiOf } from '@pegwell/shared/music/pitch';
 import { retune, type Retune } from '@pegwell/shared/music/retune';
 import type { Tuned } from '@pegwell/shared/music/tuning';
+import { MOST_INSTRUMENTS } from '@pegwell/shared/session/rack';
 import { cheapestCourse, FREE, type RackAsk, type RackCost, type Serving } from './rack-course';
 
 /** A player with several instruments of one kind, and an evening whose order and tunings are fixed. */
@@ -26,10 +27,13 @@ export interface RackTune {
 export interface RackTurn extends Retune {
   /** Id of the tune after the place. */
   readonly before: string;
+  /** Id of the tune that needs it: the same one, or a later one. */
+  readonly needed: string;
   readonly offClock: boolean;
   readonly instrument: number;
-  readonly from: readonly string[];
-  readonly to: readonly string[];
+  /** With the capo of the last tune on it, and that of the tune that needs it. */
+  readonly from: Tuned;
+  readonly to: Tuned;
 }
 
 export interface RackPlan {
@@ -48,7 +52,6 @@ export interface RackPlan {
   readonly alone: RackCost;
 }
 
-export const MOST_INSTRUMENTS = 4;
 /** Announced ones; what instruments arrive in may come on top. */
 export const MOST_TUNINGS = 14;
 
@@ -80,10 +83,14 @@ export function planRack({ kind, starts, tunes }: RackProblem): Parsed<RackPlan>
   const { bring, players, retunes } = partsOf(asks, arrive, servings, tunes);
   const turns = retunes
     .sort((a, b) => a.place - b.place || a.instrument - b.instrument)
-    .map(({ place, instrument, from, to }): RackTurn => {
-      const [was, is] = [tunings.pitches[from]!, tunings.pitches[to]!];
+    .map(({ place, needed, instrument, from, to, capo }): RackTurn => {
       const { id: before, offClock } = tunes[place]!;
-      return { before, offClock, instrument, from: was, to: is, ...moves[from * table.tunings + to]! };
+      return {
+        ...{ before, needed: tunes[needed]!.id, offClock, instrument },
+        from: { pitches: tunings.pitches[from]!, capo },
+        to: { pitches: tunings.pitches[to]!, capo: tunes[needed]!.announced!.capo },
+        ...moves[from * table.tunings + to]!,
+      };
     });
   const brought = bring.map((tuning) => (tuning === FREE ? null : tunings.pitches[tuning]!));
   return read({ bring: brought, tunes: walk(tunes, players, brought, turns), turns, cost, alone });
@@ -119,10 +126,14 @@ function asksOf(tunes: readonly RackTune[], tunings: Tunings): readonly PlacedAs
 }
 
 interface PlacedRetune {
+  /** Indexes of the tune after the place, and of the one that needs it. */
   readonly place: number;
+  readonly needed: number;
   readonly instrument: number;
   readonly from: number;
   readonly to: number;
+  /** On it before. */
+  readonly capo: number;
 }
 
 /** Gives the servings to instruments with a name, and each retune a place. */
@@ -138,7 +149,7 @@ function partsOf(
   readonly players: ReadonlyMap<number, number>;
   readonly retunes: PlacedRetune[];
 } {
-  const instruments = arrive.map((tuning) => ({ tuning, ready: true, last: -1 }));
+  const instruments = arrive.map((tuning) => ({ tuning, ready: true, last: -1, capo: 0 }));
   const bring = [...arrive];
   const players = new Map<number, number>();
   const retunes: PlacedRetune[] = [];
@@ -159,11 +170,12 @@ function partsOf(
         stops.add(at);
         for (const each of instruments) each.ready = true;
       }
-      retunes.push({ place: at, instrument: held, from, to: tuning });
+      retunes.push({ place: at, needed: place, instrument: held, from, to: tuning, capo: one.capo });
     }
     one.tuning = tuning;
     one.ready = false;
     one.last = place;
+    one.capo = tunes[place]!.announced!.capo;
     players.set(place, held);
   });
   return { bring, players, retunes };
@@ -188,15 +200,14 @@ function walk(
   bring: RackPlan['bring'],
   turns: readonly RackTurn[],
 ): RackPlan['tunes'] {
-  const pitches = [...bring];
-  const capos = bring.map(() => 0);
+  const stands = bring.map((pitches): Tuned | null => pitches && { pitches, capo: 0 });
   let held = [...players.values()][0] ?? 0;
   return tunes.map(({ id, announced }, place) => {
-    for (const { instrument, to } of turns.filter(({ before }) => before === id)) pitches[instrument] = to;
+    for (const { instrument, to } of turns.filter(({ before }) => before === id)) stands[instrument] = to;
     held = players.get(place) ?? held;
-    capos[held] = announced?.capo ?? capos[held]!;
-    const stands = pitches[held] ?? null;
-    return { id, instrument: held, tuned: announced ?? (stands && { pitches: stands, capo: capos[held]! }) };
+    const tuned = announced ?? stands[held] ?? null;
+    stands[held] = tuned;
+    return { id, instrument: held, tuned };
   });
 }
 
