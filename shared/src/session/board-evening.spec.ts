@@ -4,7 +4,7 @@ import { builtInKind } from '../music/instrument';
 import { parseAccepted } from '../music/tuning';
 import type { Board } from './board';
 import { eveningOfBoard, tuneOfEntry, type EveningSettings } from './board-evening';
-import { priceOf } from './board-price';
+import { Insertions } from './insert';
 import { scoreEvening } from './score';
 
 function entry(id: string, cells: Record<string, string>, more: Partial<ShownEntry> = {}): ShownEntry {
@@ -88,32 +88,27 @@ describe('the evening that a board is', () => {
 describe('the price of one more tune', () => {
   const evening = eveningOfBoard(settings(5), board(['GDAE', 'GDAE'], ['AEAE', 'AEAE']));
   const tune = (fiddle: string) => tuneOfEntry(entry('new', { fiddle }));
+  const priceOf = (fiddle: string, fixed = 0) => new Insertions(evening, fixed).cheapest(tune(fiddle));
 
   it('is nothing beside a tune in the same tuning, at the last such place', () => {
-    expect(priceOf(evening, tune('AEAE'))).toEqual({ pegChanges: 0, setIndex: 1, index: 2 });
+    expect(priceOf('AEAE')).toMatchObject({ pegChanges: 0, setIndex: 1, index: 2 });
     // After 2; before 1 is free as well.
-    expect(priceOf(evening, tune('GDAE'))).toEqual({ pegChanges: 0, setIndex: 0, index: 2 });
+    expect(priceOf('GDAE')).toMatchObject({ pegChanges: 0, setIndex: 0, index: 2 });
   });
 
   it('is nothing between two tunings that it lies between', () => {
     // The break turns G and D; in ADAE the G goes first. At the head of the second set it costs a stop.
-    expect(priceOf(evening, tune('ADAE'))).toMatchObject({ pegChanges: 0 });
+    expect(priceOf('ADAE')).toMatchObject({ pegChanges: 0 });
   });
 
   it('is pegChanges with it less without it', () => {
     // EDAE at either end of the break: the G peg goes down to it and from there up to A, where it turns anyway.
-    expect(priceOf(evening, tune('EDAE'))).toEqual({ pegChanges: 5, setIndex: 1, index: 0 });
+    expect(priceOf('EDAE')).toMatchObject({ pegChanges: 5, setIndex: 1, index: 0 });
     // GDGD after 2: two pegs down, and in the break four in place of two.
-    expect(priceOf(evening, tune('GDGD'))?.pegChanges).toBe(20);
+    expect(priceOf('GDGD')?.pegChanges).toBe(20);
   });
 
   it('leaves what is now at its place', () => {
-    const price = priceOf(evening, tune('GDAE'), 2);
-    expect(price).toEqual({ pegChanges: 0, setIndex: 0, index: 2 });
-  });
-
-  it('is what is turned on arriving where there is no set yet', () => {
-    const empty = eveningOfBoard(settings(5), board());
-    expect(priceOf(empty, tune('AEAE'))).toEqual({ pegChanges: 10, setIndex: 0, index: 0 });
+    expect(priceOf('GDAE', 2)).toMatchObject({ pegChanges: 0, setIndex: 0, index: 2 });
   });
 });

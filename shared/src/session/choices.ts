@@ -1,6 +1,6 @@
 import { choiceBounds, type ChoiceBounds } from './choice-bounds';
 import type { KindPaths, Step } from './kind-paths';
-import type { Level } from './levels';
+import { compareLevels, type Level } from './levels';
 import type { OrderPlace } from './running-order';
 
 /**
@@ -100,7 +100,7 @@ class ChoiceSearch {
       }
     }
     let best = layer[0]!;
-    for (const half of layer) if (compareLists(half.cost, best.cost) < 0) best = half;
+    for (const half of layer) if (compareLevels(half.cost, best.cost) < 0) best = half;
     return best;
   }
 
@@ -121,7 +121,7 @@ class ChoiceSearch {
         const after = last ? { ...made, turned: false, broken: false } : made;
         const key = keyOf(after);
         const rival = known.get(key);
-        if (rival !== undefined && compareLists(rival.cost, after.cost) <= 0) continue;
+        if (rival !== undefined && compareLevels(rival.cost, after.cost) <= 0) continue;
         // Taken out first, so that the map keeps its halves in lexicographic order.
         known.delete(key);
         known.set(key, after);
@@ -168,13 +168,13 @@ class ChoiceSearch {
   }
 
   private cannotReach(half: Half, place: number, kind: number, atMost: readonly number[]): boolean {
-    return compareLists(this.leastCost(half, place, kind), atMost) > 0;
+    return compareLevels(this.leastCost(half, place, kind), atMost) > 0;
   }
 
   /** The most promising halves, still in lexicographic order. */
   private narrowed(layer: readonly Half[], place: number, kind: number, width: number): readonly Half[] {
     const ranked = layer.map((half, index) => ({ index, least: this.leastCost(half, place, kind) }));
-    ranked.sort((a, b) => compareLists(a.least, b.least) || a.index - b.index);
+    ranked.sort((a, b) => compareLevels(a.least, b.least) || a.index - b.index);
     const kept = ranked.slice(0, width).sort((a, b) => a.index - b.index);
     return kept.map(({ index }) => layer[index]!);
   }
@@ -192,10 +192,3 @@ class ChoiceSearch {
 
 const keyOf = (half: Half): string =>
   String.fromCharCode(...half.stands, half.turned ? 1 : 0, half.broken ? 1 : 0);
-
-function compareLists(a: readonly number[], b: readonly number[]): number {
-  for (let index = 0; index < a.length; index++) {
-    if (a[index] !== b[index]) return a[index]! - b[index]!;
-  }
-  return 0;
-}

@@ -26,3 +26,11 @@ export function compareScores(a: Score, b: Score, goal: Goal): number {
   }
   return 0;
 }
+
+/** The same for figures in the order of the levels. */
+export function compareLevels(a: readonly number[], b: readonly number[]): number {
+  for (let level = 0; level < a.length; level++) {
+    if (a[level] !== b[level]) return a[level]! - b[level]!;
+  }
+  return 0;
+}

@@ -19,33 +19,53 @@ export interface OrderPlace {
  */
 export function placesOf(evening: Evening): readonly OrderPlace[] {
   const tunes = new Map(evening.tunes.map((tune) => [tune.id, tune]));
-  const follows = medleyFollowers(evening.medleys);
-  const isSpaced = spacedIn(evening.spacedRhythms);
+  const placeOf = placing(evening);
   const places: OrderPlace[] = [];
   let before: EveningTune | null = null;
   for (const set of evening.sets) {
-    set.forEach((id, index) => {
+    for (const [index, id] of set.entries()) {
       const tune = tunes.get(id);
       if (tune === undefined) throw new RangeError(`No tune has the id ${id}`);
-      const offClock = index === 0;
-      const inMedley = before !== null && (follows.get(before.id)?.has(id) ?? false);
-      places.push({
-        tune,
-        offClock,
-        inMedley,
-        spacedPair: !offClock && before !== null && isSpaced(before) && isSpaced(tune),
-        keyChange: !offClock && !inMedley && before !== null && before.tonic !== tune.tonic,
-      });
+      places.push(placeOf(before, tune, index === 0));
       before = tune;
-    });
+    }
   }
   return places;
+}
+
+/** Reckons the place between two tunes; the first tune of an evening has none before it. */
+export function placing({
+  medleys,
+  spacedRhythms,
+}: Pick<Evening, 'medleys' | 'spacedRhythms'>): (
+  before: EveningTune | null,
+  tune: EveningTune,
+  offClock: boolean,
+) => OrderPlace {
+  const follows = medleyFollowers(medleys);
+  const isSpaced = spacedIn(spacedRhythms);
+  return (before, tune, offClock) => {
+    const inMedley = before !== null && (follows.get(before.id)?.has(tune.id) ?? false);
+    return {
+      tune,
+      offClock,
+      inMedley,
+      spacedPair: !offClock && before !== null && isSpaced(before) && isSpaced(tune),
+      keyChange: !offClock && !inMedley && before !== null && before.tonic !== tune.tonic,
+    };
+  };
 }
 
 /** Whether a tune's rhythm is one of those to keep apart; compared without case. */
 export function spacedIn(rhythms: readonly string[]): (tune: EveningTune) => boolean {
   const spaced = new Set(rhythms.map((rhythm) => rhythm.trim().toLowerCase()));
-  return ({ rhythm }) => rhythm !== null && spaced.has(rhythm.trim().toLowerCase());
+  const known = new Map<string, boolean>();
+  return ({ rhythm }) => {
+    if (rhythm === null) return false;
+    let isSpaced = known.get(rhythm);
+    if (isSpaced === undefined) known.set(rhythm, (isSpaced = spaced.has(rhythm.trim().toLowerCase())));
+    return isSpaced;
+  };
 }
 
 function medleyFollowers(medleys: Evening['medleys']): ReadonlyMap<string, ReadonlySet<string>> {

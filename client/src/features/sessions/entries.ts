@@ -3,6 +3,8 @@ import type { ShownTuning, Tune } from '@pegwell/shared/contract/tunes';
 import { BUILT_IN_KINDS, builtInKind } from '@pegwell/shared/music/instrument';
 import type { Mode } from '@pegwell/shared/music/mode';
 import { parseAccepted, showTuning } from '@pegwell/shared/music/tuning';
+import { tuneOfEntry } from '@pegwell/shared/session/board-evening';
+import type { EveningTune } from '@pegwell/shared/session/evening';
 import { ASSUMED_TUNE_MINUTES } from '@pegwell/shared/session/minutes';
 import { readKindTunings } from '@pegwell/shared/tunes/kind-tunings';
 
@@ -28,6 +30,11 @@ export function entryOfTune(tune: Tune, id: string): ShownEntry {
       ...tune.assumed.map((row) => ({ ...row, assumed: true })),
     ],
   };
+}
+
+/** A tune as the score sees it, before it stands on the board. */
+export function eveningTuneOf(tune: Tune): EveningTune {
+  return tuneOfEntry(entryOfTune(tune, `new ${tune.id}`));
 }
 
 /** An open place as it will stand on the board: what is said, then what is usual in its key. */

@@ -4,14 +4,14 @@ import { eveningMinutes } from '@pegwell/shared/session/minutes';
 import { Link } from 'react-router-dom';
 import { count, lengthOf, listOf, momentOf } from '../../../lib/format';
 import { ActionMenu, type ActionItem } from '../../../ui/action-menu';
-import { Button } from '../../../ui/button';
+import { Button, LinkButton } from '../../../ui/button';
 import { PageHeading } from '../../../ui/page';
 import { sheetUrl } from '../api/session';
 import { chairWords } from '../changing-kinds';
 import type { BoardInHand } from '../hooks/use-board';
 import type { ScoredBoard } from '../hooks/use-scored';
 import { Figures, otherFigures } from './figures';
-import { GoalSwitch } from './goal-switch';
+import { GoalSwitch } from '../../../music/goal-switch';
 import { SaveState } from './save-state';
 import styles from './board-head.module.css';
 
@@ -101,6 +101,9 @@ export function BoardHead(props: BoardHeadProps) {
           <Button look="quiet" onClick={props.onFollow}>
             Follow code
           </Button>
+          <LinkButton look="quiet" to="racks">
+            Instruments
+          </LinkButton>
           {mayChange ? (
             <Link className={styles.run} to="live">
               {live ? 'Run the evening: on now' : 'Run the evening'}

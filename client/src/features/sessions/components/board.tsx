@@ -4,7 +4,7 @@ import type { Tune } from '@pegwell/shared/contract/tunes';
 import { spotAt, standingOf } from '@pegwell/shared/session/board';
 import { DEFERENCE } from '@pegwell/shared/music/caution';
 import type { BoardOperation } from '@pegwell/shared/session/board-operations';
-import { priceOf } from '@pegwell/shared/session/board-price';
+import { Insertions } from '@pegwell/shared/session/insert';
 import { LayoutGroup } from 'framer-motion';
 import { useCallback, useMemo, useState } from 'react';
 import { newId } from '../../../lib/new-id';
@@ -13,11 +13,10 @@ import { Button } from '../../../ui/button';
 import { useSay } from '../../../ui/status';
 import { cardMenu } from '../card-menu';
 import { partKinds } from '../changing-kinds';
-import { entryOfTune, type AssumedFor } from '../entries';
+import { entryOfTune, eveningTuneOf, type AssumedFor } from '../entries';
 import { focusMenuOf } from '../focus';
 import type { BoardInHand } from '../hooks/use-board';
 import { useBoardDrag } from '../hooks/use-board-drag';
-import { eveningTuneOf } from '../hooks/use-prices';
 import { useScored } from '../hooks/use-scored';
 import { useUndoKeys } from '../hooks/use-undo-keys';
 import { placeWords, spotOfPrice } from '../price-words';
@@ -85,8 +84,7 @@ export function Board({ held, mayChange, assumedFor, onSuggest, onGoal, onUpdate
 
   const add = (tune: Tune) => {
     const entry = entryOfTune(tune, newId());
-    const fixed = nowId === null ? 0 : 1;
-    const price = priceOf(scored.evening, eveningTuneOf(tune), fixed);
+    const price = new Insertions(scored.evening, nowId === null ? 0 : 1).cheapest(eveningTuneOf(tune));
     const spot = price && spotOfPrice(board, price, nowId);
     const first = newId();
     const operations: BoardOperation<ShownEntry>[] = spot
@@ -108,9 +106,8 @@ export function Board({ held, mayChange, assumedFor, onSuggest, onGoal, onUpdate
 
   const finder = (draggable: boolean) => (
     <Finder
-      circleId={session.circleId}
-      scored={scored}
-      fixed={nowId === null ? 0 : 1}
+      session={session}
+      evening={scored.evening}
       board={board}
       nowEntryId={nowId}
       kinds={kinds}

@@ -2,16 +2,18 @@ import { useDraggable } from '@dnd-kit/core';
 import type { ShownEntry } from '@pegwell/shared/contract/sessions';
 import type { Tune } from '@pegwell/shared/contract/tunes';
 import { entriesOf, type Board } from '@pegwell/shared/session/board';
-import type { Price } from '@pegwell/shared/session/board-price';
+import type { Insertions } from '@pegwell/shared/session/insert';
+import { useMemo } from 'react';
 import { keyWords } from '../../../music/key-words';
 import { TuningText } from '../../../pictures/tuning-text';
+import { eveningTuneOf } from '../entries';
 import { priceWords } from '../price-words';
 import styles from './finder.module.css';
 
 export interface FinderRowProps {
   readonly tune: Tune;
-  /** Undefined until it is known, null where there is no place. */
-  readonly price: Price | null | undefined;
+  /** What one more tune costs on this board. */
+  readonly insertions: Insertions;
   readonly board: Board<ShownEntry>;
   readonly nowEntryId: string | null;
   readonly kinds: readonly string[];
@@ -20,13 +22,14 @@ export interface FinderRowProps {
   readonly draggable: boolean;
 }
 
-export function FinderRow({ tune, price, board, nowEntryId, kinds, onAdd, draggable }: FinderRowProps) {
+export function FinderRow({ tune, insertions, board, nowEntryId, kinds, onAdd, draggable }: FinderRowProps) {
   const { setNodeRef, listeners, isDragging } = useDraggable({
     id: `tune ${tune.id}`,
     data: { tune },
     disabled: !draggable,
   });
   const { onMouseDown, onTouchStart } = listeners ?? {};
+  const price = useMemo(() => insertions.cheapest(eveningTuneOf(tune)), [insertions, tune]);
   const isHere = entriesOf(board).some(({ tuneId }) => tuneId === tune.id);
   const words = price ? priceWords(board, price, nowEntryId) : '';
   const tuning = mainTuning(tune, kinds);

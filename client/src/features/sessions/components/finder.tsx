@@ -1,31 +1,31 @@
+import type { Session } from '@pegwell/shared/contract/sessions';
 import type { Tune } from '@pegwell/shared/contract/tunes';
+import type { Evening } from '@pegwell/shared/session/evening';
+import { Insertions } from '@pegwell/shared/session/insert';
 import { useInfiniteQuery } from '@tanstack/react-query';
-import { useMemo, useRef, useState } from 'react';
+import { useDeferredValue, useMemo, useRef, useState } from 'react';
 import { ProblemError } from '../../../lib/problem';
 import { useDebounced } from '../../../lib/use-debounced';
 import { Button } from '../../../ui/button';
 import { TextField } from '../../../ui/fields';
 import { Failing, Loading } from '../../../ui/states';
 import { FINDER_PAGE, findTunes, finderKey } from '../api/finder-tunes';
-import { usePrices } from '../hooks/use-prices';
-import type { ScoredBoard } from '../hooks/use-scored';
 import { FinderFilters, type FinderFilter } from './finder-filters';
 import { FinderRow, type FinderRowProps } from './finder-row';
 import styles from './finder.module.css';
 
 interface FinderProps extends Pick<FinderRowProps, 'board' | 'nowEntryId' | 'onAdd' | 'draggable'> {
-  readonly circleId: string;
-  /** The board as it stands; prices are what one more tune adds to it. */
-  readonly scored: ScoredBoard;
-  /** How many tunes at the head of the scored evening keep their place. */
-  readonly fixed: number;
+  readonly session: Session;
+  /** What the board is as it stands; prices are what one more tune adds to it. */
+  readonly evening: Evening;
   readonly kinds: readonly string[];
 }
 
 const NO_FILTER: FinderFilter = { key: '', kind: 'fiddle', tuning: '' };
 
 /** The circle's tunes, each with what it would cost at its cheapest place. */
-export function Finder({ circleId, scored, fixed, kinds, ...row }: FinderProps) {
+export function Finder({ session, evening, board, nowEntryId, kinds, ...row }: FinderProps) {
+  const { circleId } = session;
   const [search, setSearch] = useState('');
   const [filter, setFilter] = useState<FinderFilter>({ ...NO_FILTER, kind: kinds[0] ?? 'fiddle' });
   const asked = {
@@ -44,7 +44,14 @@ export function Finder({ circleId, scored, fixed, kinds, ...row }: FinderProps) 
     () => found.data?.pages.flatMap(({ items }) => items) ?? [],
     [found.data],
   );
-  const prices = usePrices(scored, tunes, fixed);
+  // A card that moves is not held up by prices: rows follow the board when there is time.
+  const stands = useDeferredValue(
+    useMemo(() => ({ evening, board, nowEntryId }), [evening, board, nowEntryId]),
+  );
+  const insertions = useMemo(
+    () => new Insertions(stands.evening, stands.nowEntryId === null ? 0 : 1),
+    [stands],
+  );
   const total = found.data?.pages[0]?.total ?? 0;
   const list = useRef<HTMLOListElement>(null);
   const refused = tuningProblem(found.error);
@@ -85,7 +92,15 @@ export function Finder({ circleId, scored, fixed, kinds, ...row }: FinderProps) 
       ) : null}
       <ol className={styles.list} ref={list}>
         {tunes.map((tune) => (
-          <FinderRow key={tune.id} tune={tune} price={prices.get(tune.id)} kinds={kinds} {...row} />
+          <FinderRow
+            key={tune.id}
+            tune={tune}
+            insertions={insertions}
+            board={stands.board}
+            nowEntryId={stands.nowEntryId}
+            kinds={kinds}
+            {...row}
+          />
         ))}
       </ol>
       {found.hasNextPage ? (
