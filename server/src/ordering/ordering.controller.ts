@@ -3,7 +3,14 @@ import { ApiResponse, ApiTags } from '@nestjs/swagger';
 import type { ScoreAnswer, SessionSuggestion, SuggestAnswer } from '@pegwell/shared/contract/ordering';
 import type { Session } from '@pegwell/shared/contract/sessions';
 import type { Response } from 'express';
-import { AsMember, ForAccounts, ForSessionMembers, type Member } from '../common/access';
+import {
+  AsMember,
+  Caller,
+  ForAccounts,
+  ForSessionMembers,
+  type Account,
+  type Member,
+} from '../common/access';
 import { SessionDto } from '../sessions/sessions.dto';
 import {
   AcceptSuggestionDto,
@@ -34,10 +41,11 @@ export class OrderingController {
   @ForAccounts()
   @ApiResponse({ status: 200, type: SuggestAnswerDto.Output })
   suggest(
+    @Caller() account: Account,
     @Body() body: SuggestRequestDto,
     @Res({ passthrough: true }) response: Response,
   ): Promise<SuggestAnswer> {
-    return this.ordering.suggest(body, goneAway(response));
+    return this.ordering.suggest(account, body, goneAway(response));
   }
 
   @Post('sessions/:id/suggestion')

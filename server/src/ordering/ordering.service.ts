@@ -10,7 +10,7 @@ import type {
 } from '@pegwell/shared/contract/ordering';
 import type { Session } from '@pegwell/shared/contract/sessions';
 import { scoreEvening } from '@pegwell/shared/session/score';
-import type { Member } from '../common/access';
+import type { Account, Member } from '../common/access';
 import { cannotBe, notFound, ProblemException } from '../common/problem';
 import { DATABASE, type RootDatabase } from '../database/database';
 import { BoardService } from '../sessions/board.service';
@@ -19,7 +19,7 @@ import { EveningsService } from '../sessions/evenings.service';
 import { clashSentence } from './clash-words';
 import type { OrderingProblem, Solution } from './engine/ordering-problem';
 import { problemOf } from './session-problem';
-import { Solver } from './solver/solver';
+import { Solver, type SolveOptions } from './solver/solver';
 import { presentPlaces, readEvening } from './stateless';
 
 /** Milliseconds after which the best so far is answered; the search's own budget of steps ends it before. */
@@ -38,7 +38,7 @@ export class OrderingService {
     return presentPlaces(scoreEvening(readEvening(body)));
   }
 
-  async suggest(body: SuggestRequest, signal: AbortSignal): Promise<SuggestAnswer> {
+  async suggest(account: Account, body: SuggestRequest, signal: AbortSignal): Promise<SuggestAnswer> {
     const evening = readEvening(body);
     const pins = body.pins ?? {};
     const unknown = Object.keys(pins).filter((id) => !body.tunes.some((tune) => tune.id === id));
@@ -46,7 +46,8 @@ export class OrderingService {
       throw cannotBe(unknown.map((id) => ({ path: `pins.${id}`, message: `No tune has the label ${id}.` })));
     }
     const problem = { ...evening, pins, befores: body.befores ?? [] };
-    const { solution, millis } = await this.solve(problem, signal, body.limitMs ?? LIMIT_MS, (id) => id);
+    const options = { asker: account.id, signal, limitMs: body.limitMs ?? LIMIT_MS };
+    const { solution, millis } = await this.solve(problem, options, (id) => id);
     return {
       score: solution.score,
       sets: solution.sets.map((set) => [...set]),
@@ -68,7 +69,8 @@ export class OrderingService {
     const titles = new Map(
       stored.entries.map(({ id, title }, index) => [id, title ?? `number ${index + 1}`]),
     );
-    const { solution, millis } = await this.solve(problem, signal, LIMIT_MS, (id) => titles.get(id) ?? id);
+    const options = { asker: member.account.id, signal, limitMs: LIMIT_MS };
+    const { solution, millis } = await this.solve(problem, options, (id) => titles.get(id) ?? id);
     const sets = restore(solution.sets);
     const after = sets.flat();
     return {
@@ -89,12 +91,11 @@ export class OrderingService {
 
   private async solve(
     problem: OrderingProblem,
-    signal: AbortSignal,
-    limitMs: number,
+    options: SolveOptions,
     nameOf: (id: string) => string,
   ): Promise<{ solution: Solution; millis: number }> {
     const begun = performance.now();
-    const answer = await this.solver.solve(problem, { signal, limitMs });
+    const answer = await this.solver.solve(problem, options);
     const millis = Math.round((performance.now() - begun) * 10) / 10;
     if (answer.outcome === 'solution') return { solution: answer, millis };
     if (answer.outcome === 'undecided') throw new ProblemException('undecided');

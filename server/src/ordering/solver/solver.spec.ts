@@ -24,6 +24,23 @@ describe('the solving thread', () => {
     expect(ticks).toBeGreaterThan(2);
   });
 
+  it('lets askers take turns, however many one of them sent', async () => {
+    const answered: string[] = [];
+    const ask = async (asker: string, round: number): Promise<void> => {
+      await solver.solve(warmEvening(round), { asker });
+      answered.push(asker);
+    };
+    await Promise.all([
+      ...[0, 1, 2, 3, 4, 5].map((round) => ask('many', round)),
+      ask('one', 6),
+      ask('two', 7),
+    ]);
+    // The first of many was being solved when the others came; the second was in the line before them.
+    expect(answered.indexOf('one')).toBeLessThanOrEqual(2);
+    expect(answered.indexOf('two')).toBeLessThanOrEqual(3);
+    expect(answered.filter((asker) => asker === 'many')).toHaveLength(6);
+  });
+
   it('gives the best so far when time is up, never worse than the host order', async () => {
     const problem = warmEvening(2);
     const answer = await solver.solve({ ...problem, pins: {} }, { limitMs: 0 });

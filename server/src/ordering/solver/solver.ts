@@ -1,9 +1,12 @@
 import { join } from 'node:path';
 import { Piscina } from 'piscina';
 import type { Answer, OrderingProblem } from '../engine/ordering-problem';
+import { FairQueue, type Asked } from './fair-queue';
 import type { SolveTask } from './solve-worker';
 
 export interface SolveOptions {
+  /** Whoever asks: askers take turns. */
+  readonly asker?: string;
   /** An asker that goes away calls its search off. */
   readonly signal?: AbortSignal;
   /** Milliseconds of solving (waiting for a turn not counted) after which the best so far comes back. */
@@ -16,7 +19,7 @@ const WORKER = join(__dirname, WRITTEN ? 'solve-worker.ts' : 'solve-worker.js');
 
 /**
  * Solves orders in a thread of its own, so that phones keep their answer times while hosts ask. One thread,
- * kept warm; others wait their turn in the order in which they came.
+ * kept warm; others wait for their turn.
  */
 export class Solver {
   private started: Piscina<SolveTask, Answer> | null = null;
@@ -30,7 +33,8 @@ export class Solver {
    * @returns the engine's answer; see engine/ordering-problem.ts
    * @throws the signal's reason where it was aborted, before or meanwhile
    */
-  async solve(problem: OrderingProblem, { signal, limitMs }: SolveOptions = {}): Promise<Answer> {
+  async solve(problem: OrderingProblem, options: SolveOptions = {}): Promise<Answer> {
+    const { asker = '', signal, limitMs } = options;
     signal?.throwIfAborted();
     const called = new Int32Array(new SharedArrayBuffer(4));
     // The thread is asked to stop, not killed: a killed one would have to be warmed again for the next host.
@@ -38,7 +42,13 @@ export class Solver {
     signal?.addEventListener('abort', callOff, { once: true });
     try {
       this.started ??= pool();
-      const answer = await this.started.run({ problem: plain(problem), limitMs: limitMs ?? null, called });
+      const task: SolveTask & Asked = {
+        problem: plain(problem),
+        limitMs: limitMs ?? null,
+        called,
+        [Piscina.queueOptionsSymbol]: { asker },
+      };
+      const answer = await this.started.run(task);
       signal?.throwIfAborted();
       return answer;
     } finally {
@@ -69,6 +79,9 @@ function pool(): Piscina<SolveTask, Answer> {
     minThreads: 1,
     maxThreads: 1,
     idleTimeout: Infinity,
+    taskQueue: new FairQueue(),
+    // Without it a task that finds the thread busy goes to the end of the line.
+    stricterFIFO: true,
     execArgv: WRITTEN ? ['--import', 'tsx', '--conditions', 'pegwell-source'] : [],
   });
 }
