@@ -1,6 +1,8 @@
 import type { SessionSuggestion } from '@pegwell/shared/contract/ordering';
 import type { PutBoard, Session, ShownEntry } from '@pegwell/shared/contract/sessions';
 import type { Tune } from '@pegwell/shared/contract/tunes';
+import { builtInKind } from '@pegwell/shared/music/instrument';
+import { parseTuning } from '@pegwell/shared/music/tuning';
 import { screen, waitFor, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { beforeEach, describe, expect, it, vi } from 'vitest';
@@ -18,6 +20,12 @@ const BEST = [
   [uuid(1), uuid(3), uuid(4)],
   [uuid(2), uuid(5)],
 ];
+
+function pitchesOf(name: string): string[] {
+  const tuned = parseTuning(builtInKind('fiddle')!, name);
+  if (!tuned.ok) throw new Error(tuned.reason);
+  return [...tuned.value.pitches];
+}
 
 const CIRCLE = uuid(901);
 const greyOwl: Tune = {
@@ -102,6 +110,32 @@ describe('the board', { timeout: 60_000 }, () => {
     await waitFor(() => expect(stored()[1]).toEqual(['Frosty Lock Gate', 'June Apple', 'Grey Owl']), {
       timeout: 5_000,
     });
+  });
+
+  it('lists the cheapest tunes first when asked to, priced for the board in hand', async () => {
+    const tune = (number: number, title: string, fiddle: string): Tune => ({
+      ...greyOwl,
+      ...{ id: uuid(number), title },
+      tunings: [{ kind: 'fiddle', accepted: [{ tuning: fiddle, pitches: pitchesOf(fiddle), capo: 0 }] }],
+    });
+    const [dear, cheap] = [tune(72, 'Bonaparte', 'DDAD'), tune(73, 'Rye Straw', 'AEAE')];
+    mockApi(
+      site({
+        [`GET /api/circles/${CIRCLE}/tunes`]: ok({ items: [dear, cheap], total: 2, page: 1, pageSize: 30 }),
+        [`GET /api/sessions/${server.session.id}/prices`]: (_, url) => {
+          expect(url.searchParams.get('pageSize')).toBe('30');
+          const items = [cheap, dear].map((each) => ({ tune: each, price: null }));
+          return { status: 200, body: { items, total: 2, page: 1, pageSize: 30, version: 1, goal: 'pegs' } };
+        },
+      }),
+    );
+    open();
+    const rows = () => screen.getAllByRole('button', { name: /^Add .* (after|before)/ });
+    const names = () => rows().map((row) => row.getAttribute('aria-label'));
+    await screen.findByRole('button', { name: /^Add Bonaparte, \d+ pegs/ }, { timeout: 30_000 });
+    expect(names()[0]).toMatch(/^Add Bonaparte/);
+    await userEvent.click(screen.getByRole('radio', { name: 'Cheapest first' }));
+    await waitFor(() => expect(names()[0]).toBe('Add Rye Straw, free, after 5'));
   });
 
   it('takes a tune out by menu and puts it back by Ctrl-Z', async () => {

@@ -53,7 +53,7 @@ export class UsualTuningsService {
   /** The circle's own rows first (key and family, then the default), then the built-in table. */
   async lookup(db: Database, circleId: string): Promise<UsualLookup> {
     const rows = await this.circles.usualTunings(db, circleId);
-    return (kindId, key, mode) => {
+    return remembered((kindId, key, mode) => {
       const tonic = parseTonic(key)?.pitchClass;
       const family = modeFamily(mode);
       const own =
@@ -61,8 +61,19 @@ export class UsualTuningsService {
         rows.find((row) => row.kind === kindId && row.key === null);
       if (own) return own.pitches === null ? 'any' : { pitches: own.pitches, capo: own.capo };
       return tonic === undefined ? 'any' : builtInUsual(kindId, tonic, mode);
-    };
+    });
   }
+}
+
+/** A library asks for the same few keys thousands of times. */
+function remembered(lookup: UsualLookup): UsualLookup {
+  const known = new Map<string, Tuned | 'any'>();
+  return (kindId, key, mode) => {
+    const question = `${kindId} ${key} ${mode}`;
+    let answer = known.get(question);
+    if (answer === undefined) known.set(question, (answer = lookup(kindId, key, mode)));
+    return answer;
+  };
 }
 
 function pitchClassOf(key: string | null): number | undefined {

@@ -1,14 +1,17 @@
 import { Inject, Module, type OnApplicationBootstrap } from '@nestjs/common';
 import { ENV, type Env } from '../env';
 import { SessionsModule } from '../sessions/sessions.module';
+import { TunesModule } from '../tunes/tunes.module';
 import { OrderingController } from './ordering.controller';
 import { OrderingService } from './ordering.service';
+import { PricesController } from './prices.controller';
+import { PricesService } from './prices.service';
 import { Solver } from './solver/solver';
 
 @Module({
-  imports: [SessionsModule],
-  controllers: [OrderingController],
-  providers: [OrderingService, { provide: Solver, useFactory: () => new Solver() }],
+  imports: [SessionsModule, TunesModule],
+  controllers: [OrderingController, PricesController],
+  providers: [OrderingService, PricesService, { provide: Solver, useFactory: () => new Solver() }],
 })
 export class OrderingModule implements OnApplicationBootstrap {
   constructor(

@@ -1,14 +1,14 @@
 import { Injectable } from '@nestjs/common';
 import { readKindTunings } from '@pegwell/shared/tunes/kind-tunings';
-import { BUILT_IN_KINDS } from '@pegwell/shared/music/instrument';
 import { ASSUMED_TUNE_MINUTES } from '@pegwell/shared/session/minutes';
 import { CirclesService } from '../circles/circles.service';
 import { UsualTuningsService, type UsualLookup } from '../circles/usual-tunings.service';
 import type { Database } from '../database/database';
 import type { PlayableTune } from '../tunes/playable';
 import { PlayableService } from '../tunes/playable.service';
+import { acceptedTonight } from './accepted';
 import { BoardRepository } from './board.repository';
-import type { Accepted, EveningEntry, StoredEvening } from './evening';
+import type { EveningEntry, StoredEvening } from './evening';
 import { SessionsRepository, type SessionRow } from './sessions.repository';
 import type { StoredEntry } from './sessions.table';
 
@@ -65,7 +65,7 @@ function describe(
   if (open) {
     const stated = readKindTunings(open.tunings, 'tunings').accepted;
     const words = { title: null, key: open.key, mode: open.mode, rhythm: null, minutes: open.minutes };
-    return { ...common, ...words, ...fill(stated, words, sitOut, usual), removed: false };
+    return { ...common, ...words, ...acceptedTonight(stated, words, sitOut, usual), removed: false };
   }
   const tune = tuneId === null ? undefined : tunes.get(tuneId);
   const setting =
@@ -81,28 +81,10 @@ function describe(
     rhythm: tune.rhythm,
     minutes: ASSUMED_TUNE_MINUTES,
   };
-  return { ...common, ...words, ...fill(setting.stated, words, sitOut, usual), removed: tune.removed };
-}
-
-/** What is stated, then the circle's usual tunings (assumed), and kinds that sit out as they stand. */
-function fill(
-  stated: Accepted,
-  { key, mode }: Pick<EveningEntry, 'key' | 'mode'>,
-  sitOut: readonly string[],
-  usual: UsualLookup,
-): Pick<EveningEntry, 'accepted' | 'assumed'> {
-  const accepted: Record<string, Accepted[string]> = {};
-  const assumed = new Set<string>();
-  for (const { id } of BUILT_IN_KINDS) {
-    const said = stated[id];
-    if (sitOut.includes(id)) accepted[id] = 'any';
-    else if (said !== undefined) accepted[id] = said;
-    else {
-      const assumption = usual(id, key, mode);
-      if (assumption === 'any') continue;
-      accepted[id] = [assumption];
-      assumed.add(id);
-    }
-  }
-  return { accepted, assumed };
+  return {
+    ...common,
+    ...words,
+    ...acceptedTonight(setting.stated, words, sitOut, usual),
+    removed: tune.removed,
+  };
 }

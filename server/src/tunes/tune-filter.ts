@@ -1,5 +1,5 @@
 import { MODES, type Mode } from '@pegwell/shared/music/mode';
-import type { TuneQuery } from '@pegwell/shared/contract/tunes';
+import type { TuneSearch } from '@pegwell/shared/contract/tunes';
 import { builtInKind } from '@pegwell/shared/music/instrument';
 import { midiOf, parseTonic, spell, type Accidental, type Letter } from '@pegwell/shared/music/pitch';
 import { parseTuning, sameTuning } from '@pegwell/shared/music/tuning';
@@ -39,7 +39,7 @@ const TONICS = LETTERS.flatMap((letter) => ['', '#', 'b'].map((sign) => letter +
  * Reads a search.
  * @throws ProblemException (422) for an unknown kind or a tuning that cannot be read
  */
-export function readFilter(query: TuneQuery, usual: UsualLookup): TuneFilter {
+export function readFilter(query: TuneSearch, usual: UsualLookup): TuneFilter {
   const tonic = query.key === undefined ? undefined : parseTonic(query.key)?.pitchClass;
   return {
     ...(query.search !== undefined && { search: titleKey(query.search) }),

@@ -72,13 +72,16 @@ export class TunesRepository {
     return { tunes: await this.withTunings(db, rows.map(typed)), total: counted?.total ?? 0 };
   }
 
-  /** The whole library in the order of its file: by title, tunes of one title as they were made. */
-  async all(db: Database, circleId: string): Promise<StoredTune[]> {
+  /**
+   * The whole library in the order of its file (by title, tunes of one title as they were made), or all of it
+   * that is looked for.
+   */
+  async all(db: Database, circleId: string, filter: TuneFilter = {}): Promise<StoredTune[]> {
     const rows = await db
       .select(columns)
       .from(tunes)
       .innerJoin(settings, usualSetting)
-      .where(and(eq(tunes.circleId, circleId), isNull(tunes.removedAt)))
+      .where(and(eq(tunes.circleId, circleId), isNull(tunes.removedAt), ...conditions(db, filter)))
       .orderBy(byTitle, asc(tunes.createdAt), asc(tunes.id));
     return this.withTunings(db, rows.map(typed));
   }

@@ -1,11 +1,18 @@
 import { randomUUID } from 'node:crypto';
 import { Inject, Injectable } from '@nestjs/common';
 import type { Page } from '@pegwell/shared/contract/page';
-import type { CreateTune, KindTunings, Tune, TuneQuery, UpdateTune } from '@pegwell/shared/contract/tunes';
+import type {
+  CreateTune,
+  KindTunings,
+  Tune,
+  TuneQuery,
+  TuneSearch,
+  UpdateTune,
+} from '@pegwell/shared/contract/tunes';
 import { actionsOf } from '@pegwell/shared/policy';
 import { readKindTunings, type Accepted } from '@pegwell/shared/tunes/kind-tunings';
 import { CirclesService } from '../circles/circles.service';
-import { UsualTuningsService } from '../circles/usual-tunings.service';
+import { UsualTuningsService, type UsualLookup } from '../circles/usual-tunings.service';
 import type { Member } from '../common/access';
 import { announceCircle } from '../common/announce';
 import { cannotBe, notFound } from '../common/problem';
@@ -14,6 +21,13 @@ import { contentOf, presentTune, sameContent, type StoredTune } from './tune-con
 import { readFilter } from './tune-filter';
 import { TuneWritesRepository } from './tune-writes.repository';
 import { TunesRepository } from './tunes.repository';
+
+/** Tunes as they are stored, for a feature that weighs a whole library and shows a page of it. */
+export interface FoundTunes {
+  readonly tunes: readonly StoredTune[];
+  readonly usual: UsualLookup;
+  readonly present: (tune: StoredTune) => Tune;
+}
 
 /** The circle's library, tune by tune. */
 @Injectable()
@@ -34,6 +48,19 @@ export class TunesService {
     const can = tuneActions(member);
     const items = found.tunes.map((tune) => presentTune(tune, usual, can));
     return { items, total: found.total, page, pageSize };
+  }
+
+  /** All that a search finds, by title. */
+  async find(member: Member, search: TuneSearch): Promise<FoundTunes> {
+    const usual = await this.usual.lookup(this.db, member.circleId);
+    const tunes = await this.tunes.all(this.db, member.circleId, readFilter(search, usual));
+    return found(member, tunes, usual);
+  }
+
+  /** @throws 404 */
+  async findOne(member: Member, tuneId: string): Promise<FoundTunes> {
+    const tune = await this.standing(this.db, member, tuneId);
+    return found(member, [tune], await this.usual.lookup(this.db, member.circleId));
   }
 
   async get(member: Member, tuneId: string): Promise<Tune> {
@@ -105,6 +132,11 @@ export class TunesService {
   private async present(db: Database, member: Member, tune: StoredTune): Promise<Tune> {
     return presentTune(tune, await this.usual.lookup(db, member.circleId), tuneActions(member));
   }
+}
+
+function found(member: Member, tunes: readonly StoredTune[], usual: UsualLookup): FoundTunes {
+  const can = tuneActions(member);
+  return { tunes, usual, present: (tune) => presentTune(tune, usual, can) };
 }
 
 function tuneActions(member: Member) {

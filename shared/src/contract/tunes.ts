@@ -97,24 +97,31 @@ const orEmpty = <T extends z.ZodType>(schema: T, error: string) =>
  * `key` is compared by sound (A# is Bb), `rhythm` without case, `search` by what `titleKey` leaves of a title.
  * `kind` alone: tunes that state something for it. With `tuning`: tunes that accept that tuning, stated, or
  * assumed where the tune is silent; a capo counts where the text names one.
- * `sort` is `title`, `key`, `rhythm` or `updated`, with `-` before it to turn it round.
  */
-export const tuneQuerySchema = pageQuerySchema
+export const tuneSearchSchema = pageQuerySchema.extend({
+  search: filterText(200),
+  kind: filterText(40),
+  tuning: filterText(80),
+  key: orEmpty(keySchema, 'A key is a letter A to G, with # or b where it has one.'),
+  mode: orEmpty(modeSchema, `A mode is one of ${modeSchema.options.join(', ')}.`),
+  rhythm: filterText(40),
+});
+export type TuneSearch = z.infer<typeof tuneSearchSchema>;
+
+/** For whatever is a search of tunes and more. */
+export const tuningHasKind = [
+  ({ tuning, kind }: Pick<TuneSearch, 'tuning' | 'kind'>) => tuning === undefined || kind !== undefined,
+  { path: ['tuning'], error: 'A tuning is one of an instrument: say which kind.' },
+] as const satisfies Parameters<typeof tuneSearchSchema.refine>;
+
+/** `sort` is `title`, `key`, `rhythm` or `updated`, with `-` before it to turn it round. */
+export const tuneQuerySchema = tuneSearchSchema
   .extend({
-    search: filterText(200),
-    kind: filterText(40),
-    tuning: filterText(80),
-    key: orEmpty(keySchema, 'A key is a letter A to G, with # or b where it has one.'),
-    mode: orEmpty(modeSchema, `A mode is one of ${modeSchema.options.join(', ')}.`),
-    rhythm: filterText(40),
     sort: z
       .enum(['title', '-title', 'key', '-key', 'rhythm', '-rhythm', 'updated', '-updated'])
       .default('title'),
   })
-  .refine((query) => query.tuning === undefined || query.kind !== undefined, {
-    path: ['tuning'],
-    error: 'A tuning is one of an instrument: say which kind.',
-  });
+  .refine(...tuningHasKind);
 export type TuneQuery = z.infer<typeof tuneQuerySchema>;
 
 export const importQuerySchema = z.strictObject({

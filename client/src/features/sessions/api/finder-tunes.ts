@@ -1,4 +1,5 @@
 import type { Page } from '@pegwell/shared/contract/page';
+import type { PricedTunePage } from '@pegwell/shared/contract/prices';
 import type { Tune } from '@pegwell/shared/contract/tunes';
 import { api } from '../../../lib/api';
 
@@ -10,19 +11,39 @@ export interface FinderQuery {
   readonly tuning: string;
 }
 
+/** By title, or as the evening stands: what costs least comes first. */
+export type FinderSort = 'title' | 'price';
+
+/** Whose tunes, and for which evening; a newer version of its board has other prices. */
+export interface FinderPlace {
+  readonly circleId: string;
+  readonly sessionId: string;
+  readonly version: number;
+}
+
 export const FINDER_PAGE = 30;
 
-export const finderKey = (circleId: string, query: FinderQuery) =>
-  ['circle', circleId, 'tunes', 'finder', query] as const;
+export const finderKey = (
+  { circleId, sessionId, version }: FinderPlace,
+  query: FinderQuery,
+  sort: FinderSort,
+) =>
+  ['circle', circleId, 'tunes', 'finder', query, ...(sort === 'price' ? [sessionId, version] : [])] as const;
 
-export const findTunes = (circleId: string, query: FinderQuery, page: number, signal: AbortSignal) =>
-  api.get<Page<Tune>>(`/circles/${circleId}/tunes`, {
+export async function findTunes(
+  { circleId, sessionId }: FinderPlace,
+  query: FinderQuery,
+  sort: FinderSort,
+  page: number,
+  signal: AbortSignal,
+): Promise<Page<Tune>> {
+  const asked = {
     // The server compares a tuning only where a kind is said with it.
-    query: {
-      ...query,
-      kind: query.tuning ? query.kind : '',
-      page,
-      pageSize: FINDER_PAGE,
-    },
+    query: { ...query, kind: query.tuning ? query.kind : '', page, pageSize: FINDER_PAGE },
     signal,
-  });
+  };
+  if (sort === 'title') return api.get<Page<Tune>>(`/circles/${circleId}/tunes`, asked);
+  // In the order of their prices; the prices themselves are reckoned from the board in hand.
+  const priced = await api.get<PricedTunePage>(`/sessions/${sessionId}/prices`, asked);
+  return { ...priced, items: priced.items.map(({ tune }) => tune) };
+}

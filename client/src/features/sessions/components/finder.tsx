@@ -7,9 +7,10 @@ import { useDeferredValue, useMemo, useRef, useState } from 'react';
 import { ProblemError } from '../../../lib/problem';
 import { useDebounced } from '../../../lib/use-debounced';
 import { Button } from '../../../ui/button';
+import { ChoiceSwitch } from '../../../ui/choice-switch';
 import { TextField } from '../../../ui/fields';
 import { Failing, Loading } from '../../../ui/states';
-import { FINDER_PAGE, findTunes, finderKey } from '../api/finder-tunes';
+import { FINDER_PAGE, findTunes, finderKey, type FinderSort } from '../api/finder-tunes';
 import { FinderFilters, type FinderFilter } from './finder-filters';
 import { FinderRow, type FinderRowProps } from './finder-row';
 import styles from './finder.module.css';
@@ -21,21 +22,27 @@ interface FinderProps extends Pick<FinderRowProps, 'board' | 'nowEntryId' | 'onA
   readonly kinds: readonly string[];
 }
 
+const SORTS = [
+  { value: 'title', label: 'By title' },
+  { value: 'price', label: 'Cheapest first' },
+] as const;
+
 const NO_FILTER: FinderFilter = { key: '', kind: 'fiddle', tuning: '' };
 
 /** The circle's tunes, each with what it would cost at its cheapest place. */
 export function Finder({ session, evening, board, nowEntryId, kinds, ...row }: FinderProps) {
-  const { circleId } = session;
+  const place = { circleId: session.circleId, sessionId: session.id, version: session.version };
   const [search, setSearch] = useState('');
   const [filter, setFilter] = useState<FinderFilter>({ ...NO_FILTER, kind: kinds[0] ?? 'fiddle' });
+  const [sort, setSort] = useState<FinderSort>('title');
   const asked = {
     search: useDebounced(search.trim(), 200),
     ...filter,
     tuning: useDebounced(filter.tuning.trim(), 400),
   };
   const found = useInfiniteQuery({
-    queryKey: finderKey(circleId, asked),
-    queryFn: ({ pageParam, signal }) => findTunes(circleId, asked, pageParam, signal),
+    queryKey: finderKey(place, asked, sort),
+    queryFn: ({ pageParam, signal }) => findTunes(place, asked, sort, pageParam, signal),
     initialPageParam: 1,
     getNextPageParam: ({ page, total }) => (page * FINDER_PAGE < total ? page + 1 : undefined),
     placeholderData: (before) => before,
@@ -71,6 +78,9 @@ export function Finder({ session, evening, board, nowEntryId, kinds, ...row }: F
           onChange={(event) => setSearch(event.target.value)}
         />
         <FinderFilters filter={filter} onFilter={setFilter} kinds={kinds} problem={refused} />
+        <div className={styles.sort}>
+          <ChoiceSwitch legend="In which order" choices={SORTS} value={sort} onChoose={setSort} />
+        </div>
       </div>
       <p className="visually-hidden" role="status">
         {found.isSuccess ? `${total} found` : ''}
