@@ -1,0 +1,10 @@
+import { SETTINGS, type SearchSettings } from '../../src/ordering/engine/search';
+
+/** Hardly any looking ahead, and a bound that sees next to nothing: the sweeps must do it all. */
+export const BARE: SearchSettings = {
+  ...SETTINGS,
+  closerWidth: 1,
+  bounds: [{ limits: { joints: 400, together: 1, apart: 1 }, width: 1, share: Infinity }],
+  lookSteps: 1,
+  cheapSweep: 0,
+};
