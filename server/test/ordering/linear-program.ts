@@ -1,0 +1,74 @@
+import loadHighs from 'highs';
+
+type Term = readonly [factor: number, name: string];
+
+/** A mixed-integer program as it is written down, in the CPLEX LP format that HiGHS reads. */
+export class LinearProgram {
+  private readonly costs: Term[] = [];
+  private readonly rows: string[] = [];
+  private readonly binaries: string[] = [];
+  private readonly wholes: string[] = [];
+
+  /** 0 or 1. */
+  binary(name: string, cost = 0): string {
+    this.binaries.push(name);
+    if (cost !== 0) this.costs.push([cost, name]);
+    return name;
+  }
+
+  /** 0, 1, 2, ... */
+  whole(name: string): string {
+    this.wholes.push(name);
+    return name;
+  }
+
+  row(terms: readonly Term[], relation: '<=' | '=', value: number): void {
+    // No terms: only 0 = 0 may stand, and needs no row; what cannot be is said of a variable that is 0.
+    if (terms.length === 0) {
+      if (relation === '=' && value !== 0) this.rows.push(`nothing = ${value}`);
+      return;
+    }
+    this.rows.push(`${sumOf(terms)} ${relation} ${value}`);
+  }
+
+  get text(): string {
+    return [
+      'Minimize',
+      ` pegs: ${sumOf([...this.costs, [0, 'nothing']])}`,
+      'Subject To',
+      ...this.rows.map((row, index) => ` r${index}: ${row}`),
+      'Bounds',
+      ' nothing = 0',
+      'Binaries',
+      ...this.binaries.map((name) => ` ${name}`),
+      'Generals',
+      ...this.wholes.map((name) => ` ${name}`),
+      'End',
+    ].join('\n');
+  }
+}
+
+const sumOf = (terms: readonly Term[]): string =>
+  terms.map(([factor, name]) => `${factor < 0 ? '-' : '+'} ${Math.abs(factor)} ${name}`).join(' ');
+
+export interface LinearAnswer {
+  /** Null where nothing keeps all rows. */
+  readonly optimum: number | null;
+  /** Milliseconds in the solver, the text read. */
+  readonly millis: number;
+}
+
+/** HiGHS, compiled to WebAssembly, one thread; its own defaults. */
+export async function startHighs(): Promise<(program: LinearProgram) => LinearAnswer> {
+  const highs = await loadHighs();
+  return (program) => {
+    const { text } = program;
+    const begun = performance.now();
+    // Peg changes are whole: within half a peg is within none.
+    const answer = highs.solve(text, { output_flag: false, mip_abs_gap: 0.5, mip_rel_gap: 0 });
+    const millis = performance.now() - begun;
+    if (answer.Status === 'Infeasible') return { optimum: null, millis };
+    if (answer.Status !== 'Optimal') throw new Error(`HiGHS ended with ${answer.Status}`);
+    return { optimum: Math.round(answer.ObjectiveValue), millis };
+  };
+}
