@@ -74,7 +74,7 @@ describe('suggestions', () => {
       detail: string;
     };
     expect(clashes.map(({ rule, ids }) => `${rule} ${ids.join()}`).sort()).toEqual(['pin 1', 'pin 3']);
-    expect(detail).toBe('1 is pinned to place 3, and 3 is pinned to place 3: these cannot all hold.');
+    expect(detail).toBe('1 and 3 are both pinned to place 3.');
   });
 
   it('answers an empty evening with zeros, proved, and refuses pins of nobody', async () => {

@@ -16,7 +16,7 @@ import { DATABASE, type RootDatabase } from '../database/database';
 import { BoardService } from '../sessions/board.service';
 import { scoredEvening } from '../sessions/evening';
 import { EveningsService } from '../sessions/evenings.service';
-import { clashSentence } from './clash-words';
+import { clashSentence, type ClashTold } from './clash-words';
 import type { OrderingProblem, Solution } from './engine/ordering-problem';
 import { problemOf } from './session-problem';
 import { Solver, type SolveOptions } from './solver/solver';
@@ -47,7 +47,11 @@ export class OrderingService {
     }
     const problem = { ...evening, pins, befores: body.befores ?? [] };
     const options = { asker: account.id, signal, limitMs: body.limitMs ?? LIMIT_MS };
-    const { solution, millis } = await this.solve(problem, options, (id) => id);
+    const { solution, millis } = await this.solve(problem, options, {
+      nameOf: (id) => id,
+      placeOf: (id) => pins[id],
+      places: body.tunes.length,
+    });
     return {
       score: solution.score,
       sets: solution.sets.map((set) => [...set]),
@@ -66,11 +70,14 @@ export class OrderingService {
     if (!stored) throw notFound();
     const goal = body.goal ?? stored.session.goal;
     const { problem, restore } = problemOf(stored, goal);
-    const titles = new Map(
-      stored.entries.map(({ id, title }, index) => [id, title ?? `number ${index + 1}`]),
-    );
+    // Places are told as on the whole board, also while the problem is only what is left of it.
+    const places = new Map(stored.entries.map(({ id }, index) => [id, index]));
     const options = { asker: member.account.id, signal, limitMs: LIMIT_MS };
-    const { solution, millis } = await this.solve(problem, options, (id) => titles.get(id) ?? id);
+    const { solution, millis } = await this.solve(problem, options, {
+      nameOf: (id) => stored.entries[places.get(id)!]?.title ?? `number ${places.get(id)! + 1}`,
+      placeOf: (id) => places.get(id),
+      places: stored.entries.length,
+    });
     const sets = restore(solution.sets);
     const after = sets.flat();
     return {
@@ -92,7 +99,7 @@ export class OrderingService {
   private async solve(
     problem: OrderingProblem,
     options: SolveOptions,
-    nameOf: (id: string) => string,
+    told: ClashTold,
   ): Promise<{ solution: Solution; millis: number }> {
     const begun = performance.now();
     const answer = await this.solver.solve(problem, options);
@@ -100,11 +107,7 @@ export class OrderingService {
     if (answer.outcome === 'solution') return { solution: answer, millis };
     if (answer.outcome === 'undecided') throw new ProblemException('undecided');
     const { clashes } = answer;
-    throw new ProblemException(
-      'rules-clash',
-      clashSentence(clashes, nameOf, (id) => problem.pins[id]),
-      { clashes },
-    );
+    throw new ProblemException('rules-clash', clashSentence(clashes, told), { clashes });
   }
 }
 
