@@ -80,7 +80,7 @@ describe('what no host should ask for', () => {
 
   /** Piscina would put a new thread in a lost one's place, cold and in silence. */
   const thread = (): number =>
-    (test.app.get(Solver) as unknown as { started: { threads: { threadId: number }[] } }).started.threads[0]!
+    test.app.get<Solver, { started: { threads: { threadId: number }[] } }>(Solver).started.threads[0]!
       .threadId;
 
   it('is answered, in the same thread to the end', async () => {
