@@ -64,6 +64,13 @@ export function pagesOf({ circleId, coming, past, tuneId }: DemoPlaces): readonl
         await page.getByRole('button', { name: 'Take this order' }).waitFor();
       },
     },
+    { name: 'racks', path: `${board}/racks` },
+    {
+      name: 'racks-add',
+      path: `${board}/racks`,
+      doing: async (page) => page.getByRole('button', { name: 'Add a player' }).click(),
+    },
+    { name: 'racks-none', path: `${circle}/evenings/${past.id}/racks` },
     { name: 'board-past', path: `${circle}/evenings/${past.id}` },
     { name: 'tunes', path: `${circle}/tunes` },
     { name: 'tunes-none', path: `${circle}/tunes?search=nothing+like+this` },

@@ -1,6 +1,6 @@
 import { readFileSync } from 'node:fs';
 import path from 'node:path';
-import type { Circle } from '@pegwell/shared/contract/circles';
+import type { Circle, Role } from '@pegwell/shared/contract/circles';
 import type { Session } from '@pegwell/shared/contract/sessions';
 import type { Tune } from '@pegwell/shared/contract/tunes';
 import type { APIRequestContext, Page } from 'playwright-core';
@@ -69,10 +69,16 @@ export async function seed(host: Page, sets: readonly (readonly string[])[]): Pr
   return { circle, session, tuneId };
 }
 
-/** Somebody else who may change the evening too. */
-export async function addCohost(host: Page, cohost: Page, circle: Circle, name: string): Promise<void> {
-  const email = await register(cohost, name);
-  await answerOf(host.request.post(`/api/circles/${circle.id}/members`, { data: { email, role: 'cohost' } }));
+/** Registers somebody else, signed in at their own page, and makes them a member of the circle. */
+export async function addMember(
+  host: Page,
+  page: Page,
+  circle: Circle,
+  name: string,
+  role: Role,
+): Promise<void> {
+  const email = await register(page, name);
+  await answerOf(host.request.post(`/api/circles/${circle.id}/members`, { data: { email, role } }));
 }
 
 /** The board as it is stored, in titles. */

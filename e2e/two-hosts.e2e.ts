@@ -1,7 +1,7 @@
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { LAPTOP, person, startBrowser } from './browser';
-import { addCohost, seed, storedTitles, type Seed } from './seed';
+import { addMember, seed, storedTitles, type Seed } from './seed';
 import { freshDatabase, startSite, type Site, type SiteDatabase } from './site';
 
 /** Milliseconds in which a board is saved, or takes in what the other host did. */
@@ -24,7 +24,7 @@ describe('two hosts at one board', () => {
       ["Soldier's Joy", 'Angeline the Baker', 'Sandy River Belle'],
       ['June Apple', 'Greasy Coat'],
     ]);
-    await addCohost(hollis, mara, seeded.circle, 'Mara');
+    await addMember(hollis, mara, seeded.circle, 'Mara', 'cohost');
     const board = `/c/${seeded.circle.id}/evenings/${seeded.session.id}`;
     await Promise.all([hollis.goto(board), mara.goto(board)]);
     await Promise.all([hollis, mara].map((page) => page.getByText('Add a tune').first().waitFor()));

@@ -12,6 +12,7 @@ const EveningsPage = lazyPage(() => import('./evenings-page'), 'EveningsPage');
 const EveningNewPage = lazyPage(() => import('./evening-new-page'), 'EveningNewPage');
 const BoardPage = lazyPage(() => import('./board-page'), 'BoardPage');
 const ConsolePage = lazyPage(() => import('./console-page'), 'ConsolePage');
+const RacksPage = lazyPage(() => import('./racks-page'), 'RacksPage');
 const TunesPage = lazyPage(() => import('./tunes-page'), 'TunesPage');
 const TunePage = lazyPage(() => import('./tune-page'), 'TunePage');
 const TuneNewPage = lazyPage(() => import('./tune-new-page'), 'TuneNewPage');
@@ -36,6 +37,7 @@ export function DeskRoutes() {
             <Route path="evenings/new" element={<EveningNewPage />} />
             <Route path="evenings/:sessionId" element={<BoardPage />} />
             <Route path="evenings/:sessionId/live" element={<ConsolePage />} />
+            <Route path="evenings/:sessionId/racks" element={<RacksPage />} />
             <Route path="tunes" element={<TunesPage />} />
             <Route path="tunes/new" element={<TuneNewPage />} />
             <Route path="tunes/:tuneId" element={<TunePage />} />
