@@ -183,6 +183,13 @@ describe('the racks page', () => {
     expect(await screen.findByText(/^This evening asks a fiddle for 15 tunings/)).toBeTruthy();
   });
 
+  it('asks for nobody once the evening is over', async () => {
+    const { evening, items } = racks([]);
+    open('host', { [`GET ${PATH}`]: ok({ evening: { ...evening, status: 'finished' }, items }) });
+    expect(await screen.findByText('This evening is over.')).toBeTruthy();
+    expect(screen.queryByRole('button', { name: 'Add a player' })).toBeNull();
+  });
+
   it('says when it cannot be loaded, and asks again', async () => {
     let away = true;
     open('player', {

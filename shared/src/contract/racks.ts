@@ -9,7 +9,7 @@ import { shownTuningSchema } from './tunes';
 export const MAX_RACKS = 60;
 
 /** `opening`: as its kind arrives; `free`: tuned at home to what the plan says; `tuned`: to `tuning`. */
-export const arrivesSchema = z.enum(['opening', 'free', 'tuned']);
+const arrivesSchema = z.enum(['opening', 'free', 'tuned']);
 
 const rackInstrumentSchema = z
   .strictObject({
@@ -66,7 +66,7 @@ const rackTurnSchema = z.object({
 export type RackTurn = z.infer<typeof rackTurnSchema>;
 
 /** The cheapest plan for the order on the board and the tunings announced for it. */
-export const rackPlanSchema = z.object({
+const rackPlanSchema = z.object({
   /** By instrument: tuned so when the player comes; null for one that no tune needs and that may stay as it is. */
   bring: z.array(shownTuningSchema.nullable()),
   /** In playing order, all entries of the board. */

@@ -19,8 +19,10 @@ interface RacksViewProps {
 }
 
 /** The players of an evening who bring instruments of their own, and the plan of one of them. */
-export function RacksView({ sessionId, racks, mayChange }: RacksViewProps) {
+export function RacksView({ sessionId, racks, mayChange: allowed }: RacksViewProps) {
   const { evening, items } = racks;
+  const over = evening.status === 'finished';
+  const mayChange = allowed && !over;
   const { save, remove } = useRackChanges(sessionId);
   const [search, setSearch] = useSearchParams();
   const shown = items.find(({ id }) => id === search.get('player')) ?? items[0];
@@ -43,9 +45,11 @@ export function RacksView({ sessionId, racks, mayChange }: RacksViewProps) {
       </PageHeading>
       {items.length === 0 ? (
         <EmptyState title="Nobody is down with instruments of their own" action={add('solid')}>
-          {mayChange
-            ? 'Somebody with two fiddles turns fewer pegs. Write down what they bring, and see the plan.'
-            : 'Bringing two? Tell a host, and the plan for yours stands here.'}
+          {over
+            ? 'This evening is over.'
+            : mayChange
+              ? 'Somebody with two fiddles turns fewer pegs. Write down what they bring, and see the plan.'
+              : 'Bringing two? Tell a host, and the plan for yours stands here.'}
         </EmptyState>
       ) : null}
       {items.length > 1 ? <RackPlayers items={items} shown={shown?.id ?? ''} /> : null}
