@@ -21,6 +21,7 @@ import {
   SuggestAnswerDto,
   SuggestRequestDto,
 } from './ordering.dto';
+import { goneAway } from './gone-away';
 import { OrderingService } from './ordering.service';
 
 @ApiTags('ordering')
@@ -72,13 +73,4 @@ export class OrderingController {
   ): Promise<Session> {
     return this.ordering.accept(member, id, body);
   }
-}
-
-/** Whoever asked has closed the connection: nobody waits for the answer any more. */
-function goneAway(response: Response): AbortSignal {
-  const gone = new AbortController();
-  response.once('close', () => {
-    if (!response.writableFinished) gone.abort();
-  });
-  return gone.signal;
 }

@@ -2,6 +2,8 @@ import { Inject, Module, type OnApplicationBootstrap } from '@nestjs/common';
 import { ENV, type Env } from '../env';
 import { SessionsModule } from '../sessions/sessions.module';
 import { TunesModule } from '../tunes/tunes.module';
+import { ExplainController } from './explain.controller';
+import { ExplainService } from './explain.service';
 import { OrderingController } from './ordering.controller';
 import { OrderingService } from './ordering.service';
 import { PricesController } from './prices.controller';
@@ -10,8 +12,13 @@ import { Solver } from './solver/solver';
 
 @Module({
   imports: [SessionsModule, TunesModule],
-  controllers: [OrderingController, PricesController],
-  providers: [OrderingService, PricesService, { provide: Solver, useFactory: () => new Solver() }],
+  controllers: [OrderingController, ExplainController, PricesController],
+  providers: [
+    OrderingService,
+    ExplainService,
+    PricesService,
+    { provide: Solver, useFactory: () => new Solver() },
+  ],
 })
 export class OrderingModule implements OnApplicationBootstrap {
   constructor(

@@ -14,10 +14,11 @@ import type { Account, Member } from '../common/access';
 import { cannotBe, notFound, ProblemException } from '../common/problem';
 import { DATABASE, type RootDatabase } from '../database/database';
 import { BoardService } from '../sessions/board.service';
-import { scoredEvening } from '../sessions/evening';
+import { scoredEvening, type StoredEvening } from '../sessions/evening';
 import { EveningsService } from '../sessions/evenings.service';
 import { clashSentence, type ClashTold } from './clash-words';
 import type { OrderingProblem, Solution } from './engine/ordering-problem';
+import { inOrder } from './session-order';
 import { problemOf } from './session-problem';
 import { Solver, type SolveOptions } from './solver/solver';
 import { presentPlaces, readEvening } from './stateless';
@@ -69,7 +70,7 @@ export class OrderingService {
     const stored = await this.evenings.load(this.db, sessionId);
     if (!stored) throw notFound();
     const goal = body.goal ?? stored.session.goal;
-    const { problem, restore } = problemOf(stored, goal);
+    const { problem, levelsMeant, restore } = problemOf(stored, goal, setOf(stored, body.setId));
     // Places are told as on the whole board, also while the problem is only what is left of it.
     const places = new Map(stored.entries.map(({ id }, index) => [id, index]));
     const options = { asker: member.account.id, signal, limitMs: LIMIT_MS };
@@ -80,14 +81,15 @@ export class OrderingService {
     });
     const sets = restore(solution.sets);
     const after = sets.flat();
+    const scoreOf = (evening: StoredEvening) => scoreEvening({ ...scoredEvening(evening), goal }).score;
     return {
       version: stored.session.version,
-      before: scoreEvening({ ...scoredEvening(stored), goal }).score,
-      after: solution.score,
+      before: scoreOf(stored),
+      after: scoreOf(inOrder(stored, sets) ?? stored),
       sets,
       moved: stored.entries.flatMap(({ id }, index) => (after[index] === id ? [] : [id])),
       goal,
-      ...proofOf(solution),
+      ...proofOf(solution, levelsMeant),
       millis,
     };
   }
@@ -111,6 +113,16 @@ export class OrderingService {
   }
 }
 
-function proofOf({ optimal, provenLevels, lowerBound, stopped }: Solution) {
-  return { optimal, provenLevels, lowerBound, ...(stopped === 'time' && { stopped: 'time' as const }) };
+function proofOf({ provenLevels, lowerBound, stopped }: Solution, levelsMeant = 7) {
+  const proven = Math.min(provenLevels, levelsMeant);
+  return {
+    ...{ optimal: proven === 7, provenLevels: proven, lowerBound },
+    ...(stopped === 'time' && { stopped: 'time' as const }),
+  };
+}
+
+/** @throws 422 for a set that is not on the board */
+function setOf({ sets }: StoredEvening, setId: string | undefined): string | undefined {
+  if (setId === undefined || sets.some(({ id }) => id === setId)) return setId;
+  throw cannotBe([{ path: 'setId', message: 'This set is not on the board.' }]);
 }

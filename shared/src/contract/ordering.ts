@@ -91,7 +91,11 @@ export const suggestAnswerSchema = z.object({
 });
 export type SuggestAnswer = z.infer<typeof suggestAnswerSchema>;
 
-export const sessionSuggestionRequestSchema = z.strictObject({ goal: goalSchema.optional() });
+/** `setId`: an order of that set alone is sought, and everything else stays where it is. */
+export const sessionSuggestionRequestSchema = z.strictObject({
+  goal: goalSchema.optional(),
+  setId: idSchema.optional(),
+});
 export type SessionSuggestionRequest = z.infer<typeof sessionSuggestionRequestSchema>;
 
 export const sessionSuggestionSchema = z.object({

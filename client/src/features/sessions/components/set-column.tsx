@@ -85,7 +85,7 @@ export function SetColumn(props: SetColumnProps) {
                 {/* The first place of a set is off the clock: shown before the set. */}
                 {index > 0 && place ? <Retune place={place} chairs={chairs} /> : null}
                 {spaced.has(entry.id) ? (
-                  <p className={styles.spaced}>Two of a kind in a row: {entry.rhythm}s</p>
+                  <p className={styles.spaced}>Two of a kind in a row: {entry.rhythm?.toLowerCase()}</p>
                 ) : null}
               </Slot>
               <TuneCard
