@@ -28,7 +28,8 @@ export class RacksService {
     const items: Rack[] = [];
     for (const row of await this.racks.ofSession(this.db, sessionId)) {
       items.push(evening.present(row));
-      // A plan takes 10 ms at worst (200 tunes, four instruments): others have their turn between two.
+      // Under 1 ms for a usual evening; 200 tunes in 14 tunings on four instruments take about 10 ms, some ten
+      // times that in a process that has never planned any. Others have their turn between two.
       await setImmediate();
     }
     return { evening: evening.shown(), items };
