@@ -46,7 +46,7 @@ const KEYS: readonly { readonly tonic: number; readonly weight: number; readonly
     tonic: 0,
     weight: 3,
     usual: {
-      fiddle: ['GDAE'],
+      fiddle: ['GDAE', 'FCGD'],
       banjo: ['gCGCD', 'gCGBD'],
       guitar: ['EADGBE', 'CGDGBE'],
       mandolin: ['GDAE'],
@@ -82,7 +82,10 @@ export interface EveningShape {
   readonly sets: number;
   /** How many of BENCH_KINDS are in the room. */
   readonly kinds: number;
-  /** `groups`: at most so many different keys with tunings; `tunings`: so many different tunings of all kinds. */
+  /**
+   * `groups`: at most so many different keys with tunings. `tunings`: so many different tunings of all kinds
+   * together, each of them some tune's.
+   */
   readonly groups?: number;
   readonly tunings?: number;
   /** Keys and tunings each drawn alike and on their own, instead of as they go together. */
@@ -102,8 +105,10 @@ export function benchEvening(shape: EveningShape): OrderingProblem {
   const kinds = BENCH_KINDS.slice(0, shape.kinds);
   const groups = shape.uniform ? [] : drawGroups(random, kinds, shape);
   const ids = Array.from({ length: shape.tunes }, (_, index) => `tune-${index + 1}`);
-  const tunes = ids.map((id): EveningTune => {
-    const group = shape.uniform ? uniformGroup(random, kinds) : groups[random.skewed(groups.length)]!;
+  const sure = shape.tunings === undefined ? [] : oneOfEach(random, ids, groups);
+  const tunes = ids.map((id, index): EveningTune => {
+    const group =
+      sure[index] ?? (shape.uniform ? uniformGroup(random, kinds) : groups[random.skewed(groups.length)]!);
     const accepted: Record<string, readonly Tuned[] | 'any'> = {};
     for (const kind of kinds) accepted[kind] = [tuned(kind, group.tunings[kind]!)];
     if (random.next() < (shape.alternatives ?? 0)) {
@@ -138,14 +143,28 @@ function drawGroups(random: Random, kinds: readonly string[], shape: EveningShap
     const chosen = Object.fromEntries(
       kinds.map((kind) => [kind, usual[kind]![random.skewed(usual[kind]!.length)]!]),
     );
-    // The same tuning with another capo is no other tuning.
-    const together = kinds.map((kind) => chosen[kind]!.replace(/ capo \d+/, '')).join('; ');
+    const together = withoutCapos(chosen);
     if (shape.tunings !== undefined && tunings.size === shape.tunings && !tunings.has(together)) continue;
     tunings.add(together);
     const group = { tonic, tunings: chosen };
     drawn.set(JSON.stringify(group), group);
   }
   return random.shuffled([...drawn.values()]);
+}
+
+/** The same tuning with another capo is no other tuning. */
+const withoutCapos = (tunings: Group['tunings']): string =>
+  Object.values(tunings)
+    .map((tuning) => tuning.replace(/ capo \d+/, ''))
+    .join('; ');
+
+/** By position, somewhere: a group for each tuning of all kinds together. */
+function oneOfEach(random: Random, ids: readonly string[], groups: readonly Group[]): Group[] {
+  const each = new Map(groups.map((group) => [withoutCapos(group.tunings), group]));
+  const places = random.shuffled([...ids.keys()]);
+  const sure: Group[] = [];
+  for (const group of each.values()) sure[places.pop()!] = group;
+  return sure;
 }
 
 function uniformGroup(random: Random, kinds: readonly string[]): Group {

@@ -1,6 +1,7 @@
 import type { EveningTune } from '../shared/src/session/evening';
 import { Insertions } from '../shared/src/session/insert';
 import { benchEvening, type EveningShape } from './evenings';
+import { at, short, timed } from './figures';
 
 /**
  * What one more tune costs, timed: `node --conditions pegwell-source --import tsx bench/insert.ts [runs]`. A
@@ -28,22 +29,24 @@ for (const { name, shape } of CASES) {
   for (let run = -100; run < runs; run++) {
     const evening = benchEvening({ ...shape, seed: 100 + run });
     const tune = { ...benchEvening({ ...shape, seed: 5_000 + run }).tunes[0]!, id: 'one more' };
-    const time = timed(() => new Insertions(evening).everywhere(tune));
-    if (run >= 0) every.push(time);
+    const { ms } = timed(() => new Insertions(evening).everywhere(tune));
+    if (run >= 0) every.push(ms);
   }
   for (let run = -2; run < runs / 10; run++) {
     const insertions = new Insertions(benchEvening({ ...shape, seed: 100 + run }));
     const library = libraryLike(shape, 5_000 + run);
     const times = [
-      timed(() => library.forEach((tune) => insertions.next(tune))),
-      timed(() => library.forEach((tune) => insertions.cheapest(tune))),
+      timed(() => library.forEach((tune) => insertions.next(tune))).ms,
+      timed(() => library.forEach((tune) => insertions.cheapest(tune))).ms,
     ] as const;
     if (run < 0) continue;
     next.push(times[0]);
     cheapest.push(times[1]);
     pegsOnly += library.filter((tune) => insertions.next(tune)?.levels === null).length;
   }
-  const figures = [every, next, cheapest].map((times) => `${at(times, 0.5)} ${at(times, 0.95)}`.padStart(16));
+  const figures = [every, next, cheapest].map((times) =>
+    `${short(at(times, 0.5))} ${short(at(times, 0.95))}`.padStart(16),
+  );
   console.log(name.padEnd(44), figures.join(' '), `${pegsOnly}`.padStart(8));
 }
 
@@ -55,15 +58,4 @@ function libraryLike(shape: Omit<EveningShape, 'seed'>, seed: number): EveningTu
     for (const tune of drawn) tunes.push({ ...tune, id: `library ${tunes.length}` });
   }
   return tunes.slice(0, LIBRARY);
-}
-
-function timed(work: () => unknown): number {
-  const begun = process.cpuUsage().user;
-  work();
-  return (process.cpuUsage().user - begun) / 1000;
-}
-
-function at(values: readonly number[], share: number): string {
-  const sorted = [...values].sort((a, b) => a - b);
-  return sorted[Math.min(sorted.length - 1, Math.floor(share * sorted.length))]!.toFixed(1);
 }
