@@ -3,7 +3,7 @@ module.exports = {
   rootDir: '.',
   roots: ['<rootDir>/src', '<rootDir>/test'],
   testRegex: '\\.(e2e-)?spec\\.ts$',
-  testEnvironment: 'node',
+  testEnvironment: '<rootDir>/test/quick-environment.js',
   testEnvironmentOptions: { customExportConditions: ['pegwell-source', 'node', 'node-addons'] },
   transform: {
     '^.+\\.(t|j)s$': [

@@ -1,4 +1,3 @@
-/** @jest-environment ./test/ordering/quick-environment.js */
 import { scoreEvening } from '@pegwell/shared/session/score';
 import { Random } from '../../../bench/random';
 import { solve } from '../../src/ordering/engine/solve';

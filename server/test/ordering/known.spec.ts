@@ -1,4 +1,3 @@
-/** @jest-environment ./test/ordering/quick-environment.js */
 import { builtInKind } from '@pegwell/shared/music/instrument';
 import { parseTuning } from '@pegwell/shared/music/tuning';
 import type { OrderingProblem, Solution } from '../../src/ordering/engine/ordering-problem';

@@ -1,4 +1,3 @@
-/** @jest-environment ./test/ordering/quick-environment.js */
 import { benchEvening } from '../../../bench/evenings';
 import { solve } from '../../src/ordering/engine/solve';
 import { bestByClassCounts } from './class-counts';

@@ -1,4 +1,3 @@
-/** @jest-environment ./test/ordering/quick-environment.js */
 import fc from 'fast-check';
 import { benchEvening } from '../../../bench/evenings';
 import type { Answer, OrderingProblem, Solution } from '../../src/ordering/engine/ordering-problem';

@@ -1,4 +1,3 @@
-/** @jest-environment ./test/ordering/quick-environment.js */
 import { builtInKind } from '@pegwell/shared/music/instrument';
 import type { Tuned } from '@pegwell/shared/music/tuning';
 import type { EveningTune } from '@pegwell/shared/session/evening';

@@ -2,9 +2,9 @@ const { createContext, constants } = require('node:vm');
 const { TestEnvironment } = require('jest-environment-node');
 
 /**
- * Jest gives each test file a context whose globals are looked up through a proxy. The engine's loops name
- * `Math`, `Infinity` and typed arrays millions of times, which made them ten times slower there than in the
- * server; this context has plain globals. Without jest's fake timers, which stay with the other.
+ * Jest gives each test file a context whose globals are looked up through a proxy. Loops that name `Math`,
+ * `Infinity` or typed arrays millions of times ran up to ten times slower there than in the server; this
+ * context has plain globals.
  */
 module.exports = class QuickEnvironment extends TestEnvironment {
   constructor(config, context) {
@@ -17,5 +17,10 @@ module.exports = class QuickEnvironment extends TestEnvironment {
     const { Buffer, ArrayBuffer, Uint8Array } = globalThis;
     Object.assign(quick, { global: quick, Buffer, ArrayBuffer, Uint8Array });
     this.context = this.global = quick;
+    this.moduleMocker = new this.moduleMocker.constructor(quick);
+    this.fakeTimersModern = new this.fakeTimersModern.constructor({
+      config: config.projectConfig,
+      global: quick,
+    });
   }
 };
