@@ -1,10 +1,12 @@
 import { benchEvening } from '../../../bench/evenings';
+import { Random } from '../../../bench/random';
 import { solve } from '../../src/ordering/engine/solve';
 import { bestByClassCounts } from './class-counts';
 import { faultsOf } from './faults';
 import { levelOneProgram } from './level-one-program';
 import { startHighs } from './linear-program';
 import { mixedProblems, type Mixed } from './mixed-problems';
+import { randomProblem } from './random-problem';
 
 function expectBest({ seed, problem, best }: Mixed): void {
   const answer = solve(problem);
@@ -15,6 +17,15 @@ function expectBest({ seed, problem, best }: Mixed): void {
 describe('the order found, against a dynamic program over class counts', () => {
   it('is the best on 20 evenings of 13 or 14 tunes with pins, breaks and alternatives', () => {
     for (const mixed of mixedProblems(5001, 20, (seed) => 13 + (seed % 2))) expectBest(mixed);
+  });
+
+  it('is the best on 1,600 evenings of nine tunes that mix every feature', () => {
+    for (let seed = 1; seed <= 1600; seed++) {
+      const random = new Random(seed);
+      const problem = randomProblem((below) => random.below(below), 9);
+      const faults = faultsOf(problem, solve(problem), bestByClassCounts(problem));
+      expect({ seed, faults }).toEqual({ seed, faults: [] });
+    }
   });
 
   it('is the best on 12 boards of 24 tunes in a few keys, both goals', () => {
