@@ -1,4 +1,3 @@
-/** @jest-environment ./test/ordering/quick-environment.js */
 import { scoreEvening } from '@pegwell/shared/session/score';
 import { Random } from '../../../bench/random';
 import type { OrderingProblem } from '../../src/ordering/engine/ordering-problem';
