@@ -2,7 +2,8 @@ import { midiOf } from '@pegwell/shared/music/pitch';
 import type { Chair } from '@pegwell/shared/session/evening';
 import { AROUND, NAME_ROW, betweenStrings, capoMoves, groupHeight } from './lanes-heights';
 import type { LaneRow, LaneRun, LaneTune } from './lanes-layout';
-import { NAMES, levelOf, moveOf } from './lanes-layout';
+import { NAMES, levelOf } from './lanes-layout';
+import { moveOfKind } from './changing-kinds';
 import { groupName } from './lanes-words';
 import { lanePath, laneY } from './lanes-path';
 import type { Ground } from './lanes-path';
@@ -88,7 +89,7 @@ interface TurnProps {
 
 /** Which way and how many semitones, above the lane it leads to. */
 function Turn({ chair, run, tune, course, ground }: TurnProps) {
-  const delta = moveOf(tune.place, chair.kind.id)?.deltas[course] ?? 0;
+  const delta = moveOfKind(tune.place, chair.kind.id)?.deltas[course] ?? 0;
   if (delta === 0) return null;
   const level = levelOf(chair, course, tune.place) ?? 0;
   const afterGap = run.tunes[0] === tune && (run.lead === 'break' || run.lead === 'opening');
@@ -114,7 +115,7 @@ interface CaposProps {
 function Capos({ chair, row, y }: CaposProps) {
   return row.runs.flatMap((run) =>
     run.tunes.flatMap((tune) => {
-      const move = moveOf(tune.place, chair.kind.id);
+      const move = moveOfKind(tune.place, chair.kind.id);
       if (!move?.from || !move.to || move.from.capo === move.to.capo) return [];
       return [
         <text key={tune.id} className={styles.capo} x={tune.x + 2} y={y}>

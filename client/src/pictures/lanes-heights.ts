@@ -1,6 +1,6 @@
 import type { Chair } from '@pegwell/shared/session/evening';
 import type { LaneRow } from './lanes-layout';
-import { moveOf } from './lanes-layout';
+import { moveOfKind } from './changing-kinds';
 
 /** Distances inside a group of lanes, in px: between strings, around them, and what may stand below. */
 const BETWEEN = { alone: 26, among: 21 };
@@ -12,7 +12,7 @@ export const CAPO_ROW = 16;
 export function capoMoves({ kind }: Chair, row: LaneRow): boolean {
   return row.runs.some((run) =>
     run.tunes.some(({ place }) => {
-      const move = moveOf(place, kind.id);
+      const move = moveOfKind(place, kind.id);
       return Boolean(move?.from && move.to && move.from.capo !== move.to.capo);
     }),
   );

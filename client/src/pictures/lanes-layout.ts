@@ -1,5 +1,6 @@
 import { midiOf } from '@pegwell/shared/music/pitch';
-import type { Chair, KindMove, Place } from '@pegwell/shared/session/evening';
+import type { Chair, Place } from '@pegwell/shared/session/evening';
+import { moveOfKind } from './changing-kinds';
 
 /*
  * Where everything in the string lanes stands, in px, for the width there is. Nothing is scaled: where
@@ -128,10 +129,6 @@ export function stopX(run: LaneRun, tune: LaneTune): number {
   return run.lead === 'tail' ? tune.x - 4 : tune.x - GAP / 2;
 }
 
-export function moveOf(place: Place, kindId: string): KindMove | undefined {
-  return place.kinds.find((move) => move.kind === kindId);
-}
-
 /** Semitones a string stands above its standard pitch after (or before) a place; null while it is free. */
 export function levelOf(
   { kind }: Chair,
@@ -139,7 +136,7 @@ export function levelOf(
   place: Place,
   side: 'from' | 'to' = 'to',
 ): number | null {
-  const pitch = moveOf(place, kind.id)?.[side]?.pitches[course];
+  const pitch = moveOfKind(place, kind.id)?.[side]?.pitches[course];
   const standard = kind.courses[course]?.standard;
   return pitch && standard ? midiOf(pitch) - midiOf(standard) : null;
 }

@@ -1,8 +1,9 @@
 import type { Chair, Place } from '@pegwell/shared/session/evening';
 import { LanesGroup } from './lanes-group';
 import type { LaneRow } from './lanes-layout';
-import { GAP, NAMES, moveOf, stopX } from './lanes-layout';
-import { groupHeight } from './lanes-heights';
+import { GAP, NAMES, stopX } from './lanes-layout';
+import { moveOfKind } from './changing-kinds';
+import { NAME_ROW, groupHeight } from './lanes-heights';
 import styles from './string-lanes.module.css';
 
 interface LanesRowProps {
@@ -32,6 +33,20 @@ function stack(chairs: readonly Chair[], row: LaneRow, named: boolean): readonly
     top = group.bottom;
     return group;
   });
+}
+
+/** Room for "off the clock" along the lanes, in px. */
+const OFF_WORDS = 80;
+
+/**
+ * The middle of the words beside a gap: in the group with most room, below its name, which may be longer than
+ * the strings' names and reach into the gap.
+ */
+function offWordsY(groups: readonly Group[], named: boolean): number {
+  const nameBelow = named ? NAME_ROW + 6 : 0;
+  const [widest] = [...groups].sort((a, b) => b.bottom - b.top - (a.bottom - a.top));
+  const { top, bottom } = widest ?? { top: STOPS, bottom: STOPS };
+  return Math.max((top + nameBelow + bottom) / 2, top + nameBelow + OFF_WORDS / 2);
 }
 
 /** One row of the picture: stops with their prices on top, a group per kind, the tunes' numbers below. */
@@ -74,7 +89,7 @@ export function LanesRow({ row, column, width, chairs, named, highlight }: Lanes
             key={run.x}
             className={styles.offWords}
             textAnchor="middle"
-            transform={`translate(${run.x - GAP / 2 + 4} ${(STOPS + 10 + bottom) / 2}) rotate(-90)`}
+            transform={`translate(${run.x - GAP / 2 + 4} ${offWordsY(groups, named)}) rotate(-90)`}
           >
             off the clock
           </text>
@@ -110,7 +125,7 @@ function Stop({ x, place, groups }: StopProps) {
   const half = pegChanges > 99 ? 14 : 10;
   const mark = { x: x - half, y: 2, width: half * 2, height: 20, rx: 10 };
   const foot = groups.at(-1)?.bottom ?? STOPS;
-  const turning = groups.filter(({ chair }) => (moveOf(place, chair.kind.id)?.pegChanges ?? 0) > 0);
+  const turning = groups.filter(({ chair }) => (moveOfKind(place, chair.kind.id)?.pegChanges ?? 0) > 0);
   return (
     <g>
       {offClock || turning.length === groups.length ? null : (

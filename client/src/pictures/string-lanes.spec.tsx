@@ -56,6 +56,25 @@ describe('StringLanes', () => {
     expect(container.querySelectorAll('path[class*=lane]')).toHaveLength(9);
   });
 
+  it.each([
+    [{ fiddle: 5, 'tenor-banjo': 12 }, ['ADAE|CGDA', 'GDAE|CGDB']],
+    [{ dulcimer: 3, 'tenor-banjo': 4, fiddle: 5 }, ['D3 A3 A3|CGDA|ADAE', 'D3 A3 D4|CGDB|GDAE']],
+  ])('keeps "off the clock" clear of the names of %o, which may reach into the gap', (room, turned) => {
+    const { container } = render(<StringLanes {...pictured(room, [turned, turned])} />);
+    const names = [...container.querySelectorAll('text[class*=group]')].map((name) =>
+      Number(name.getAttribute('y')),
+    );
+    expect(names).toHaveLength(Object.keys(room).length);
+    const words = [...container.querySelectorAll('text[class*=offWords]')];
+    expect(words.map((each) => each.textContent)).toEqual(['off the clock', 'off the clock']);
+    for (const word of words) {
+      const middle = Number(/translate\(\S+ (\S+)\)/.exec(word.getAttribute('transform') ?? '')?.[1]);
+      // Written upwards, 12 px high letters, about 78 px long; a name stands 12 px above its line.
+      const clear = names.every((y) => y < middle - 39 || y - 12 > middle + 39);
+      expect({ names, middle, clear }).toEqual({ names, middle, clear: true });
+    }
+  });
+
   it('shows one instrument at a time where the evening takes several rows', async () => {
     vi.spyOn(Element.prototype, 'clientWidth', 'get').mockReturnValue(358);
     const cells = Array.from({ length: 12 }, () => 'AEAE|gDGBD');

@@ -1,4 +1,9 @@
-import type { SessionSuggestion } from '@pegwell/shared/contract/ordering';
+import type { HeldBack } from '@pegwell/shared/contract/explain';
+import type {
+  AcceptSuggestion,
+  SessionSuggestion,
+  SessionSuggestionRequest,
+} from '@pegwell/shared/contract/ordering';
 import type { PutBoard, Session, ShownEntry } from '@pegwell/shared/contract/sessions';
 import type { Tune } from '@pegwell/shared/contract/tunes';
 import { builtInKind } from '@pegwell/shared/music/instrument';
@@ -16,6 +21,7 @@ const tunings = ['GDAE', 'AEAE', 'GDAE', 'ADAE', 'AEAE'];
 const titles = ['Stone Weir', 'Cluck Old Hen', 'Slack Tide', 'Frosty Lock Gate', 'June Apple'];
 const entries = titles.map((title, index) => shownEntry(index + 1, title, { fiddle: tunings[index]! }));
 const evening = (more: Partial<Session> = {}) => sessionOf([entries.slice(0, 3), entries.slice(3)], more);
+const BEST_SECOND = [uuid(4), uuid(5)];
 const BEST = [
   [uuid(1), uuid(3), uuid(4)],
   [uuid(2), uuid(5)],
@@ -173,7 +179,7 @@ describe('a suggested order', { timeout: 60_000 }, () => {
     ...{
       version: 1,
       before: server.session.score,
-      after: server.session.score,
+      after: { ...server.session.score, pegChanges: 10, retuneStops: 1 },
       sets: BEST,
       moved: [],
       goal: 'pegs',
@@ -182,34 +188,119 @@ describe('a suggested order', { timeout: 60_000 }, () => {
     ...more,
   });
   const path = () => `/api/sessions/${server.session.id}/suggestion`;
+  /** Takes any order and tells which; `goals` are those that the evening was changed to. */
+  const taking = (answer: (asked: SessionSuggestionRequest) => SessionSuggestion) => {
+    const seen = { accepted: [] as unknown[], goals: [] as unknown[] };
+    const answers = site({
+      [`POST ${path()}`]: (body) => ({ status: 200, body: answer(body as SessionSuggestionRequest) }),
+      [`PATCH /api/sessions/${server.session.id}`]: (body) => {
+        seen.goals.push((body as Partial<Session>).goal);
+        server.session = { ...server.session, ...(body as Partial<Session>) };
+        return { status: 200, body: server.session };
+      },
+      [`POST ${path()}/accept`]: (body) => {
+        seen.accepted.push(body);
+        const known = new Map(entries.map((entry) => [entry.id, entry]));
+        const sets = server.session.sets.map((set, index) => ({
+          ...set,
+          entries: (body as AcceptSuggestion).sets[index]!.flatMap((id): ShownEntry[] => [known.get(id)!]),
+        }));
+        server.session = { ...server.session, version: server.session.version + 1, sets };
+        return { status: 200, body: server.session };
+      },
+    });
+    mockApi(answers);
+    return seen;
+  };
 
-  it('stands beside the host’s, is taken, and can be undone', async () => {
-    let accepted: unknown = null;
-    mockApi(
-      site({
-        [`POST ${path()}`]: () => ({ status: 200, body: suggestion() }),
-        [`POST ${path()}/accept`]: (body) => {
-          accepted = body;
-          const known = new Map(entries.map((entry) => [entry.id, entry]));
-          const sets = server.session.sets.map((set, index) => ({
-            ...set,
-            entries: BEST[index]!.flatMap((id): ShownEntry[] => [known.get(id)!]),
-          }));
-          server.session = { ...server.session, version: 2, sets };
-          return { status: 200, body: server.session };
-        },
-      }),
-    );
+  it('stands beside the host’s, says what is better and why, is taken, and can be undone', async () => {
+    const seen = taking(() => suggestion());
     open('?suggest');
     const take = await screen.findByRole('button', { name: 'Take this order' }, { timeout: 30_000 });
     expect(screen.getByRole('heading', { name: '30 peg changes as you have it' })).toBeTruthy();
     expect(screen.getByRole('heading', { name: '10 peg changes suggested' })).toBeTruthy();
-    expect(screen.getByText('No order needs fewer pegs. Proved.')).toBeTruthy();
+    expect(screen.getByText('20 pegs and 2 stops fewer, about 4 min less tuning.')).toBeTruthy();
+    expect(screen.getByText(/the fiddles turn pegs 2 times instead of 4\.$/)).toBeTruthy();
+    expect(screen.getByText('No order of these tunes turns fewer pegs: proved.')).toBeTruthy();
+    const first = screen.getByRole('region', { name: 'Set 1' });
+    expect(within(first).getByText('D · was 4')).toBeTruthy();
+    expect(within(first).getByText('5 fiddles: G peg up a whole step, to A.')).toBeTruthy();
+    expect(within(first).getByText('A stop inside a set: the room waits about 1½ min.')).toBeTruthy();
+    // One filled button; what keeps things as they are is an outline.
+    expect(take.className).toMatch(/solid/);
+    expect(screen.getByRole('button', { name: 'Keep mine' }).className).toMatch(/outline/);
     await userEvent.click(take);
     await screen.findByRole('article', { name: /^Cluck Old Hen, place 1 of 2 in Set 2/ }, { timeout: 5_000 });
-    expect(accepted).toEqual({ version: 1, sets: BEST });
+    expect(seen).toEqual({ accepted: [{ version: 1, sets: BEST }], goals: [] });
     await userEvent.keyboard('{Control>}z{/Control}');
     await waitFor(() => expect(stored()[0]).toEqual(titles.slice(0, 3)), { timeout: 5_000 });
+  });
+
+  it('is taken for one set alone, with the goal it is the best for; undo brings both back', async () => {
+    const [firstSet] = server.session.sets;
+    const own = [[uuid(1), uuid(3), uuid(2)], BEST_SECOND];
+    const asked: SessionSuggestionRequest[] = [];
+    const seen = taking((body) => {
+      asked.push(body);
+      return suggestion({ goal: body.goal ?? 'pegs', sets: body.setId ? own : BEST });
+    });
+    open('?suggest');
+    await screen.findByRole('button', { name: 'Take this order' }, { timeout: 30_000 });
+    await userEvent.click(screen.getByRole('radio', { name: 'Fewest stops' }));
+    await userEvent.click(await screen.findByRole('radio', { name: /^Only Set 1/ }));
+    await screen.findByRole('heading', { name: /^2 stops suggested/ });
+    expect(screen.getByText(/^Everything outside Set 1 stays as it is\./)).toBeTruthy();
+    expect(screen.queryByRole('region', { name: 'Set 2' })).toBeNull();
+    expect(asked).toContainEqual({ goal: 'stops', setId: firstSet!.id });
+    await userEvent.click(screen.getByRole('button', { name: 'Take Set 1' }));
+    await waitFor(() => expect(seen).toEqual({ accepted: [{ version: 1, sets: own }], goals: ['stops'] }), {
+      timeout: 5_000,
+    });
+    // The one in the sentence that says what was done; the board's own says what it undoes.
+    await userEvent.click(await screen.findByRole('button', { name: 'Undo', description: '' }));
+    await waitFor(() => expect(stored()[0]).toEqual(titles.slice(0, 3)), { timeout: 5_000 });
+    await waitFor(() => expect(seen.goals).toEqual(['stops', 'pegs']));
+  });
+
+  it('says what holds it back when it is asked', async () => {
+    mockApi(
+      site({
+        [`POST ${path()}`]: () => ({ status: 200, body: suggestion() }),
+        [`POST ${path()}/held-back`]: (body) => {
+          expect(body).toEqual({ goal: 'pegs', sets: BEST });
+          const item = { score: server.session.score, proved: true };
+          const items: HeldBack['items'] = [
+            {
+              ...item,
+              rule: 'tune',
+              ids: [uuid(2)],
+              alike: [uuid(5)],
+              gains: true,
+              words: 'Without Cluck Old Hen: 5 pegs fewer.',
+            },
+            {
+              ...item,
+              rule: 'pin',
+              ids: [uuid(1)],
+              alike: [],
+              gains: false,
+              words: 'Without the pin on Stone Weir: no better.',
+            },
+          ];
+          return {
+            status: 200,
+            body: { version: 1, goal: 'pegs', score: item.score, items, untried: 0, millis: 9 },
+          };
+        },
+      }),
+    );
+    open('?suggest');
+    await userEvent.click(
+      await screen.findByRole('button', { name: 'What holds it back?' }, { timeout: 30_000 }),
+    );
+    expect(await screen.findByText('Without Cluck Old Hen: 5 pegs fewer.')).toBeTruthy();
+    expect(screen.getByText('The same without June Apple.')).toBeTruthy();
+    expect(screen.getByText('Without the pin on Stone Weir: no better.')).toBeTruthy();
   });
 
   it('claims no proof where there is none', async () => {
@@ -221,24 +312,44 @@ describe('a suggested order', { timeout: 60_000 }, () => {
     open('?suggest');
     expect(
       await screen.findByText(
-        /at least 5 pegs; whether fewer than 10 do is not known/,
+        /^At least 5 pegs are needed; whether fewer than 10 are enough is not known/,
         {},
         { timeout: 30_000 },
       ),
     ).toBeTruthy();
-    expect(screen.queryByText(/Proved/)).toBeNull();
+    expect(screen.queryByText(/proved/)).toBeNull();
   });
 
-  it('says which rules clash', async () => {
-    const detail =
-      'Slack Tide is pinned to place 3, and Slack Tide comes before Stone Weir: these cannot all hold.';
+  it('says which rules clash, at the cards they are about, and lets one go', async () => {
+    server = new BoardServer(evening({ befores: [[uuid(3), uuid(1)]] }));
+    const first = server.session.sets[0]!;
+    server.session = {
+      ...server.session,
+      sets: [
+        { ...first, entries: first.entries.map((each) => ({ ...each, pinned: each.id === uuid(3) })) },
+        server.session.sets[1]!,
+      ],
+    };
+    const detail = 'Slack Tide is pinned to place 3 but must come before Stone Weir';
+    const clashes = [
+      { rule: 'pin', ids: [uuid(3)] },
+      { rule: 'before', ids: [uuid(3), uuid(1)] },
+    ];
     mockApi(
       site({
-        [`POST ${path()}`]: () => ({ status: 422, body: { status: 422, code: 'rules-clash', detail } }),
+        [`POST ${path()}`]: () =>
+          server.session.befores.length > 0
+            ? { status: 422, body: { status: 422, code: 'rules-clash', detail, clashes } }
+            : { status: 200, body: suggestion({ version: server.session.version }) },
       }),
     );
     open('?suggest');
-    expect(await screen.findByText(detail, {}, { timeout: 30_000 })).toBeTruthy();
+    expect((await screen.findByRole('alert', {}, { timeout: 30_000 })).textContent).toBe(detail);
+    expect(screen.getByText('Pinned to place 3')).toBeTruthy();
+    expect(screen.getAllByText('Slack Tide').length).toBe(2);
+    await userEvent.click(screen.getByRole('button', { name: 'In any order: Slack Tide, Stone Weir' }));
+    await screen.findByRole('button', { name: 'Take this order' }, { timeout: 5_000 });
+    expect(server.session.befores).toEqual([]);
     await userEvent.click(screen.getByRole('button', { name: 'Keep mine' }));
     expect(await screen.findByRole('article', { name: /^Stone Weir/ })).toBeTruthy();
   });

@@ -3,8 +3,8 @@ import { useQueryClient } from '@tanstack/react-query';
 import { useEffect, useRef } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import { useMe } from '../features/accounts/hooks/use-me';
-import type { Order } from '../features/ordering/compare';
 import { SuggestionView } from '../features/ordering/components/suggestion-view';
+import type { Taken } from '../features/ordering/taken';
 import { sessionKey, updateSession } from '../features/sessions/api/session';
 import { Board } from '../features/sessions/components/board';
 import { useBoard } from '../features/sessions/hooks/use-board';
@@ -34,12 +34,6 @@ export function BoardPage() {
   );
 }
 
-interface Taken {
-  readonly label: string;
-  readonly version: number;
-  readonly order: Order;
-}
-
 function Evening({ session, accountId }: { readonly session: Session; readonly accountId: string }) {
   const held = useBoard(session, accountId);
   const queries = useQueryClient();
@@ -60,10 +54,20 @@ function Evening({ session, accountId }: { readonly session: Session; readonly a
     held.receive(changed);
   };
 
-  const accept = async ({ label, version, order }: Taken) => {
+  const changeGoal = (goal: Session['goal']) =>
+    void update({ goal }).catch((error: unknown) => say(sentenceOf(error)));
+
+  const accept = async ({ label, version, order, goal }: Taken) => {
+    const before = session.goal;
     try {
       await held.accept(label, { version, sets: order.map((ids) => [...ids]) });
-      say(`${label}.`, { label: 'Undo', onPress: () => held.takeBack() });
+      // An order is taken with what it was the best for.
+      if (goal !== before) await update({ goal });
+      const undo = () => {
+        held.takeBack();
+        if (goal !== before) changeGoal(before);
+      };
+      say(`${label}.`, { label: 'Undo', onPress: undo });
     } catch (error) {
       say(sentenceOf(error));
     }
@@ -87,8 +91,9 @@ function Evening({ session, accountId }: { readonly session: Session; readonly a
         session={held.session}
         board={held.board}
         save={held.flush}
-        onTake={(label, version, order) => {
-          taken.current = { label, version, order };
+        perform={held.perform}
+        onTake={(order) => {
+          taken.current = order;
           setSearch({}, { replace: true });
         }}
         onKeep={() => setSearch({}, { replace: true })}
@@ -101,7 +106,7 @@ function Evening({ session, accountId }: { readonly session: Session; readonly a
       mayChange={mayChange}
       assumedFor={assumedFor}
       onUpdate={update}
-      onGoal={(goal) => void update({ goal }).catch((error: unknown) => say(sentenceOf(error)))}
+      onGoal={changeGoal}
       onSuggest={() => setSearch({ suggest: '' })}
     />
   );

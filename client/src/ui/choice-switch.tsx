@@ -1,10 +1,10 @@
-import { useId } from 'react';
+import { useId, type ReactNode } from 'react';
 import styles from './choice-switch.module.css';
 
 interface ChoiceSwitchProps<T extends string> {
   /** What is chosen between. Read aloud, not shown. */
   readonly legend: string;
-  readonly choices: readonly { readonly value: T; readonly label: string }[];
+  readonly choices: readonly { readonly value: T; readonly label: ReactNode }[];
   readonly value: T;
   readonly onChoose: (value: T) => void;
 }

@@ -50,6 +50,11 @@ export function inverseOf<E extends BoardEntry>(
         ...taken.flatMap(({ id }) => comesBack(board, id)),
       ];
     }
+    case 'set-rule': {
+      const rules = operation.rule === 'medley' ? board.medleys : board.befores;
+      const holds = rules.some((ids) => ids.join() === operation.ids.join());
+      return holds === operation.holds ? [] : [{ ...operation, holds }];
+    }
     case 'replace-order':
       return [
         {

@@ -28,7 +28,7 @@ const boards = fc
   });
 
 /** Numbers from which a host's work is read, whatever the board then holds. */
-const draws = fc.array(fc.tuple(fc.nat(9), fc.nat(1000), fc.nat(1000), fc.nat(1000)), { maxLength: 12 });
+const draws = fc.array(fc.tuple(fc.nat(10), fc.nat(1000), fc.nat(1000), fc.nat(1000)), { maxLength: 12 });
 
 function operationFrom(
   board: Board,
@@ -56,6 +56,11 @@ function operationFrom(
       return { type: 'move-set', setId: set.id, after: board.sets[c % board.sets.length]!.id };
     case 6:
       return { type: 'remove-set', setId: set.id, entryIds: set.entries.map(({ id }) => id) };
+    case 8: {
+      const ids = [entryId, entries[c % entries.length]!.id];
+      if (ids[0] === ids[1]) return null;
+      return { type: 'set-rule', rule: a % 2 === 0 ? 'medley' : 'before', ids, holds: c % 3 > 0 };
+    }
     case 7: {
       const ids = entries.map(({ id }) => id).sort((x, y) => ((x > y ? c : b) % 3) - 1);
       let from = 0;

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { entriesOf, spotAt, type Board, type BoardEntry } from './board';
-import { applyOperations, type BoardOperation } from './board-operations';
+import { applyOperation, applyOperations, type BoardOperation } from './board-operations';
 import { inverseOfAll } from './board-inverse';
 import { boardBody } from './board-body';
 
@@ -138,6 +138,28 @@ describe('what takes an operation back', () => {
     const back = inverseOfAll(before, operations);
     // Meanwhile x was added and c taken out.
     expect(done(board('bx', 'ade'), ...back)).toEqual(['abx', 'de']);
+  });
+});
+
+describe('a rule between tunes', () => {
+  const ruled: Board = { ...board('abcd'), medleys: [['a', 'b']], befores: [['c', 'a']] };
+  const rule = (name: 'medley' | 'before', ids: string, holds: boolean): BoardOperation => ({
+    ...{ type: 'set-rule', rule: name, ids: [...ids], holds },
+  });
+
+  it('is made, done away with, and taken back', () => {
+    const operations = [rule('before', 'ca', false), rule('medley', 'ab', false), rule('before', 'bd', true)];
+    const { board: after, skipped } = applyOperations(ruled, operations);
+    expect(skipped).toEqual([]);
+    expect([after.medleys, after.befores]).toEqual([[], [['b', 'd']]]);
+    expect(applyOperations(after, inverseOfAll(ruled, operations)).board).toEqual(ruled);
+  });
+
+  it('changes nothing where it stands already, and is not made of tunes that are gone or in a medley', () => {
+    expect(applyOperation(ruled, rule('medley', 'ab', true))).toBe(ruled);
+    expect(applyOperation(ruled, rule('before', 'dc', false))).toBe(ruled);
+    expect(applyOperation(ruled, rule('before', 'ax', true))).toBeNull();
+    expect(applyOperation(ruled, rule('medley', 'bc', true))).toBeNull();
   });
 });
 

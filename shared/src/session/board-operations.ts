@@ -28,6 +28,13 @@ export type BoardOperation<E extends BoardEntry = BoardEntry> =
   | { readonly type: 'rename-set'; readonly setId: string; readonly title: string }
   /** Takes the named entries with it; a set that holds others stays, with those. */
   | { readonly type: 'remove-set'; readonly setId: string; readonly entryIds: readonly string[] }
+  /** Makes a rule of these tunes, in their order, or does away with it. A tune is in one medley at most. */
+  | {
+      readonly type: 'set-rule';
+      readonly rule: 'medley' | 'before';
+      readonly ids: readonly string[];
+      readonly holds: boolean;
+    }
   | {
       readonly type: 'replace-order';
       readonly sets: readonly { readonly setId: string; readonly entryIds: readonly string[] }[];
@@ -91,6 +98,8 @@ export function applyOperation<E extends BoardEntry>(
       return changeSet(board, operation.setId, (set) => ({ ...set, title: operation.title }));
     case 'remove-set':
       return removeSet(board, operation.setId, operation.entryIds);
+    case 'set-rule':
+      return setRule(board, operation.rule, operation.ids, operation.holds);
     case 'replace-order':
       return replaceOrder(board, operation.sets);
   }
@@ -208,6 +217,28 @@ function removeSet<E extends BoardEntry>(
   const taken = set.entries.map(({ id }) => id).filter((id) => entryIds.includes(id));
   const rest = removeEntries(board, taken);
   return { ...rest, sets: rest.sets.filter(({ id, entries }) => id !== setId || entries.length > 0) };
+}
+
+function setRule<E extends BoardEntry>(
+  board: Board<E>,
+  rule: 'medley' | 'before',
+  ids: readonly string[],
+  holds: boolean,
+): Board<E> | null {
+  const stands = (known: readonly string[]): boolean => known.join() === ids.join();
+  const known = rule === 'medley' ? board.medleys.some(stands) : board.befores.some(stands);
+  if (known === holds) return board;
+  if (!holds) {
+    return rule === 'medley'
+      ? { ...board, medleys: board.medleys.filter((medley) => !stands(medley)) }
+      : { ...board, befores: board.befores.filter((pair) => !stands(pair)) };
+  }
+  const [first, second] = ids;
+  if (first === undefined || second === undefined || !ids.every((id) => standingOf(board, id))) return null;
+  if (rule === 'before') return { ...board, befores: [...board.befores, [first, second]] };
+  // A tune is in one medley.
+  if (board.medleys.some((medley) => medley.some((id) => ids.includes(id)))) return null;
+  return { ...board, medleys: [...board.medleys, ids] };
 }
 
 /**

@@ -1,7 +1,8 @@
 import type { SessionSuggestion } from '@pegwell/shared/contract/ordering';
 import type { Session, ShownEntry } from '@pegwell/shared/contract/sessions';
 import { describe, expect, it } from 'vitest';
-import { alignOrder, dearest, movedEntries, partsOf, proofWords, scoreOrder } from './compare';
+import { alignOrder, movedFrom, proofWords, scoreOrder } from './compare';
+import { verdict } from './verdict';
 
 const TUNINGS: Readonly<Record<string, readonly string[]>> = {
   GDAE: ['G3', 'D4', 'A4', 'E5'],
@@ -60,28 +61,12 @@ describe('two orders side by side', () => {
     });
   });
 
-  it('tell what moves, the longest way first', () => {
-    const moved = movedEntries(five, scoreOrder(five, five, 'pegs', BEST).board);
-    expect(moved.map(({ entry: { id }, from, to }) => [id, from, to])).toEqual([
-      ['2', 2, 4],
-      ['3', 3, 2],
-      ['4', 4, 3],
-    ]);
-  });
-
-  it('offer one set alone only where its tunes stay in it and it helps', () => {
-    expect(partsOf(five, five, 'pegs', BEST)).toEqual([]);
-    const both = evening(
-      [entry('1', 'AEAE'), entry('2', 'GDAE'), entry('3', 'AEAE')],
-      [entry('4', 'AEAE'), entry('5', 'GDAE'), entry('6', 'AEAE')],
-    );
-    const order = [
-      ['2', '1', '3'],
-      ['4', '6', '5'],
-    ];
-    expect(partsOf(both, both, 'pegs', order).map(({ label }) => label)).toEqual([
-      'Only the first set',
-      'Only the second set',
+  it('tell from where each tune moves, and nothing of those that stay', () => {
+    const from = movedFrom(five, scoreOrder(five, five, 'pegs', BEST).board);
+    expect([...from]).toEqual([
+      ['2', 2],
+      ['3', 3],
+      ['4', 4],
     ]);
   });
 
@@ -89,11 +74,24 @@ describe('two orders side by side', () => {
     const gap = evening([entry('1', 'GDAE')], [], [entry('2', 'AEAE')]);
     expect(alignOrder(gap, [['2'], ['1']])).toEqual([['2'], [], ['1']]);
   });
+});
 
-  it('name the tune without which this order needs fewest pegs', () => {
-    const lone = evening([entry('1', 'GDAE'), entry('2', 'AEAE'), entry('3', 'GDAE')]);
-    const [first] = dearest(lone, scoreOrder(lone, lone, 'pegs'), 'pegs');
-    expect(first).toMatchObject({ entry: { id: '2' }, pegChanges: 0 });
+describe('what is better, and why', () => {
+  it('is said in pegs, stops and minutes, and in how often each kind turns', () => {
+    const [mine, best] = [scoreOrder(five, five, 'pegs'), scoreOrder(five, five, 'pegs', BEST)];
+    // 30 pegs to 10, 3 stops to 1; stops of 2, 2 and 1½ minutes to one of 1½ (minutes.ts).
+    expect(verdict(mine, best, 'pegs')).toEqual([
+      '20 pegs and 2 stops fewer, about 4 min less tuning.',
+      'Tunes in the same tuning follow each other: the fiddles turn pegs 2 times instead of 4.',
+    ]);
+  });
+
+  it('gives no reason that is none', () => {
+    const one = scoreOrder(five, five, 'pegs');
+    expect(verdict(one, { ...one, score: { ...one.score, keyChanges: -1 } }, 'pegs')).toEqual([
+      '1 key change fewer.',
+      '',
+    ]);
   });
 });
 
@@ -102,16 +100,20 @@ describe('what is said of the proof', () => {
     ({ goal: 'pegs', provenLevels: 0, optimal: false, lowerBound: 35, ...more }) as SessionSuggestion;
 
   it.each<[Partial<SessionSuggestion>, string]>([
-    [{ provenLevels: 1 }, 'No order needs fewer pegs. Proved.'],
-    [{ provenLevels: 1, goal: 'stops' }, 'No order needs fewer stops. Proved.'],
-    [{ provenLevels: 2 }, 'No order needs fewer pegs, nor with these fewer stops. Proved.'],
-    [{ provenLevels: 7, optimal: true }, 'No order is better. Proved.'],
-    [{}, 'Every order needs at least 35 pegs; whether fewer than 40 do is not known.'],
+    [{ provenLevels: 1 }, 'No order of these tunes turns fewer pegs: proved.'],
+    [{ provenLevels: 1, goal: 'stops' }, 'No order of these tunes has fewer stops: proved.'],
+    [{ provenLevels: 2 }, 'No order of these tunes turns fewer pegs, or as few in fewer stops: proved.'],
+    [
+      { provenLevels: 7, optimal: true },
+      'No order of these tunes turns fewer pegs: proved, down to the last half step.',
+    ],
+    [{}, 'At least 35 pegs are needed; whether fewer than 40 are enough is not known.'],
+    [{ lowerBound: 0 }, 'Whether fewer than 40 pegs are enough is not known.'],
     [
       { stopped: 'time' },
-      'Every order needs at least 35 pegs; whether fewer than 40 do is not known. The search ran out of time.',
+      'At least 35 pegs are needed; whether fewer than 40 are enough is not known. The search ran out of time.',
     ],
   ])('%o: %s', (more, words) => {
-    expect(proofWords(known(more), 40)).toEqual({ words, proved: words.includes('Proved') });
+    expect(proofWords(known(more), 40)).toEqual({ words, proved: words.includes(': proved') });
   });
 });

@@ -4,7 +4,7 @@ import type { BoardOperation } from '@pegwell/shared/session/board-operations';
 import { builtInKind } from '@pegwell/shared/music/instrument';
 import type { ActionItem } from '../../ui/action-menu';
 import { newId } from '../../lib/new-id';
-import { entryTitle } from './hooks/board-state';
+import { entryTitle } from '../../music/entry-title';
 import { splitSet } from './set-menu';
 
 export interface CardDeeds {

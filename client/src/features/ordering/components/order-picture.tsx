@@ -1,32 +1,27 @@
 import type { Goal } from '@pegwell/shared/session/evening';
 import { tuningMinutes } from '@pegwell/shared/session/minutes';
-import { useMemo } from 'react';
 import { count, halfMinutes } from '../../../lib/format';
-import { StringLanes } from '../../../pictures/string-lanes';
+import { EveningLanes } from '../../../pictures/evening-lanes';
 import type { Compared } from '../compare';
 import styles from './suggestion.module.css';
+
+/** What is known about an order; see proofWords. */
+export interface Proof {
+  readonly proved: boolean;
+  readonly words: string;
+}
 
 interface OrderPictureProps {
   readonly compared: Compared;
   readonly goal: Goal;
   /** "as you have it", "suggested" */
   readonly heading: string;
-  readonly proof?: { readonly proved: boolean; readonly words: string };
+  readonly proof?: Proof;
 }
 
 /** One order: its figures in the goal's order, and its lanes. */
 export function OrderPicture({ compared, goal, heading, proof }: OrderPictureProps) {
   const { score, places, evening, board } = compared;
-  const sets = useMemo(
-    () =>
-      board.sets.map(({ entries }) => ({
-        entries: entries.map((entry) => ({ id: entry.id, title: entry.title ?? `${entry.key} tunes` })),
-      })),
-    [board.sets],
-  );
-  const turning = evening.chairs.filter(({ kind }) =>
-    places.some((place) => place.kinds.some((move) => move.kind === kind.id && move.pegChanges > 0)),
-  );
   const pegs = count(score.pegChanges, 'peg change');
   const stops = count(score.retuneStops, 'stop');
   const [first, second] = goal === 'pegs' ? [pegs, stops] : [stops, pegs];
@@ -46,14 +41,12 @@ export function OrderPicture({ compared, goal, heading, proof }: OrderPicturePro
         <p>{rest.filter(Boolean).join(' · ')}</p>
         {proof ? <p className={proof.proved ? styles.proved : styles.unproved}>{proof.words}</p> : null}
       </div>
-      <div className={styles.lanes}>
-        <StringLanes
-          chairs={turning.length > 0 ? turning : evening.chairs.slice(0, 1)}
-          sets={sets}
-          places={places}
-          label={`String lanes, ${heading}`}
-        />
-      </div>
+      <EveningLanes
+        board={board}
+        places={places}
+        chairs={evening.chairs}
+        label={`String lanes, ${heading}`}
+      />
     </section>
   );
 }

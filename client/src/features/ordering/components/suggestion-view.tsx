@@ -1,13 +1,14 @@
 import type { Session, ShownEntry } from '@pegwell/shared/contract/sessions';
 import type { Board } from '@pegwell/shared/session/board';
-import { useQuery } from '@tanstack/react-query';
-import { useId } from 'react';
-import { ProblemError } from '../../../lib/problem';
+import type { BoardOperation } from '@pegwell/shared/session/board-operations';
+import { useMemo, useState } from 'react';
 import { Button } from '../../../ui/button';
 import { PageHeading } from '../../../ui/page';
 import { Failing, Loading } from '../../../ui/states';
-import { askSuggestion } from '../api/suggestion';
-import type { Order } from '../compare';
+import { clashesOf } from '../clashes';
+import { useSuggestions, type Scope } from '../hooks/use-suggestions';
+import type { Taken } from '../taken';
+import { ClashView } from './clash-view';
 import { Comparison } from './comparison';
 
 interface SuggestionViewProps {
@@ -15,41 +16,27 @@ interface SuggestionViewProps {
   readonly board: Board<ShownEntry>;
   /** Saves what is not saved yet; false where that cannot be done now. */
   readonly save: () => Promise<boolean>;
-  readonly onTake: (label: string, version: number, order: Order) => void;
+  /** Does away with a rule that clashes. */
+  readonly perform: (label: string, operations: readonly BoardOperation<ShownEntry>[]) => boolean;
+  readonly onTake: (taken: Taken) => void;
   readonly onKeep: () => void;
 }
 
 /** A better order beside the host's own. Nothing changes until it is taken. */
-export function SuggestionView({ session, board, save, onTake, onKeep }: SuggestionViewProps) {
-  const { goal } = session;
-  const asked = useId();
-  const suggestion = useQuery({
-    queryKey: ['suggestion', session.id, goal, asked],
-    queryFn: async ({ signal }) => {
-      if (!(await save())) {
-        throw new ProblemError({
-          status: 0,
-          code: 'offline',
-          detail:
-            'An order is looked for on the server, and it cannot be reached. Your changes are kept here.',
-        });
-      }
-      return askSuggestion(session.id, { goal }, signal);
-    },
-    retry: false,
-    staleTime: Infinity,
-    gcTime: 0,
-    refetchOnWindowFocus: false,
-    refetchOnReconnect: false,
-  });
-  const again = () => void suggestion.refetch();
+export function SuggestionView({ session, board, save, perform, onTake, onKeep }: SuggestionViewProps) {
+  const [goal, setGoal] = useState(session.goal);
+  const [scope, setScope] = useState<Scope>(null);
+  const [round, setRound] = useState(0);
+  const setIds = useMemo(() => setsWorthAsking(session, board), [session, board]);
+  const { whole, of } = useSuggestions({ sessionId: session.id, goal, setIds, round, save });
+  const again = () => setRound(round + 1);
   const keep = (
     <Button look="outline" onClick={onKeep}>
       Keep mine
     </Button>
   );
 
-  if (suggestion.isFetching || suggestion.isPending) {
+  if (whole.isPending) {
     return (
       <>
         <PageHeading
@@ -62,16 +49,19 @@ export function SuggestionView({ session, board, save, onTake, onKeep }: Suggest
       </>
     );
   }
-  if (suggestion.isError) {
-    const clash = suggestion.error instanceof ProblemError && suggestion.error.code === 'rules-clash';
-    return (
+  if (whole.isError) {
+    const clashes = clashesOf(whole.error);
+    return clashes ? (
+      <ClashView
+        {...{ session, board, clashes, perform }}
+        sentence={whole.error.message}
+        onAgain={again}
+        onKeep={onKeep}
+      />
+    ) : (
       <>
         <PageHeading title={`An order for ${session.title}`} />
-        <Failing
-          title={clash ? 'No order keeps all your rules' : 'No order could be suggested'}
-          error={suggestion.error}
-          {...(clash ? {} : { onRetry: again })}
-        >
+        <Failing title="No order could be suggested" error={whole.error} onRetry={again}>
           {keep}
         </Failing>
       </>
@@ -79,12 +69,20 @@ export function SuggestionView({ session, board, save, onTake, onKeep }: Suggest
   }
   return (
     <Comparison
-      session={session}
-      board={board}
-      suggestion={suggestion.data}
-      onTake={onTake}
-      onKeep={onKeep}
+      {...{ session, board, goal, scope, setIds, of, onTake, onKeep }}
+      whole={whole.data}
+      onGoal={setGoal}
+      onScope={setScope}
       onAskAgain={again}
     />
   );
+}
+
+/** Where there are several sets: those with at least two tunes that may change places. */
+function setsWorthAsking(session: Session, board: Board<ShownEntry>): readonly string[] {
+  const called = new Set(session.status === 'live' ? session.called : []);
+  const filled = board.sets.filter(({ entries }) => entries.length > 0);
+  if (filled.length < 2) return [];
+  const free = (entry: ShownEntry) => !called.has(entry.id) && !entry.pinned;
+  return filled.filter(({ entries }) => entries.filter(free).length > 1).map(({ id }) => id);
 }

@@ -6,7 +6,7 @@ import { newId } from '../../../lib/new-id';
 import { Dialog } from '../../../ui/dialog';
 import { moveToPosition } from '../card-menu';
 import { entryOfOpenPlace, type AssumedFor } from '../entries';
-import { entryTitle } from '../hooks/board-state';
+import { entryTitle } from '../../../music/entry-title';
 import type { BoardInHand } from '../hooks/use-board';
 import { DetailsDialog } from './details-dialog';
 import { FollowDialog } from './follow-dialog';

@@ -7,7 +7,7 @@ import { ActionMenu, type ActionItem } from '../../../ui/action-menu';
 import { Button, LinkButton } from '../../../ui/button';
 import { PageHeading } from '../../../ui/page';
 import { sheetUrl } from '../api/session';
-import { chairWords } from '../changing-kinds';
+import { chairWords } from '../../../pictures/changing-kinds';
 import type { BoardInHand } from '../hooks/use-board';
 import type { ScoredBoard } from '../hooks/use-scored';
 import { Figures, otherFigures } from './figures';

@@ -12,7 +12,8 @@ import { useMedia } from '../../../lib/use-media';
 import { Button } from '../../../ui/button';
 import { useSay } from '../../../ui/status';
 import { cardMenu } from '../card-menu';
-import { partKinds } from '../changing-kinds';
+import { partKinds } from '../../../pictures/changing-kinds';
+import { EveningLanes } from '../../../pictures/evening-lanes';
 import { entryOfTune, eveningTuneOf, type AssumedFor } from '../entries';
 import { focusMenuOf } from '../focus';
 import type { BoardInHand } from '../hooks/use-board';
@@ -24,7 +25,6 @@ import { setMenu } from '../set-menu';
 import { spacedPairs } from '../spaced-pairs';
 import { BoardDialogs, type Asking } from './board-dialogs';
 import { BoardHead } from './board-head';
-import { BoardLanes } from './board-lanes';
 import { differenceWords } from './figures';
 import { Finder } from './finder';
 import { HeldContext } from './held-context';
@@ -56,7 +56,6 @@ export function Board({ held, mayChange, assumedFor, onSuggest, onGoal, onUpdate
   const wide = useMedia('(min-width: 861px)');
   const byId = useMemo(() => new Map(scored.places.map((place) => [place.before, place])), [scored.places]);
   const parted = useMemo(() => partKinds(scored.evening, scored.places), [scored]);
-  const draftParted = useMemo(() => partKinds(drafted.evening, drafted.places), [drafted]);
   const spaced = useMemo(() => spacedPairs(scored.evening), [scored.evening]);
   const { chairs } = scored.evening;
   const kinds = chairs.map(({ kind }) => kind.id);
@@ -135,10 +134,10 @@ export function Board({ held, mayChange, assumedFor, onSuggest, onGoal, onUpdate
         onDetails={() => setAsking({ what: 'details' })}
         onFollow={() => setAsking({ what: 'follow' })}
       />
-      <BoardLanes
+      <EveningLanes
         board={drag.draft ?? board}
         places={drafted.places}
-        {...draftParted}
+        chairs={chairs}
         highlight={drag.held?.id ?? nowId}
       />
       <div className={`${styles.columns} ${mayChange && wide ? '' : styles.alone}`}>

@@ -2,7 +2,7 @@ import type { ShownEntry } from '@pegwell/shared/contract/sessions';
 import { showTuned } from '@pegwell/shared/music/tuning';
 import type { Chair, Place } from '@pegwell/shared/session/evening';
 import { TuningText } from '../../../pictures/tuning-text';
-import { moveOfKind } from '../changing-kinds';
+import { moveOfKind } from '../../../pictures/changing-kinds';
 import styles from './tune-card.module.css';
 
 interface CardTuningsProps {

@@ -1,6 +1,6 @@
 import type { Chair, Place } from '@pegwell/shared/session/evening';
 import { ASSUMED_BREAK_MINUTES } from '@pegwell/shared/session/minutes';
-import { moves } from '../changing-kinds';
+import { moves } from '../../../pictures/changing-kinds';
 import { Retune } from './retune';
 import styles from './off-clock.module.css';
 

@@ -4,7 +4,7 @@ import { useState } from 'react';
 import { Button } from '../../../ui/button';
 import { Dialog } from '../../../ui/dialog';
 import { TextField } from '../../../ui/fields';
-import { entryTitle } from '../hooks/board-state';
+import { entryTitle } from '../../../music/entry-title';
 
 interface PositionDialogProps {
   readonly board: Board<ShownEntry>;

@@ -5,7 +5,7 @@ import type { Chair, KindMove, Place } from '@pegwell/shared/session/evening';
 import { stopMinutes } from '@pegwell/shared/session/minutes';
 import { count, halfMinutes } from '../../../lib/format';
 import { PegStrip } from '../../../pictures/peg-strip';
-import { chairWords, moveOfKind, moves } from '../changing-kinds';
+import { chairWords, moveOfKind, moves } from '../../../pictures/changing-kinds';
 import styles from './retune.module.css';
 
 interface RetuneProps {

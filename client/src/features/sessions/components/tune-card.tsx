@@ -3,7 +3,7 @@ import type { ShownEntry } from '@pegwell/shared/contract/sessions';
 import type { Chair, Place } from '@pegwell/shared/session/evening';
 import { ActionMenu, type ActionItem } from '../../../ui/action-menu';
 import { keyWords } from '../../../music/key-words';
-import { entryTitle } from '../hooks/board-state';
+import { entryTitle } from '../../../music/entry-title';
 import { CardTunings } from './card-tunings';
 import { DotsIcon, GripIcon, PinIcon } from './icons';
 import styles from './tune-card.module.css';

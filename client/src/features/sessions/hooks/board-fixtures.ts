@@ -101,7 +101,9 @@ export class BoardServer {
         return { ...known, pinned: entry.pinned ?? false, sitOut: entry.sitOut ?? [] };
       }),
     }));
-    const same = JSON.stringify(sets) === JSON.stringify(this.session.sets);
+    const { medleys = this.session.medleys, befores = this.session.befores } = body;
+    const stored = [this.session.sets, this.session.medleys, this.session.befores];
+    const same = JSON.stringify([sets, medleys, befores]) === JSON.stringify(stored);
     if (!same && body.version !== this.session.version) {
       return Promise.reject(
         new ProblemError({
@@ -112,7 +114,10 @@ export class BoardServer {
         }),
       );
     }
-    if (!same) this.session = { ...this.session, sets, version: this.session.version + 1, updatedBy: who };
+    if (!same) {
+      const version = this.session.version + 1;
+      this.session = { ...this.session, sets, medleys, befores, version, updatedBy: who };
+    }
     return this.failing === 'after' ? Promise.reject(offline) : Promise.resolve(this.session);
   }
 }

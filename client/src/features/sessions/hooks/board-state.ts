@@ -2,6 +2,7 @@ import type { Session, ShownEntry } from '@pegwell/shared/contract/sessions';
 import { entriesOf, standingOf, type Board } from '@pegwell/shared/session/board';
 import { boardBody } from '@pegwell/shared/session/board-body';
 import type { BoardOperation } from '@pegwell/shared/session/board-operations';
+import { entryTitle } from '../../../music/entry-title';
 
 /** How the board stands towards the server. `refused`: it does not take changes from us now. */
 export type Saving = 'saved' | 'waiting' | 'saving' | 'offline' | 'refused';
@@ -41,11 +42,6 @@ export function entryOf(operation: BoardOperation<ShownEntry>): string | null {
 export function setOf(operation: BoardOperation<ShownEntry>): string | null {
   if ('setId' in operation) return operation.setId;
   return operation.type === 'add-entry' ? operation.to.setId : null;
-}
-
-/** What an entry is called on screen. */
-export function entryTitle({ title, key, mode }: Pick<ShownEntry, 'title' | 'key' | 'mode'>): string {
-  return title ?? `${mode === 'major' ? key : `${key} ${mode}`} tunes`;
 }
 
 export function titleOf(board: Board<ShownEntry>, entryId: string): string | null {

@@ -4,7 +4,7 @@ import { setTitle, spotAt, standingOf, type Board } from '@pegwell/shared/sessio
 import { applyOperation } from '@pegwell/shared/session/board-operations';
 import { count } from '../../../lib/format';
 import { entryOfTune } from '../entries';
-import { entryTitle } from './board-state';
+import { entryTitle } from '../../../music/entry-title';
 import { slotOf, type DraggedEntry, type DraggedTune } from './drag-slots';
 import { scoreBoard } from './use-scored';
 

@@ -2,7 +2,8 @@ import type { ShownEntry } from '@pegwell/shared/contract/sessions';
 import type { Board } from '@pegwell/shared/session/board';
 import type { BoardOperation } from '@pegwell/shared/session/board-operations';
 import type { ProblemError } from '../../../lib/problem';
-import { entryOf, entryTitle, setOf, titleOf } from './board-state';
+import { entryTitle } from '../../../music/entry-title';
+import { entryOf, setOf, titleOf } from './board-state';
 import type { BoardAction } from './pending-storage';
 
 /**
@@ -49,6 +50,7 @@ export function lostSentences(
 ): readonly string[] {
   const sentences = skipped.map((operation) => {
     if (operation.type === 'add-entry') return `${entryTitle(operation.entry)} could not be added.`;
+    if (operation.type === 'set-rule') return 'A tune was taken out meanwhile, and its rule is left out.';
     const entryId = entryOf(operation);
     const title = entryId && titleOf(board, entryId);
     if (title) return `${title} was taken out meanwhile; what you did to it is left out.`;

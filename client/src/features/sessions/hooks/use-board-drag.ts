@@ -15,7 +15,7 @@ import { applyOperation, type BoardOperation } from '@pegwell/shared/session/boa
 import { useMemo, useState } from 'react';
 import { newId } from '../../../lib/new-id';
 import { entryOfTune } from '../entries';
-import { entryTitle } from './board-state';
+import { entryTitle } from '../../../music/entry-title';
 import type { BoardInHand } from './use-board';
 import { dragWords } from './drag-words';
 import {

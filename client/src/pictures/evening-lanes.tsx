@@ -1,25 +1,25 @@
-import { showTuned } from '@pegwell/shared/music/tuning';
 import type { ShownEntry } from '@pegwell/shared/contract/sessions';
+import { showTuned } from '@pegwell/shared/music/tuning';
 import type { Board } from '@pegwell/shared/session/board';
 import type { Chair, Place } from '@pegwell/shared/session/evening';
 import { useMemo } from 'react';
-import { listOf } from '../../../lib/format';
-import { StringLanes } from '../../../pictures/string-lanes';
-import { moveOfKind } from '../changing-kinds';
-import { entryTitle } from '../hooks/board-state';
-import styles from './board-lanes.module.css';
+import { listOf } from '../lib/format';
+import { entryTitle } from '../music/entry-title';
+import { moveOfKind, partKinds } from './changing-kinds';
+import { StringLanes } from './string-lanes';
+import styles from './evening-lanes.module.css';
 
-interface BoardLanesProps {
+interface EveningLanesProps {
   readonly board: Pick<Board<ShownEntry>, 'sets'>;
   readonly places: readonly Place[];
-  readonly changing: readonly Chair[];
-  readonly still: readonly Chair[];
+  /** Every kind that is in the room to retune. */
+  readonly chairs: readonly Chair[];
   readonly label?: string;
   readonly highlight?: string | null;
 }
 
-/** The lanes of the kinds that retune; those that stand all night are one line of words. */
-export function BoardLanes({ board, places, changing, still, label, highlight }: BoardLanesProps) {
+/** The lanes of the kinds that retune this evening; those that stand all night are folded into a line of words. */
+export function EveningLanes({ board, places, chairs, label, highlight }: EveningLanesProps) {
   const sets = useMemo(
     () =>
       board.sets.map(({ entries }) => ({
@@ -27,6 +27,7 @@ export function BoardLanes({ board, places, changing, still, label, highlight }:
       })),
     [board.sets],
   );
+  const { changing, still } = useMemo(() => partKinds({ chairs }, places), [chairs, places]);
   if (places.length === 0) return null;
   const shown = changing.length > 0 ? changing : still.slice(0, 1);
   const folded = changing.length > 0 ? still : still.slice(1);
