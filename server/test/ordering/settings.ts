@@ -4,7 +4,7 @@ import { SETTINGS, type SearchSettings } from '../../src/ordering/engine/search'
 export const BARE: SearchSettings = {
   ...SETTINGS,
   closerWidth: 1,
-  bounds: [{ limits: { joints: 400, together: 1, apart: 1 }, width: 1, share: Infinity }],
+  bounds: [{ limits: { joints: 400, together: 1, apart: 1 }, width: 1, improveSteps: 0, share: Infinity }],
   lookSteps: 1,
   cheapSweep: 0,
 };

@@ -6,7 +6,7 @@ import { SubsetTable, type Milestone } from './subset-table';
 import { TreeBound } from './tree-bound';
 import { TooManyStands, TuningMoves } from './tuning-moves';
 import type { Plan } from './units';
-import type { Weights } from './weights';
+import { mostPegs, type Weights } from './weights';
 
 /** How much may go into the table of all kinds together, and into each table of some kinds. */
 export interface BoundLimits {
@@ -32,6 +32,7 @@ const MOST_MILESTONES = 4;
 export class Bound {
   private readonly parts: readonly (readonly TuningBound[])[];
   private readonly milestones: readonly Milestone[];
+  private readonly mostPegs: number;
   /** By position: milestones at or after it. */
   private readonly milestonesAhead: Int32Array;
   /** By position: breaks at or after it, each of which may take one turning place off the clock. */
@@ -48,6 +49,7 @@ export class Bound {
     steps: Steps,
   ) {
     this.milestones = milestonesOf(plan);
+    this.mostPegs = mostPegs(compiled);
     const everyone = compiled.kinds.map((_, k) => k);
     const table = (kinds: readonly number[], work: number): SubsetTable | null => {
       try {
@@ -101,7 +103,8 @@ export class Bound {
       const stops = Math.max(0, turns - breaks);
       // With stops first, a table's pegs are the least only for its least turns.
       const known = this.goal === 'pegs' ? pegs : turns >= breaks ? sure : 0;
-      best = Math.max(best, known * this.weights.peg + stops * this.weights.stop);
+      // A tree is no order: it may cost more pegs than any order can.
+      best = Math.max(best, Math.min(known, this.mostPegs) * this.weights.peg + stops * this.weights.stop);
     }
     return best;
   }

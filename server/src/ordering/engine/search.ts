@@ -2,6 +2,7 @@ import { Bound, LARGE_BOUND, SMALL_BOUND, type BoundLimits } from './bound';
 import { compile, type Compiled } from './compiled';
 import { dealt, dealtApart } from './deal';
 import { someOrder } from './feasible';
+import { improved } from './improve';
 import { orderCost } from './order-cost';
 import type { OrderingProblem, Solution } from './ordering-problem';
 import { Stage } from './stage';
@@ -15,12 +16,13 @@ export interface SearchSettings {
   /** About how many steps a look may take. */
   readonly lookSteps: number;
   /**
-   * Bounds to try in turn, how many states are kept per position while looking for a good order under each, and
-   * the steps that the first stage may then take.
+   * Bounds to try in turn: how many states are kept per position while looking for a good order under each, the
+   * steps that moves of single tunes may take, and those that the first stage may take then.
    */
   readonly bounds: readonly {
     readonly limits: BoundLimits;
     readonly width: number;
+    readonly improveSteps: number;
     readonly share: number;
   }[];
   /** States kept per position while looking at a closer stage. */
@@ -32,8 +34,8 @@ export interface SearchSettings {
 export const SETTINGS: SearchSettings = {
   lookSteps: 800_000,
   bounds: [
-    { limits: SMALL_BOUND, width: 32, share: 60_000 },
-    { limits: LARGE_BOUND, width: 200, share: Infinity },
+    { limits: SMALL_BOUND, width: 32, improveSteps: 0, share: 60_000 },
+    { limits: LARGE_BOUND, width: 200, improveSteps: 600_000, share: Infinity },
   ],
   closerWidth: 24,
   cheapSweep: 5_000,
@@ -111,7 +113,7 @@ export class Search {
     const tunings = new Stage(compiled, plan, weights, 'tunings', steps);
     const swept = this.tuningsSwept(tunings);
     if (swept === null) return;
-    sweepBack(swept.swept, steps);
+    sweepBack(swept.swept, this.best.cost, steps);
     const keys = new Stage(compiled, plan, weights, 'keys', steps);
     const byTunings = { ...swept.base, coarse: swept.swept };
     this.look({ ...byTunings, stage: keys }, this.settings.closerWidth);
@@ -121,7 +123,7 @@ export class Search {
     // Only spaced rhythms stand between the bound and the best order known.
     const coarse = this.deepened({ ...byTunings, stage: keys });
     if (coarse === null) return;
-    sweepBack(coarse, steps);
+    sweepBack(coarse, this.best.cost, steps);
     const byKeys = { ...swept.base, coarse };
     this.look({ ...byKeys, stage: this.all }, this.settings.closerWidth);
     this.deepened({ ...byKeys, stage: this.all, together: true });
@@ -130,13 +132,14 @@ export class Search {
   /** The first stage, under a bound that is quickly made, and where that leaves too much, a better one. */
   private tuningsSwept(stage: Stage): { readonly swept: Swept; readonly base: Base } | null {
     const { compiled, plan, problem, weights, steps } = this;
-    for (const { limits, width, share } of this.settings.bounds) {
+    for (const { limits, width, improveSteps, share } of this.settings.bounds) {
       const bound = new Bound(compiled, plan, problem.goal, weights, limits, steps);
       const root = new Int32Array(stage.stride);
       stage.start(root);
       this.raise({ high: bound.toGo(stage, root, 0, 0), low: 0 });
       const base: Base = { bound, steps, keyWeight: weights.key };
       this.look({ ...base, stage, coarse: null }, width);
+      this.improve(improveSteps);
       try {
         const swept = this.deepened({ ...base, steps: steps.within(share), stage, coarse: null });
         return swept && { swept, base };
@@ -156,9 +159,8 @@ export class Search {
    */
   private deepened(base: Base & Pick<SweepOptions, 'stage' | 'coarse' | 'together'>): Swept | null {
     const { peg, stop } = this.weights;
-    const small = Math.min(peg, stop);
     const large = Math.max(peg, stop);
-    let rise = small;
+    let rise = Math.min(peg, stop);
     let dearest = this.settings.cheapSweep;
     for (;;) {
       const best = this.best!.cost;
@@ -170,11 +172,11 @@ export class Search {
       if (swept.best === null) {
         this.raise(isLess(swept.nextLeast, under) ? under : swept.nextLeast);
         if (under === best) return null;
-        // Where a higher ceiling hardly cost more, the next may rise further; else it feels its way, unless the
-        // best order known is so near that most of its levels are reached in a leap or two.
+        // Where a higher ceiling cost little more, the next rises further; and where the best order known is near,
+        // it is reached in a leap or two.
         const took = this.steps.taken - before;
         const gap = best.high - this.least.high;
-        rise = took < 1.5 * dearest ? 2 * rise : small;
+        rise = took < 3 * dearest ? 3 * rise : rise;
         if (gap <= 3 * large) rise = Math.max(rise, gap / 3);
         dearest = Math.max(dearest, took);
         continue;
@@ -185,6 +187,19 @@ export class Search {
       if (base.together || under === best || !isLess(under, this.best!.cost)) return swept;
       if (!isLess(this.least, this.best!.cost)) return null;
       return sweep({ ...base, under: this.best!.cost, width: Infinity });
+    }
+  }
+
+  /**
+   * The best order known, looked at with all levels in mind: the closer stages may never be reached. Done at a
+   * fixed point of the search, so that a larger budget goes on from where a smaller one ends.
+   */
+  private improve(share: number): void {
+    if (!isLess(this.least, this.best!.cost)) return;
+    const units = unitsOf(this.plan, this.best!.entries);
+    const { order, cost } = improved(this.all, units, this.steps.within(share));
+    if (isLess(cost, this.best!.cost)) {
+      this.best = { entries: order.flatMap((unit) => this.plan.units[unit]!.entries), cost };
     }
   }
 

@@ -25,7 +25,8 @@ interface Element {
  * must be visited at least once more.
  *
  * This is a shortest path over subsets (Held & Karp 1962), filled from the empty set up. Visiting a group
- * once is enough, because leaving a tune out never costs more (the triangle inequality). A visit is a
+ * once is enough, because leaving a tune out never costs more (the triangle inequality, with kinds that are silent
+ * at a tune free to turn along with others: see TuningMoves). A visit is a
  * group's *last*: so the groups that are done before a milestone have all their free entries before it, no
  * more of them than there are free positions; and those not done each have an entry after it. Medleys are
  * passed from end to end, and before/after pairs in their order. Other positions and breaks play no part, so

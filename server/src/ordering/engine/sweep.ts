@@ -82,6 +82,7 @@ export function sweep(options: SweepOptions): Swept {
     const layer = layers[position]!;
     if (layer.size > width) {
       exact = false;
+      states -= layer.size - width;
       narrow(layer, width);
     }
     for (let row = 0; row < layer.size; row++) {
@@ -174,10 +175,11 @@ export function sweep(options: SweepOptions): Swept {
 }
 
 /**
- * Sweeps back over what a sweep kept and writes down the cost to go from every state.
+ * Sweeps back over what a sweep kept and writes down the cost to go from every state through which an order can
+ * cost less than `under`; from the others it is infinite.
  * @throws OutOfSteps
  */
-export function sweepBack({ stage, layers }: Swept, steps: Steps): void {
+export function sweepBack({ stage, layers }: Swept, under: Cost, steps: Steps): void {
   const { plan } = stage;
   const count = plan.setStart.length;
   const successors = new Successors(stage, false);
@@ -190,6 +192,8 @@ export function sweepBack({ stage, layers }: Swept, steps: Steps): void {
     layer.toGoLow = toGoLow;
     if (position === count) continue;
     for (let row = 0; row < layer.size; row++) {
+      const least = { high: layer.leastHigh[row]!, low: layer.leastLow[row]! };
+      if (!isLess(least, under)) continue;
       successors.after(layer, row, position);
       steps.take((successors.count + 1) * stage.effort);
       for (let index = 0; index < successors.count; index++) {

@@ -29,6 +29,8 @@ export class TuningMoves {
   readonly moves: readonly (readonly (readonly TuningMove[])[])[];
   private readonly joints: number[][] = [];
   private readonly known = new Map<string, number>();
+  /** By kind: the tunings that tunes state. */
+  private readonly stated: readonly (readonly number[])[];
   private readonly peg: number;
   private readonly turn: number;
 
@@ -57,6 +59,7 @@ export class TuningMoves {
     this.turn = goal === 'pegs' ? 1 : dearest * most;
     if (dearest * most * most >= NEVER) throw new TooManyStands();
 
+    this.stated = kinds.map((_, index) => [...new Set(groups.flatMap((lists) => lists[index] ?? []))]);
     this.of(kinds.map((k) => compiled.kinds[k]!.tuningOf[compiled.kinds[k]!.opening]!));
     const moves: (readonly TuningMove[])[][] = [];
     for (let joint = 0; joint < this.joints.length; joint++) {
@@ -116,6 +119,11 @@ export class TuningMoves {
     return known;
   }
 
+  /**
+   * Every way to go on with a group. A kind that is silent there may turn along where another must turn anyway:
+   * the tune at which it really turned may be one that is left out, and then it turns here, at the next. Without
+   * that, leaving tunes out could cost a turning place more.
+   */
   private movesFrom(joint: number, lists: readonly (readonly number[] | null)[]): readonly TuningMove[] {
     const from = this.joints[joint]!;
     let partial = [{ tunings: [] as number[], pegs: 0 }];
@@ -123,7 +131,7 @@ export class TuningMoves {
       const { pegs, tunings: width } = this.compiled.kinds[this.kinds[index]!]!;
       const before = from[index]!;
       partial = partial.flatMap((way) =>
-        (list ?? [before]).map((after) => ({
+        (list ?? this.within(index, before)).map((after) => ({
           tunings: [...way.tunings, after],
           pegs: way.pegs + pegs[before * width + after]!,
         })),
@@ -134,8 +142,14 @@ export class TuningMoves {
       to: this.of(tunings),
       cost: pegs * this.peg + (pegs > 0 ? this.turn : 0),
     }));
-    // To stay is never worse than another way: what that reaches is reached from here for no more.
-    const still = moves.find(({ to, cost }) => to === joint && cost === 0);
-    return still ? [still] : moves;
+    // To rest is never worse than another way: what that reaches is reached from the next group for no more. But a
+    // search may go there all the same, so those stands are numbered too.
+    const rests = from.every((before, index) => lists[index]?.includes(before) ?? true);
+    return rests ? [{ to: joint, cost: 0 }] : moves;
+  }
+
+  /** Where a silent kind may go: it stays, or takes a tuning that some tune states. */
+  private within(index: number, before: number): readonly number[] {
+    return [before, ...this.stated[index]!.filter((tuning) => tuning !== before)];
   }
 }

@@ -24,13 +24,18 @@ export interface Weights {
   read(high: number, low: number): readonly number[];
 }
 
-export function weightsFor({ kinds, entries }: Compiled, goal: Goal): Weights {
+/** More pegs than any order can turn, over all chairs. */
+export function mostPegs({ kinds, entries }: Compiled): number {
+  return kinds.reduce((sum, kind) => sum + Math.max(0, ...kind.pegs), 0) * entries.length;
+}
+
+export function weightsFor(compiled: Compiled, goal: Goal): Weights {
+  const { kinds, entries } = compiled;
   const count = entries.length;
-  let pegs = 0;
+  const pegs = mostPegs(compiled);
   let semitones = 0;
   let capos = 0;
   for (const kind of kinds) {
-    pegs += Math.max(0, ...kind.pegs) * count;
     semitones += Math.max(0, ...kind.semitones) * count;
     if (new Set(kind.capoOf.slice(1)).size > 1) capos += kind.count * count;
   }
