@@ -41,6 +41,8 @@ export class ProblemFilter implements ExceptionFilter {
       response.destroy();
       return;
     }
+    // Whoever asked has gone, and the work was called off for that: there is nobody to tell, and no fault.
+    if (response.closed && isAbort(thrown)) return;
     const problem = toProblem(thrown);
     if (problem.code === 'internal') {
       const instance = `urn:uuid:${randomUUID()}`;
@@ -69,6 +71,11 @@ function toProblem(thrown: unknown): ProblemException {
     'internal',
     'Something went wrong on our side. Nothing that was saved is lost.',
   );
+}
+
+/** What an AbortSignal throws: a DOMException, which is not an Error of every realm. */
+function isAbort(thrown: unknown): boolean {
+  return typeof thrown === 'object' && thrown !== null && 'name' in thrown && thrown.name === 'AbortError';
 }
 
 function isAway(thrown: unknown): boolean {
