@@ -57,9 +57,12 @@ export function ClashView({ session, board, sentence, clashes, perform, onAgain,
               </ol>
               <p className={styles.what}>{out ? out.rule : 'Called already: it stays at its place'}</p>
               {out ? (
-                <Button look="outline" onClick={() => leave(out)}>
+                <Button
+                  look="outline"
+                  aria-label={`${out.does}: ${clash.ids.map(title).join(', ')}`}
+                  onClick={() => leave(out)}
+                >
                   {out.does}
-                  <span className="visually-hidden">: {clash.ids.map((id) => title(id)).join(', ')}</span>
                 </Button>
               ) : null}
             </li>
