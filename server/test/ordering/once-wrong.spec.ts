@@ -80,6 +80,18 @@ const CASES: readonly [string, OrderingProblem][] = [
       { '4': 1 },
     ),
   ],
+  [
+    'a tune that all could play as they stand is not drawn forward: all tune at it, for tunes in which some are silent',
+    evening('stops', { fiddle: 'AEAE', mandolin: 'GDAE' }, [
+      [
+        { key: 'D', fiddle: 'AEAC#' },
+        { key: 'D' },
+        { key: 'D', mandolin: 'ADAE' },
+        { fiddle: 'ADAE', mandolin: 'GDAE' },
+        { fiddle: 'ADAE or AEAC#', mandolin: 'GDAE or ADAE' },
+      ],
+    ]),
+  ],
 ];
 
 describe('evenings that went wrong once', () => {
