@@ -24,6 +24,8 @@ export class Successors {
   private readonly openFrom: number;
   /** By class: whether it shows a spaced rhythm, as far as the stage sees them. */
   private readonly spaced: Uint8Array;
+  /** By class: whether some kind that other tunes name is silent in it. */
+  private readonly silent: Uint8Array;
 
   /** @param together follow only one of the orders that are alike to this stage; see {@link staysTogether} */
   constructor(
@@ -46,6 +48,12 @@ export class Successors {
     this.spaced = Uint8Array.from(stage.members, ([unit]) => {
       const keys = [stage.headKey[unit!]!, stage.tailKey[unit!]!];
       return keys.some((key) => stage.pairHigh[key * stage.keys + key] !== 0) ? 1 : 0;
+    });
+    const { entries, kinds } = stage.joints.compiled;
+    const named = kinds.flatMap((_, k) => (entries.some(({ options }) => options[k] !== null) ? [k] : []));
+    this.silent = Uint8Array.from(stage.members, ([unit]) => {
+      const silentAt = (entry: number): boolean => named.some((k) => entries[entry]!.options[k] === null);
+      return named.length > 1 && plan.units[unit!]!.entries.some(silentAt) ? 1 : 0;
     });
     this.hasDeadlines = plan.units.some(({ after }) => after.length > 0);
   }
@@ -84,12 +92,13 @@ export class Successors {
   /**
    * Where no break and nothing fixed is ahead, an entry that fits what the last one left, at no cost at all, may
    * as well come next: wherever an order has it, drawn forward to here it costs nothing, and the gap it leaves
-   * costs no more than it did (the triangle inequality). Not so for spaced rhythms, which it may keep apart.
+   * costs no more than it did (the triangle inequality). Not so for spaced rhythms, which it may keep apart, nor
+   * where kinds are silent later: two may have turned at it together that now turn at two tunes.
    * What is left out so has its like at this stage, but not at a finer one: no table may be read from it.
    */
   private staysTogether(rows: Int32Array, at: number): boolean {
     const { stage } = this;
-    if (this.spacedLeft(rows, at) > 1) return false;
+    if (this.left(this.spaced, rows, at) > 1 || this.left(this.silent, rows, at) > 0) return false;
     const joint = rows[at + stage.words]!;
     for (let c = 0; c < stage.members.length; c++) {
       if (this.spaced[c] === 1 || stage.left(rows, at, c) === 0) continue;
@@ -111,12 +120,11 @@ export class Successors {
     return false;
   }
 
-  /** Units left that show a spaced rhythm, as far as this stage sees it. */
-  private spacedLeft(rows: Int32Array, at: number): number {
-    let spaced = 0;
-    for (let c = 0; c < this.spaced.length; c++)
-      if (this.spaced[c] === 1) spaced += this.stage.left(rows, at, c);
-    return spaced;
+  /** Units left of the classes marked. */
+  private left(marked: Uint8Array, rows: Int32Array, at: number): number {
+    let count = 0;
+    for (let c = 0; c < marked.length; c++) if (marked[c] === 1) count += this.stage.left(rows, at, c);
+    return count;
   }
 
   private mayCome(earlier: readonly number[], rows: Int32Array, at: number, position: number): boolean {
