@@ -14,21 +14,16 @@ export interface FinderQuery {
 /** By title, or as the evening stands: what costs least comes first. */
 export type FinderSort = 'title' | 'price';
 
-/** Whose tunes, and for which evening; a newer version of its board has other prices. */
+/** Whose tunes, and for which evening. */
 export interface FinderPlace {
   readonly circleId: string;
   readonly sessionId: string;
-  readonly version: number;
 }
 
 export const FINDER_PAGE = 30;
 
-export const finderKey = (
-  { circleId, sessionId, version }: FinderPlace,
-  query: FinderQuery,
-  sort: FinderSort,
-) =>
-  ['circle', circleId, 'tunes', 'finder', query, ...(sort === 'price' ? [sessionId, version] : [])] as const;
+export const finderKey = ({ circleId, sessionId }: FinderPlace, query: FinderQuery, sort: FinderSort) =>
+  ['circle', circleId, 'tunes', 'finder', query, ...(sort === 'price' ? [sessionId] : [])] as const;
 
 export async function findTunes(
   { circleId, sessionId }: FinderPlace,

@@ -58,7 +58,7 @@ export function Board({ held, mayChange, assumedFor, onSuggest, onGoal, onUpdate
   const parted = useMemo(() => partKinds(scored.evening, scored.places), [scored]);
   const spaced = useMemo(() => spacedPairs(scored.evening), [scored.evening]);
   const { chairs } = scored.evening;
-  const kinds = chairs.map(({ kind }) => kind.id);
+  const kinds = useMemo(() => chairs.map(({ kind }) => kind.id), [chairs]);
   const changing = parted.changing.length > 0 ? parted.changing : chairs.slice(0, 1);
   const nowId = session.status === 'live' ? session.nowEntryId : null;
   const firstFree = nowId === null ? 0 : (standingOf(board, nowId)?.position ?? -1) + 1;
@@ -81,21 +81,25 @@ export function Board({ held, mayChange, assumedFor, onSuggest, onGoal, onUpdate
     [perform, say, held],
   );
 
-  const add = (tune: Tune) => {
-    const entry = entryOfTune(tune, newId());
-    const price = new Insertions(scored.evening, nowId === null ? 0 : 1).cheapest(eveningTuneOf(tune));
-    const spot = price && spotOfPrice(board, price, nowId);
-    const first = newId();
-    const operations: BoardOperation<ShownEntry>[] = spot
-      ? [{ type: 'add-entry', entry, to: spot }]
-      : [
-          { type: 'add-set', setId: first, title: '', after: null },
-          { type: 'add-entry', entry, to: spotAt(board, first, 0) },
-        ];
-    if (!perform(`Added ${tune.title}`, operations)) return;
-    const where = price && spot ? placeWords(board, price, nowId) : 'to the first set';
-    say(`${tune.title} added ${where}.`, { label: 'Undo', onPress: () => held.takeBack() });
-  };
+  const { takeBack } = held;
+  const add = useCallback(
+    (tune: Tune) => {
+      const entry = entryOfTune(tune, newId());
+      const price = new Insertions(scored.evening, nowId === null ? 0 : 1).cheapest(eveningTuneOf(tune));
+      const spot = price && spotOfPrice(board, price, nowId);
+      const first = newId();
+      const operations: BoardOperation<ShownEntry>[] = spot
+        ? [{ type: 'add-entry', entry, to: spot }]
+        : [
+            { type: 'add-set', setId: first, title: '', after: null },
+            { type: 'add-entry', entry, to: spotAt(board, first, 0) },
+          ];
+      if (!perform(`Added ${tune.title}`, operations)) return;
+      const where = price && spot ? placeWords(board, price, nowId) : 'to the first set';
+      say(`${tune.title} added ${where}.`, { label: 'Undo', onPress: takeBack });
+    },
+    [board, nowId, perform, say, scored.evening, takeBack],
+  );
 
   const addSet = () => {
     const setId = newId();

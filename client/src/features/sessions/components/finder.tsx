@@ -3,7 +3,7 @@ import type { Tune } from '@pegwell/shared/contract/tunes';
 import type { Evening } from '@pegwell/shared/session/evening';
 import { Insertions } from '@pegwell/shared/session/insert';
 import { useInfiniteQuery } from '@tanstack/react-query';
-import { useDeferredValue, useMemo, useRef, useState } from 'react';
+import { memo, useDeferredValue, useEffect, useMemo, useRef, useState } from 'react';
 import { ProblemError } from '../../../lib/problem';
 import { useDebounced } from '../../../lib/use-debounced';
 import { Button } from '../../../ui/button';
@@ -31,7 +31,7 @@ const NO_FILTER: FinderFilter = { key: '', kind: 'fiddle', tuning: '' };
 
 /** The circle's tunes, each with what it would cost at its cheapest place. */
 export function Finder({ session, evening, board, nowEntryId, kinds, ...row }: FinderProps) {
-  const place = { circleId: session.circleId, sessionId: session.id, version: session.version };
+  const place = { circleId: session.circleId, sessionId: session.id };
   const [search, setSearch] = useState('');
   const [filter, setFilter] = useState<FinderFilter>({ ...NO_FILTER, kind: kinds[0] ?? 'fiddle' });
   const [sort, setSort] = useState<FinderSort>('title');
@@ -46,21 +46,26 @@ export function Finder({ session, evening, board, nowEntryId, kinds, ...row }: F
     initialPageParam: 1,
     getNextPageParam: ({ page, total }) => (page * FINDER_PAGE < total ? page + 1 : undefined),
     placeholderData: (before) => before,
+    // An order by price is that of the board as it was when it was asked for.
+    ...(sort === 'price' && { staleTime: 0 }),
   });
+  // Another board, as it is saved, has other prices: all that is listed is put in order anew.
+  const { refetch } = found;
+  const { version } = session;
+  const sorted = useRef(version);
+  useEffect(() => {
+    if (sort === 'price' && sorted.current !== version) void refetch();
+    sorted.current = version;
+  }, [version, sort, refetch]);
   const tunes = useMemo<readonly Tune[]>(
     () => found.data?.pages.flatMap(({ items }) => items) ?? [],
     [found.data],
   );
   // A card that moves is not held up by prices: rows follow the board when there is time.
   const stands = useDeferredValue(
-    useMemo(() => ({ evening, board, nowEntryId }), [evening, board, nowEntryId]),
-  );
-  const insertions = useMemo(
-    () => new Insertions(stands.evening, stands.nowEntryId === null ? 0 : 1),
-    [stands],
+    useMemo(() => ({ evening, board, nowEntryId, tunes }), [evening, board, nowEntryId, tunes]),
   );
   const total = found.data?.pages[0]?.total ?? 0;
-  const list = useRef<HTMLOListElement>(null);
   const refused = tuningProblem(found.error);
   const narrowed = asked.search !== '' || asked.key !== '' || asked.tuning !== '';
 
@@ -100,19 +105,7 @@ export function Finder({ session, evening, board, nowEntryId, kinds, ...row }: F
             : 'This circle has no tunes yet. Add or import some under Tunes.'}
         </p>
       ) : null}
-      <ol className={styles.list} ref={list}>
-        {tunes.map((tune) => (
-          <FinderRow
-            key={tune.id}
-            tune={tune}
-            insertions={insertions}
-            board={stands.board}
-            nowEntryId={stands.nowEntryId}
-            kinds={kinds}
-            {...row}
-          />
-        ))}
-      </ol>
+      <Rows {...stands} {...row} kinds={kinds} />
       {found.hasNextPage ? (
         <Button
           look="plain"
@@ -126,6 +119,26 @@ export function Finder({ session, evening, board, nowEntryId, kinds, ...row }: F
     </div>
   );
 }
+
+interface RowsProps extends Omit<FinderRowProps, 'tune' | 'insertions'> {
+  readonly tunes: readonly Tune[];
+  readonly evening: Evening;
+}
+
+/** Looked at again only when the board or the tunes are others: not with every key that is pressed. */
+const Rows = memo(function Rows({ tunes, evening, ...row }: RowsProps) {
+  const insertions = useMemo(
+    () => new Insertions(evening, row.nowEntryId === null ? 0 : 1),
+    [evening, row.nowEntryId],
+  );
+  return (
+    <ol className={styles.list}>
+      {tunes.map((tune) => (
+        <FinderRow key={tune.id} tune={tune} insertions={insertions} {...row} />
+      ))}
+    </ol>
+  );
+});
 
 /** The sentence that refuses the tuning that is looked for. */
 function tuningProblem(error: unknown): string | undefined {
