@@ -16,10 +16,11 @@ interface EveningLanesProps {
   readonly chairs: readonly Chair[];
   readonly label?: string;
   readonly highlight?: string | null;
+  readonly roomBefore?: boolean;
 }
 
 /** The lanes of the kinds that retune this evening; those that stand all night are folded into a line of words. */
-export function EveningLanes({ board, places, chairs, label, highlight }: EveningLanesProps) {
+export function EveningLanes({ board, places, chairs, label, highlight, roomBefore }: EveningLanesProps) {
   const sets = useMemo(
     () =>
       board.sets.map(({ entries }) => ({
@@ -39,6 +40,7 @@ export function EveningLanes({ board, places, chairs, label, highlight }: Evenin
         places={places}
         highlight={highlight ?? null}
         {...(label ? { label } : {})}
+        {...(roomBefore ? { roomBefore } : {})}
       />
       {folded.length > 0 ? <p className={styles.still}>{stillWords(folded, places)}</p> : null}
     </div>

@@ -38,6 +38,15 @@ describe('layoutLanes', () => {
     expect(run && stopX(run, run.tunes[0]!)).toBe(NAMES + GAP / 2);
   });
 
+  it('keeps that gap where another order needs it, so that columns stand under each other', () => {
+    const still = pictured({ fiddle: 1 }, [['GDAE', 'AEAE']]);
+    const turned = pictured({ fiddle: 1 }, [['AEAE', 'GDAE']]);
+    const xs = (evening: typeof still) =>
+      layoutLanes(evening.sets, evening.places, 900, true).rows[0]?.runs[0]?.tunes.map(({ x }) => x);
+    expect(xs(still)).toEqual(xs(turned));
+    expect(layoutLanes(still.sets, still.places, 900).rows[0]?.runs[0]?.lead).toBe('none');
+  });
+
   it('leaves out empty sets and lays out nothing for an empty evening', () => {
     const one = pictured({ fiddle: 1 }, [['GDAE'], [], ['GDAE']]);
     expect(layoutLanes(one.sets, one.places, 900).rows[0]?.runs).toHaveLength(2);

@@ -63,7 +63,7 @@ interface Part {
 }
 
 /** The sets that have tunes, numbered, each tune with the place before it. */
-function partsOf(sets: readonly LanesSet[], places: readonly Place[]): readonly Part[] {
+function partsOf(sets: readonly LanesSet[], places: readonly Place[], roomBefore: boolean): readonly Part[] {
   const before = new Map(places.map((place) => [place.before, place]));
   let number = 0;
   const filled = sets
@@ -78,7 +78,7 @@ function partsOf(sets: readonly LanesSet[], places: readonly Place[]): readonly 
   return filled.map((tunes, index) => {
     if (index > 0) return { lead: 'break', tunes };
     const turnsFirst = (tunes[0]?.place.pegChanges ?? 0) > 0;
-    return { lead: turnsFirst ? 'opening' : 'none', tunes };
+    return { lead: turnsFirst || roomBefore ? 'opening' : 'none', tunes };
   });
 }
 
@@ -96,9 +96,17 @@ function cut(part: Part, room: number): readonly Part[] {
   })).filter(({ tunes }) => tunes.length > 0);
 }
 
-/** @param width of the whole picture in px. */
-export function layoutLanes(sets: readonly LanesSet[], places: readonly Place[], width: number): LanesLayout {
-  const parts = partsOf(sets, places);
+/**
+ * @param width of the whole picture in px
+ * @param roomBefore whether the first tune has a gap before it though nothing is turned there
+ */
+export function layoutLanes(
+  sets: readonly LanesSet[],
+  places: readonly Place[],
+  width: number,
+  roomBefore = false,
+): LanesLayout {
+  const parts = partsOf(sets, places, roomBefore);
   const room = width - NAMES - 2;
   const fits = tunesOf(parts) * LEAST_COLUMN + leadsOf(parts) <= room;
   const rows = fits ? [parts] : parts.flatMap((part) => cut(part, room).map((piece) => [piece]));

@@ -84,7 +84,7 @@ export function LanesRow({ row, column, width, chairs, named, highlight }: Lanes
         )),
       )}
       {row.runs.map((run) =>
-        run.lead === 'opening' || run.lead === 'break' ? (
+        run.lead === 'break' || (run.lead === 'opening' && run.tunes[0]?.place.pegChanges) ? (
           <text
             key={run.x}
             className={styles.offWords}

@@ -18,17 +18,26 @@ interface StringLanesProps {
   readonly label?: string;
   /** The tune that is played now or held in the hand. */
   readonly highlight?: string | null;
+  /** Leaves room for turns before the first tune, so that two orders stand column under column. */
+  readonly roomBefore?: boolean;
 }
 
 /**
  * The evening's retuning at a glance. Time runs to the right, each string is a lane, each turned peg a
  * step, each break a gap off the clock; on top of each stop what it costs over all chairs.
  */
-export function StringLanes({ chairs, sets, places, label = 'String lanes', highlight }: StringLanesProps) {
+export function StringLanes({
+  chairs,
+  sets,
+  places,
+  label = 'String lanes',
+  highlight,
+  roomBefore = false,
+}: StringLanesProps) {
   const figure = useRef<HTMLElement>(null);
   const width = useWidth(figure, 1180);
   const [picked, setPicked] = useState<string | null>(null);
-  const layout = layoutLanes(sets, places, width);
+  const layout = layoutLanes(sets, places, width, roomBefore);
   const sentences = lanesSentences(chairs, sets, places);
 
   // Where the evening takes several rows, a phone or a long night, one instrument is shown at a time.

@@ -17,10 +17,12 @@ interface OrderPictureProps {
   /** "as you have it", "suggested" */
   readonly heading: string;
   readonly proof?: Proof;
+  /** Whether another order, beside it, turns pegs before its first tune. */
+  readonly roomBefore?: boolean;
 }
 
 /** One order: its figures in the goal's order, and its lanes. */
-export function OrderPicture({ compared, goal, heading, proof }: OrderPictureProps) {
+export function OrderPicture({ compared, goal, heading, proof, roomBefore = false }: OrderPictureProps) {
   const { score, places, evening, board } = compared;
   const pegs = count(score.pegChanges, 'peg change');
   const stops = count(score.retuneStops, 'stop');
@@ -46,6 +48,7 @@ export function OrderPicture({ compared, goal, heading, proof }: OrderPicturePro
         places={places}
         chairs={evening.chairs}
         label={`String lanes, ${heading}`}
+        roomBefore={roomBefore}
       />
     </section>
   );

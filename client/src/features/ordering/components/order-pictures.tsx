@@ -22,8 +22,10 @@ const ORDERS = [
 export function OrderPictures({ before, after, goal, proof }: OrderPicturesProps) {
   const phone = useMedia('(max-width: 600px)');
   const [shown, setShown] = useState<(typeof ORDERS)[number]['value']>('suggested');
-  const mine = <OrderPicture compared={before} goal={goal} heading="as you have it" />;
-  const suggested = <OrderPicture compared={after} goal={goal} heading="suggested" proof={proof} />;
+  const roomBefore = [before, after].some(({ places }) => (places[0]?.pegChanges ?? 0) > 0);
+  const common = { goal, roomBefore };
+  const mine = <OrderPicture compared={before} heading="as you have it" {...common} />;
+  const suggested = <OrderPicture compared={after} heading="suggested" proof={proof} {...common} />;
   return phone ? (
     <div className={styles.orders}>
       <ChoiceSwitch legend="Lanes of which order" choices={ORDERS} value={shown} onChoose={setShown} />
