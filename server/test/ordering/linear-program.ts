@@ -52,7 +52,7 @@ const sumOf = (terms: readonly Term[]): string =>
   terms.map(([factor, name]) => `${factor < 0 ? '-' : '+'} ${Math.abs(factor)} ${name}`).join(' ');
 
 /**
- * HiGHS, compiled to WebAssembly, one thread; its own defaults.
+ * HiGHS, compiled to WebAssembly, one thread; its own settings but for the gap at which it ends.
  * @returns the least value of a program whose costs are whole; null where nothing keeps all its rows
  */
 export async function startHighs(): Promise<(program: LinearProgram) => number | null> {
