@@ -61,6 +61,16 @@ describe('a better order for an evening of 24 tunes', () => {
       text.trim(),
     );
 
+  /** Cards that are on their way. */
+  const travelling = (page: Page) =>
+    page.evaluate(
+      () =>
+        document.getAnimations().filter((each) => {
+          const target = (each.effect as KeyframeEffect | null)?.target;
+          return target instanceof HTMLElement && target.dataset['entry'] !== undefined;
+        }).length,
+    );
+
   /** What the stateless score says of tunes in an order, by title; it knows nothing of the page. */
   async function scoreOf(sets: readonly (readonly string[])[]): Promise<ScoreAnswer['score']> {
     const { chairs, openings, sets: own } = await session();
@@ -109,6 +119,11 @@ describe('a better order for an evening of 24 tunes', () => {
 
   it('tells of each stop why it counts', async () => {
     const stop = host.getByRole('region', { name: 'First set' }).locator('details').first();
+    // In sight the cards travel first; then things are where a hand finds them.
+    await stop.scrollIntoViewIfNeeded();
+    await host.mouse.wheel(0, 500);
+    await host.waitForTimeout(300);
+    await expect.poll(() => travelling(host), { timeout: SOON }).toBe(0);
     expect(await stop.innerText()).toMatch(/\d+ fiddles: [ADEG] peg (up|down) .*, to [A-G]#?/);
     await stop.locator('summary').click();
     await stop.getByText(/^A stop inside a set: the room waits about/).waitFor();
@@ -125,20 +140,12 @@ describe('a better order for an evening of 24 tunes', () => {
       await first.waitFor();
       await first.scrollIntoViewIfNeeded();
       await page.mouse.wheel(0, 500);
-      const travelling = () =>
-        page.evaluate(
-          () =>
-            document.getAnimations().filter((each) => {
-              const target = (each.effect as KeyframeEffect | null)?.target;
-              return target instanceof HTMLElement && target.dataset['entry'] !== undefined;
-            }).length,
-        );
       if (reducedMotion === 'reduce') {
         await page.waitForTimeout(600);
-        expect(await travelling()).toBe(0);
+        expect(await travelling(page)).toBe(0);
       } else {
-        await expect.poll(travelling, { timeout: SOON, interval: 50 }).toBeGreaterThan(12);
-        await expect.poll(travelling, { timeout: SOON }).toBe(0);
+        await expect.poll(() => travelling(page), { timeout: SOON, interval: 50 }).toBeGreaterThan(12);
+        await expect.poll(() => travelling(page), { timeout: SOON }).toBe(0);
       }
       await context.close();
     }
@@ -197,22 +204,17 @@ describe('a better order for an evening of 24 tunes', () => {
   });
 
   it('says at the cards they are about which rules clash, and finds an order without one', async () => {
-    const { version, sets } = await session();
-    const id = (title: string) =>
-      sets.flatMap((set) => set.entries).find((entry) => entry.title === title)?.id;
-    const [early, late] = [id('Sandy River Belle'), id("Bonaparte's Retreat")];
-    const rules = await host.request.put(`/api/sessions/${seeded.session.id}/board`, {
-      data: {
-        version,
-        sets: sets.map((set) => ({
-          id: set.id,
-          entries: set.entries.map((entry) => ({ id: entry.id, pinned: [early, late].includes(entry.id) })),
-        })),
-        befores: [[late, early]],
-      },
-    });
-    expect(rules.status()).toBe(200);
-    await host.reload();
+    const choose = async (title: string, word: string) => {
+      await host.getByRole('button', { name: `What to do with ${title}`, exact: true }).click();
+      await host.getByRole('menuitem', { name: word }).click();
+    };
+    await choose('Sandy River Belle', 'Pin to this place');
+    await choose("Bonaparte's Retreat", 'Pin to this place');
+    await choose("Bonaparte's Retreat", 'Must come before …');
+    const dialog = host.getByRole('dialog', { name: "Bonaparte's Retreat must come before" });
+    await dialog.getByLabel('A tune of this evening').selectOption({ label: '3 Sandy River Belle' });
+    await dialog.getByRole('button', { name: 'Keep it so' }).click();
+    await host.getByText('D · march · before Sandy River Belle').waitFor();
     await host.getByRole('button', { name: 'Suggest an order' }).click();
     await host.getByRole('heading', { name: 'No order keeps all your rules' }).waitFor();
     expect(await host.getByRole('alert').innerText()).toBe(

@@ -8,6 +8,7 @@ import { boardOf } from './hooks/board-state';
 import { scoreBoard } from './hooks/use-scored';
 import { differenceWords, offClockWords } from './components/figures';
 import { placeOnBoard, priceWords } from './price-words';
+import { ruleMenu, ruleWords } from './rules';
 import { setMenu, splitSet } from './set-menu';
 
 const [a, b, c, d] = [1, 2, 3, 4].map((number) => shownEntry(number, 'ABCD'[number - 1]!)) as [
@@ -63,7 +64,13 @@ describe('moving by menu', () => {
     if (expected[2] === '') expect(shape(moved)).toEqual(expected);
   });
 
-  const deeds = () => ({ perform: vi.fn(), askPosition: vi.fn(), editOpenPlace: vi.fn(), rename: vi.fn() });
+  const deeds = () => ({
+    perform: vi.fn(),
+    askPosition: vi.fn(),
+    askBefore: vi.fn(),
+    editOpenPlace: vi.fn(),
+    rename: vi.fn(),
+  });
 
   it('goes up over the head of a set, to the end of the one before', () => {
     const done = deeds();
@@ -107,6 +114,57 @@ describe('moving by menu', () => {
       .find(({ id }) => id === 'remove')!
       .onSelect();
     expect(after(...(done.perform.mock.calls[0]![1] as BoardOperation<ShownEntry>[]))).toEqual(['CD', '']);
+  });
+});
+
+describe('rules between tunes', () => {
+  const ruled = (medleys: string[][], befores: [string, string][] = []): Board<ShownEntry> => ({
+    ...board,
+    ...{ medleys, befores },
+  });
+  const items = (value: Board<ShownEntry>, entry: ShownEntry, above?: ShownEntry) => {
+    const deeds = { perform: vi.fn(), askBefore: vi.fn() };
+    return { deeds, menu: ruleMenu(value, entry, above, deeds) };
+  };
+  const medleysAfter = (value: Board<ShownEntry>, entry: ShownEntry, above: ShownEntry) => {
+    const { deeds, menu } = items(value, entry, above);
+    menu.find(({ id }) => id === 'medley')!.onSelect();
+    const [, operations] = deeds.perform.mock.calls[0] as [string, BoardOperation<ShownEntry>[]];
+    return applyOperations(value, operations).board.medleys;
+  };
+
+  it('makes a medley with the tune above, longer ones of what is there, and parts it again', () => {
+    expect(medleysAfter(ruled([]), b, a)).toEqual([[a.id, b.id]]);
+    expect(medleysAfter(ruled([[a.id, b.id]]), c, b)).toEqual([[a.id, b.id, c.id]]);
+    expect(
+      medleysAfter(
+        ruled([
+          [a.id, b.id],
+          [c.id, d.id],
+        ]),
+        c,
+        b,
+      ),
+    ).toEqual([[a.id, b.id, c.id, d.id]]);
+    expect(medleysAfter(ruled([[a.id, b.id, c.id]]), c, b)).toEqual([[a.id, b.id]]);
+    // Not with a tune that stands in the middle of another medley.
+    expect(items(ruled([[a.id, d.id]]), b, a).menu.map(({ id }) => id)).toEqual(['before']);
+  });
+
+  it('lets go of a pair, and says on the card what holds', () => {
+    const value = ruled([[a.id, b.id]], [[b.id, d.id]]);
+    const { deeds, menu } = items(value, b, a);
+    expect(menu.map(({ label }) => label)).toEqual([
+      'No medley with A',
+      'Must come before …',
+      'Need not come before D',
+    ]);
+    menu[2]!.onSelect();
+    expect(deeds.perform).toHaveBeenCalledWith('B may come after D', [
+      { type: 'set-rule', rule: 'before', ids: [b.id, d.id], holds: false },
+    ]);
+    expect(ruleWords(value).get(b.id)).toEqual(['medley with A', 'before D']);
+    expect(ruleWords(value).get(a.id)).toBeUndefined();
   });
 });
 

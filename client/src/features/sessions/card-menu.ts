@@ -5,11 +5,13 @@ import { builtInKind } from '@pegwell/shared/music/instrument';
 import type { ActionItem } from '../../ui/action-menu';
 import { newId } from '../../lib/new-id';
 import { entryTitle } from '../../music/entry-title';
+import { ruleMenu } from './rules';
 import { splitSet } from './set-menu';
 
 export interface CardDeeds {
   readonly perform: (label: string, operations: readonly BoardOperation<ShownEntry>[]) => void;
   readonly askPosition: (entry: ShownEntry) => void;
+  readonly askBefore: (entry: ShownEntry) => void;
   readonly editOpenPlace: (entry: ShownEntry) => void;
 }
 
@@ -128,6 +130,7 @@ export function cardMenu(
     }),
   ];
 
+  const rules = ruleMenu(board, entry, set.entries[index - 1], deeds);
   const last: ActionItem[] = [
     ...(entry.open
       ? [{ id: 'edit', label: 'Change the open place …', onSelect: () => deeds.editOpenPlace(entry) }]
@@ -138,5 +141,5 @@ export function cardMenu(
       onSelect: () => deeds.perform(`Took out ${title}`, [{ type: 'remove-entry', entryId: entry.id }]),
     },
   ];
-  return isCalled ? [flags.slice(0, 1)] : [moves, flags, last];
+  return isCalled ? [flags.slice(0, 1)] : [moves, flags, rules, last];
 }

@@ -8,6 +8,7 @@ import { moveToPosition } from '../card-menu';
 import { entryOfOpenPlace, type AssumedFor } from '../entries';
 import { entryTitle } from '../../../music/entry-title';
 import type { BoardInHand } from '../hooks/use-board';
+import { BeforeDialog } from './before-dialog';
 import { DetailsDialog } from './details-dialog';
 import { FollowDialog } from './follow-dialog';
 import { OpenPlaceDialog } from './open-place-dialog';
@@ -17,7 +18,7 @@ import { RenameDialog } from './rename-dialog';
 /** What the host is asked about now. */
 export type Asking =
   | { readonly what: 'finder' | 'details' | 'follow' }
-  | { readonly what: 'position'; readonly entry: ShownEntry }
+  | { readonly what: 'position' | 'before'; readonly entry: ShownEntry }
   | { readonly what: 'rename'; readonly setId: string }
   | { readonly what: 'open'; readonly setId: string; readonly entry: ShownEntry | null };
 
@@ -61,6 +62,19 @@ export function BoardDialogs(props: BoardDialogsProps) {
             close();
             const operation = moveToPosition(board, asking.entry.id, position);
             if (operation) act(`Moved ${entryTitle(asking.entry)} to ${position + 1}`, [operation]);
+          }}
+        />
+      ) : null}
+      {asking?.what === 'before' ? (
+        <BeforeDialog
+          board={board}
+          entry={asking.entry}
+          onClose={close}
+          onSave={(other) => {
+            close();
+            act(`${entryTitle(asking.entry)} comes before ${entryTitle(other)}`, [
+              { type: 'set-rule', rule: 'before', ids: [asking.entry.id, other.id], holds: true },
+            ]);
           }}
         />
       ) : null}

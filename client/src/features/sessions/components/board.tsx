@@ -21,6 +21,7 @@ import { useBoardDrag } from '../hooks/use-board-drag';
 import { useScored } from '../hooks/use-scored';
 import { useUndoKeys } from '../hooks/use-undo-keys';
 import { placeWords, spotOfPrice } from '../price-words';
+import { ruleWords } from '../rules';
 import { setMenu } from '../set-menu';
 import { spacedPairs } from '../spaced-pairs';
 import { BoardDialogs, type Asking } from './board-dialogs';
@@ -56,6 +57,7 @@ export function Board({ held, mayChange, assumedFor, onSuggest, onGoal, onUpdate
   const wide = useMedia('(min-width: 861px)');
   const byId = useMemo(() => new Map(scored.places.map((place) => [place.before, place])), [scored.places]);
   const parted = useMemo(() => partKinds(scored.evening, scored.places), [scored]);
+  const rules = useMemo(() => ruleWords(board), [board]);
   const spaced = useMemo(() => spacedPairs(scored.evening), [scored.evening]);
   const { chairs } = scored.evening;
   const kinds = useMemo(() => chairs.map(({ kind }) => kind.id), [chairs]);
@@ -184,6 +186,7 @@ export function Board({ held, mayChange, assumedFor, onSuggest, onGoal, onUpdate
                       firstFree={firstFree}
                       nowEntryId={nowId}
                       spaced={spaced}
+                      rules={rules}
                       order={order}
                       cardMenu={
                         mayChange
@@ -191,6 +194,7 @@ export function Board({ held, mayChange, assumedFor, onSuggest, onGoal, onUpdate
                               cardMenu(session, board, entry, firstFree, {
                                 perform: act,
                                 askPosition: (each) => setAsking({ what: 'position', entry: each }),
+                                askBefore: (each) => setAsking({ what: 'before', entry: each }),
                                 editOpenPlace: (each) =>
                                   setAsking({ what: 'open', setId: set.id, entry: each }),
                               })

@@ -26,6 +26,8 @@ export interface SetColumnProps {
   readonly nowEntryId: string | null;
   /** Pairs of neighbours of a rhythm to keep apart, by the second's id. */
   readonly spaced: ReadonlySet<string>;
+  /** By entry id, what the rules between tunes ask of it. */
+  readonly rules: ReadonlyMap<string, readonly string[]>;
   /** A value that changes when cards travel. */
   readonly order: string;
   readonly cardMenu: ((entry: ShownEntry) => readonly (readonly ActionItem[])[]) | null;
@@ -94,6 +96,7 @@ export function SetColumn(props: SetColumnProps) {
                 place={place}
                 chairs={changing}
                 called={called}
+                rules={props.rules.get(entry.id)}
                 where={`place ${index + 1} of ${size} in ${title}`}
                 movable={props.cardMenu !== null && position >= firstFree}
                 menu={props.cardMenu?.(entry) ?? null}

@@ -16,14 +16,17 @@ interface CardFaceProps {
   readonly chairs: readonly Chair[];
   /** While live: it was played, or is played now. */
   readonly called?: 'played' | 'now' | undefined;
+  /** What the rules between tunes ask of it: `before Grey Owl`. */
+  readonly rules?: readonly string[] | undefined;
 }
 
 /** What a card says, on the board and in the hand. */
-export function CardFace({ entry, number, place, chairs, called }: CardFaceProps) {
+export function CardFace({ entry, number, place, chairs, called, rules = [] }: CardFaceProps) {
   const { open, rhythm, pinned, removed, minutes } = entry;
   const about = [
     open ? `open place, ${minutes} min, whoever calls` : keyWords(entry.key, entry.mode),
     open ? null : rhythm,
+    ...rules,
   ];
   return (
     <>
