@@ -31,6 +31,8 @@ export const sessions = pgTable(
     notes: text(),
     /** What players type or scan. */
     code: text().notNull(),
+    /** Since when: an evening that nobody runs to its end must not be open for good. */
+    codeGivenAt: instant().notNull().defaultNow(),
     /** As the host said it, `2027-01-14T19:30`, in `timeZone`; the instant is computed from both. */
     localStart: text().notNull(),
     timeZone: text().notNull(),
