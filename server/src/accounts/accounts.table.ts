@@ -10,6 +10,8 @@ export const accounts = pgTable('accounts', {
   displayName: text().notNull(),
   passwordHash: text().notNull(),
   createdAt: createdAt(),
+  /** Since when it is known that mail to this address reaches whoever has the account. */
+  confirmedAt: instant(),
 });
 
 /**
@@ -26,9 +28,32 @@ export const signIns = pgTable(
     generation: integer().notNull().default(1),
     renewedAt: instant().notNull().defaultNow(),
     createdAt: createdAt(),
+    /** To about ten minutes: for whoever looks through their sign-ins. */
+    usedAt: instant().notNull().defaultNow(),
     endedAt: instant(),
     userAgent: text(),
   },
   // Serves "the sign-ins of an account".
   (table) => [index('sign_ins_account').on(table.accountId)],
+);
+
+/** Links that were sent by mail, each good for one thing, once. */
+export const accountLinks = pgTable(
+  'account_links',
+  {
+    id: id(),
+    accountId: uuid()
+      .notNull()
+      .references(() => accounts.id, { onDelete: 'cascade' }),
+    purpose: text({ enum: ['confirm', 'reset', 'change-email'] }).notNull(),
+    /** SHA-256 of the token, in hexadecimal: what is read here opens nothing. */
+    tokenHash: text().notNull().unique(),
+    /** The address it was sent to; with `change-email` the new one. */
+    email: text().notNull(),
+    createdAt: createdAt(),
+    expiresAt: instant().notNull(),
+    usedAt: instant(),
+  },
+  // Serves "a newer one makes the older ones void".
+  (table) => [index('account_links_account').on(table.accountId, table.purpose)],
 );
