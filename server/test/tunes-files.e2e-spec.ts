@@ -191,13 +191,6 @@ describe('files of tunes', () => {
         'This file is not text.',
       ],
       [
-        'not UTF-8',
-        Buffer.from('title,key\nMn\u00e1,A', 'latin1'),
-        'tunes.csv',
-        422,
-        /^This file is not UTF-8 text: line 2/,
-      ],
-      [
         'without columns',
         Buffer.from('One,A\nTwo,D'),
         'tunes.csv',

@@ -8,7 +8,7 @@ import {
   type ImportReport,
   type TuneFileFormat,
 } from '@pegwell/shared/contract/tunes';
-import { CirclesService } from '../../circles/circles.service';
+import { HistoryService } from '../../circles/history.service';
 import type { Member } from '../../common/access';
 import { announceCircle } from '../../common/announce';
 import { cannotBe, notFound } from '../../common/problem';
@@ -16,7 +16,7 @@ import { DATABASE, type Database, type RootDatabase } from '../../database/datab
 import { contentOf } from '../tune-content';
 import { TuneWritesRepository, type WrittenTune } from '../tune-writes.repository';
 import { TunesRepository } from '../tunes.repository';
-import { decodeUpload } from './decode-upload';
+import { decode } from './decode';
 import type { TuneFile } from './file-tune';
 import { ImportProgressRepository } from './import-progress.repository';
 import { planImport, type ImportPlan } from './plan-import';
@@ -41,7 +41,7 @@ export class ImportService {
     private readonly tunes: TunesRepository,
     private readonly writes: TuneWritesRepository,
     private readonly progress: ImportProgressRepository,
-    private readonly circles: CirclesService,
+    private readonly history: HistoryService,
   ) {}
 
   /** @throws ProblemException (422, at `file`) when the file is no text, no table, or holds too much */
@@ -116,7 +116,7 @@ export class ImportService {
     }
     const ids = created.map(({ id }) => id);
     if (total === 0) return ids;
-    await this.circles.note(tx, member, {
+    await this.history.note(tx, member, {
       what: 'tunes.imported',
       before: updated.map(({ before }) => ({ id: before.id, ...contentOf(before) })),
       after: {
@@ -141,10 +141,12 @@ export class ImportService {
 
 function readFile({ format, bytes }: Upload): TuneFile {
   const refuse = (message: string) => cannotBe([{ path: 'file', message }]);
-  const text = decodeUpload(bytes);
+  const text = decode(bytes);
   if (!text.ok) throw refuse(text.reason);
   const file =
-    format === 'abc' ? readAbc(text.value, IMPORT_MAX_TUNES) : readCsv(text.value, IMPORT_MAX_TUNES);
+    format === 'abc'
+      ? readAbc(text.value.text, IMPORT_MAX_TUNES)
+      : readCsv(text.value.text, IMPORT_MAX_TUNES);
   if ('reason' in file) throw refuse(file.reason);
   if (file.tunes.length > IMPORT_MAX_TUNES) {
     throw refuse(`This file holds more than ${IMPORT_MAX_TUNES} tunes. Cut it in parts.`);
