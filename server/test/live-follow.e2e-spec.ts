@@ -147,6 +147,18 @@ describe('what phones see', () => {
     await pool.end();
   });
 
+  it('stops answering to a code that the host replaced, and answers to the new one', async () => {
+    const evening = await example();
+    const path = `/api/sessions/${evening.session.id}/code`;
+    const { body } = await evening.host.caller.post(path).expect(200);
+    const { code } = body as { code: string };
+    expect(code).not.toBe(evening.session.code);
+    // The word goes round by NOTIFY, after the commit.
+    await new Promise((resolve) => setTimeout(resolve, 100));
+    await test.caller().get(`/api/follow/${evening.session.code}`).expect(404);
+    await test.caller().get(`/api/follow/${code}`).expect(200);
+  });
+
   describe('choices', () => {
     it('takes what accepts the tuning in force, and keeps it as a fact', async () => {
       // From AEAE the second tune's AEAE costs nothing; its first choice GDAE would cost two pegs twice.

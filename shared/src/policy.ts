@@ -7,6 +7,8 @@ import type { Role } from './contract/circles';
 export const policy = {
   'circle.read': ['host', 'cohost', 'player'],
   'circle.change': ['host', 'cohost'],
+  'circle.leave': ['host', 'cohost', 'player'],
+  'history.read': ['host', 'cohost'],
   'members.read': ['host', 'cohost', 'player'],
   'members.change': ['host'],
   'tunes.read': ['host', 'cohost', 'player'],

@@ -1,18 +1,8 @@
-import { Body, Controller, Get, Post, Put, Query } from '@nestjs/common';
+import { Body, Controller, Get, Post, Put } from '@nestjs/common';
 import { ApiParam, ApiResponse, ApiTags } from '@nestjs/swagger';
-import type { Circle, CircleMember } from '@pegwell/shared/contract/circles';
-import type { Page } from '@pegwell/shared/contract/page';
+import type { Circle } from '@pegwell/shared/contract/circles';
 import { AsMember, Caller, ForAccounts, ForMembers, type Account, type Member } from '../common/access';
-import {
-  AddMemberDto,
-  CircleDto,
-  CreateCircleDto,
-  MemberDto,
-  MemberPageDto,
-  SetUsualTuningsDto,
-  UsualTuningsDto,
-} from './circles.dto';
-import { PageQueryDto } from '../common/page.dto';
+import { CircleDto, CreateCircleDto, SetUsualTuningsDto, UsualTuningsDto } from './circles.dto';
 import { CirclesService } from './circles.service';
 import { UsualTuningsService } from './usual-tunings.service';
 
@@ -37,22 +27,6 @@ export class CirclesController {
   @ApiResponse({ status: 200, type: CircleDto.Output })
   get(@AsMember() member: Member): Promise<Circle> {
     return this.circles.get(member);
-  }
-
-  @Get(':circleId/members')
-  @ForMembers('members.read')
-  @ApiParam({ name: 'circleId', format: 'uuid' })
-  @ApiResponse({ status: 200, type: MemberPageDto.Output })
-  members(@AsMember() member: Member, @Query() query: PageQueryDto): Promise<Page<CircleMember>> {
-    return this.circles.members(member, query);
-  }
-
-  @Post(':circleId/members')
-  @ForMembers('members.change')
-  @ApiParam({ name: 'circleId', format: 'uuid' })
-  @ApiResponse({ status: 201, type: MemberDto.Output })
-  addMember(@AsMember() member: Member, @Body() body: AddMemberDto): Promise<CircleMember> {
-    return this.circles.addMember(member, body);
   }
 
   @Get(':circleId/usual-tunings')

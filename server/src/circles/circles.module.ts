@@ -3,12 +3,24 @@ import { AccountsModule } from '../accounts/accounts.module';
 import { CirclesController } from './circles.controller';
 import { CirclesRepository } from './circles.repository';
 import { CirclesService } from './circles.service';
+import { HistoryController } from './history.controller';
+import { HistoryRepository } from './history.repository';
+import { HistoryService } from './history.service';
+import { MembersController } from './members.controller';
+import { MembersService } from './members.service';
 import { UsualTuningsService } from './usual-tunings.service';
 
 @Module({
   imports: [AccountsModule],
-  controllers: [CirclesController],
-  providers: [CirclesRepository, CirclesService, UsualTuningsService],
-  exports: [CirclesService, UsualTuningsService],
+  controllers: [CirclesController, MembersController, HistoryController],
+  providers: [
+    CirclesRepository,
+    CirclesService,
+    HistoryRepository,
+    HistoryService,
+    MembersService,
+    UsualTuningsService,
+  ],
+  exports: [CirclesService, HistoryService, MembersService, UsualTuningsService],
 })
 export class CirclesModule {}

@@ -3,7 +3,7 @@ import { and, asc, count, eq, isNotNull, isNull } from 'drizzle-orm';
 import type { Role } from '@pegwell/shared/contract/circles';
 import type { PageQuery } from '@pegwell/shared/contract/page';
 import type { Database } from '../database/database';
-import { circles, events, members, usualTunings } from './circles.table';
+import { circles, members, usualTunings } from './circles.table';
 
 export type CircleRow = typeof circles.$inferSelect;
 export type UsualTuningRow = typeof usualTunings.$inferSelect;
@@ -63,6 +63,24 @@ export class CirclesRepository {
     return rows.length === 1;
   }
 
+  /** The circle's hosts, held until the transaction ends. */
+  async holdHosts(db: Database, circleId: string): Promise<{ accountId: string }[]> {
+    return db
+      .select({ accountId: members.accountId })
+      .from(members)
+      .where(and(eq(members.circleId, circleId), eq(members.role, 'host'), isNull(members.removedAt)))
+      .orderBy(asc(members.accountId))
+      .for('update');
+  }
+
+  async setRole(db: Database, circleId: string, accountId: string, role: Role): Promise<void> {
+    await db.update(members).set({ role }).where(thatMember(circleId, accountId));
+  }
+
+  async removeMember(db: Database, circleId: string, accountId: string): Promise<void> {
+    await db.update(members).set({ removedAt: new Date() }).where(thatMember(circleId, accountId));
+  }
+
   /** Who is in, in the order of joining. */
   async members(db: Database, circleId: string, { page, pageSize }: PageQuery) {
     const present = and(eq(members.circleId, circleId), isNull(members.removedAt));
@@ -89,8 +107,8 @@ export class CirclesRepository {
     await db.delete(usualTunings).where(eq(usualTunings.circleId, circleId));
     if (rows.length > 0) await db.insert(usualTunings).values(rows);
   }
+}
 
-  async insertEvent(db: Database, values: typeof events.$inferInsert): Promise<void> {
-    await db.insert(events).values(values);
-  }
+function thatMember(circleId: string, accountId: string) {
+  return and(eq(members.circleId, circleId), eq(members.accountId, accountId), isNull(members.removedAt));
 }

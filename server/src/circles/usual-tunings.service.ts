@@ -12,7 +12,7 @@ import type { Member } from '../common/access';
 import { cannotBe } from '../common/problem';
 import { DATABASE, type Database, type RootDatabase } from '../database/database';
 import { CirclesRepository, type UsualTuningRow } from './circles.repository';
-import { CirclesService } from './circles.service';
+import { HistoryService } from './history.service';
 
 /** What a kind is taken to have where a tune says nothing. */
 export type UsualLookup = (kindId: string, key: string, mode: Mode) => Tuned | 'any';
@@ -27,7 +27,7 @@ export class UsualTuningsService {
   constructor(
     @Inject(DATABASE) private readonly db: RootDatabase,
     private readonly circles: CirclesRepository,
-    private readonly notes: CirclesService,
+    private readonly history: HistoryService,
   ) {}
 
   async list(member: Member): Promise<{ items: UsualTuning[] }> {
@@ -40,7 +40,7 @@ export class UsualTuningsService {
       const before = await this.circles.usualTunings(tx, member.circleId);
       const stored = rows.map((row) => ({ ...row, circleId: member.circleId }));
       await this.circles.replaceUsualTunings(tx, member.circleId, stored);
-      await this.notes.note(tx, member, {
+      await this.history.note(tx, member, {
         what: 'usual-tunings.changed',
         before: present(before),
         after: present(rows),

@@ -3,6 +3,7 @@ import type { Session } from '@pegwell/shared/contract/sessions';
 import { BUILT_IN_KINDS } from '@pegwell/shared/music/instrument';
 import { AccountsService } from '../accounts/accounts.service';
 import { CirclesService } from '../circles/circles.service';
+import { MembersService } from '../circles/members.service';
 import type { Account, Member } from '../common/access';
 import { DATABASE, type RootDatabase } from '../database/database';
 import { RacksService } from '../racks/racks.service';
@@ -27,6 +28,7 @@ export class DemoService {
     @Inject(DATABASE) private readonly db: RootDatabase,
     private readonly accounts: AccountsService,
     private readonly circles: CirclesService,
+    private readonly members: MembersService,
     private readonly imports: ImportService,
     private readonly sessions: SessionsService,
     private readonly board: BoardService,
@@ -54,7 +56,7 @@ export class DemoService {
     for (const person of DEMO_PEOPLE) {
       if (person.email === DEMO_HOST.email) continue;
       await this.register(person);
-      await this.circles.addMember(host, person);
+      await this.members.add(host, person);
     }
     return host;
   }

@@ -2,7 +2,7 @@
 export interface Remembered {
   readonly sessionId: string;
   readonly version: number;
-  /** Milliseconds since 1970; Infinity while nothing ends it. */
+  /** Milliseconds since 1970. */
   readonly goodUntil: number;
 }
 

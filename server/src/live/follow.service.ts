@@ -5,14 +5,12 @@ import { DATABASE, type RootDatabase } from '../database/database';
 import { ENV, type Env } from '../env';
 import { walkOf } from '../sessions/evening';
 import { EveningsService } from '../sessions/evenings.service';
-import { CODE_LENGTH, CODE_LETTERS, normalCode } from '../sessions/session-code';
+import { CODE_LENGTH, CODE_LETTERS, codeEnds, normalCode } from '../sessions/session-code';
 import { presentFollow, type Followed } from './follow';
 import { FollowMemory, type Remembered } from './follow-memory';
 import { followUrl } from './follow-url';
 import { LiveRepository } from './live.repository';
 
-/** A code stops working this long after the end. */
-const AFTER_END_MS = 24 * 60 * 60 * 1_000;
 const CODE = new RegExp(`^[${CODE_LETTERS}]{${CODE_LENGTH}}$`);
 /** Raised when an answer changes its shape, so that no phone keeps the old one for a new one. */
 const SHAPE = 1;
@@ -71,14 +69,15 @@ export class FollowService {
       async (tx) => {
         const stored = await this.evenings.loadByCode(tx, code);
         if (!stored) return null;
-        const { id, finishedAt } = stored.session;
+        const { id } = stored.session;
+        const state = await this.live.state(tx, id);
         return {
           sessionId: id,
           version: await this.live.followVersion(tx, id),
-          goodUntil: finishedAt ? finishedAt.getTime() + AFTER_END_MS : Infinity,
+          goodUntil: codeEnds(stored.session, state?.stepAt ?? null),
           stored,
           walk: walkOf(stored),
-          phase: (await this.live.state(tx, id))?.phase ?? null,
+          phase: state?.phase ?? null,
           followUrl: followUrl(this.env, code),
           answers: new Map(),
         };

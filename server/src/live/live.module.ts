@@ -1,5 +1,6 @@
 import { Module } from '@nestjs/common';
 import { APP_INTERCEPTOR } from '@nestjs/core';
+import { CirclesModule } from '../circles/circles.module';
 import { SessionsModule } from '../sessions/sessions.module';
 import { CaughtUpInterceptor } from './caught-up.interceptor';
 import { FollowController } from './follow.controller';
@@ -13,7 +14,7 @@ import { RecordController } from './record.controller';
 import { RecordService } from './record.service';
 
 @Module({
-  imports: [SessionsModule],
+  imports: [CirclesModule, SessionsModule],
   controllers: [LiveController, FollowController, RecordController],
   providers: [
     { provide: APP_INTERCEPTOR, useClass: CaughtUpInterceptor },

@@ -1,6 +1,7 @@
 import { Inject, Injectable } from '@nestjs/common';
 import type { LiveState, LiveStep } from '@pegwell/shared/contract/live';
 import { takeStep, type LiveRoom, type Standing } from '@pegwell/shared/live/step';
+import { HistoryService } from '../circles/history.service';
 import { announceSession } from '../common/announce';
 import type { Member } from '../common/access';
 import { cannotBe, notFound, ProblemException } from '../common/problem';
@@ -23,6 +24,7 @@ export class LiveService {
     private readonly evenings: EveningsService,
     private readonly live: LiveRepository,
     private readonly record: RecordService,
+    private readonly history: HistoryService,
     @Inject(ENV) private readonly env: Env,
   ) {}
 
@@ -47,7 +49,7 @@ export class LiveService {
       if (step.liveVersion !== undefined && step.liveVersion !== current.liveVersion) {
         throw new ProblemException('changed', 'Another step was taken meanwhile.', { current });
       }
-      const answer = await this.take(tx, await this.evenings.whole(tx, session), row, step);
+      const answer = await this.take(tx, member, await this.evenings.whole(tx, session), row, step);
       if (step.actionId) await this.live.keepAnswer(tx, session.id, step.actionId, answer);
       return answer;
     });
@@ -55,6 +57,7 @@ export class LiveService {
 
   private async take(
     tx: Database,
+    member: Member,
     stored: StoredEvening,
     row: LiveRow | null,
     step: LiveStep,
@@ -82,6 +85,13 @@ export class LiveService {
     await this.sessions.setProgress(tx, session.id, { status, progress, finishedAt });
     await this.live.write(tx, after);
     await this.record.note(tx, stored, result, step.action, at);
+    if (status !== session.status) {
+      await this.history.note(tx, member, {
+        what: status === 'finished' ? 'session.finished' : 'session.started',
+        subjectId: session.id,
+        after: { title: session.title },
+      });
+    }
     await announceSession(tx, session.id);
     return this.present({ ...session, status, progress }, after);
   }

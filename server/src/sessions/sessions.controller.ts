@@ -58,6 +58,14 @@ export class SessionsController {
     return this.sessions.remove(member, id);
   }
 
+  @Post('sessions/:id/code')
+  @HttpCode(200)
+  @ForSessionMembers('sessions.change')
+  @ApiResponse({ status: 200, type: SessionDto.Output, description: 'With a new code; the old one is void.' })
+  changeCode(@AsMember() member: Member, @Param('id') id: string): Promise<Session> {
+    return this.sessions.changeCode(member, id);
+  }
+
   @Put('sessions/:id/board')
   @ForSessionMembers('sessions.change')
   @ApiResponse({ status: 200, type: SessionDto.Output })

@@ -11,6 +11,7 @@ import {
 import { readChairs, readOpenings } from '@pegwell/shared/session/room';
 import { AccountsService } from '../accounts/accounts.service';
 import { CirclesService } from '../circles/circles.service';
+import { HistoryService } from '../circles/history.service';
 import { announceSession } from '../common/announce';
 import type { Member } from '../common/access';
 import { cannotBe, notFound } from '../common/problem';
@@ -31,6 +32,7 @@ export class SessionsService {
     private readonly boards: BoardRepository,
     private readonly evenings: EveningsService,
     private readonly circles: CirclesService,
+    private readonly history: HistoryService,
     private readonly accounts: AccountsService,
   ) {}
 
@@ -61,6 +63,10 @@ export class SessionsService {
       await this.sessions.replaceSeats(tx, session.id, chairs ?? []);
       const empty = { sets: [], medleys: [], befores: [] };
       await this.boards.keepVersion(tx, session.id, session.version, member.account.id, empty);
+      await this.history.note(tx, member, {
+        ...{ what: 'session.created', subjectId: session.id },
+        after: { title: session.title, startsAt: session.localStart },
+      });
       await announceSession(tx, session.id);
       return this.present(tx, member, session.id);
     });
@@ -90,6 +96,28 @@ export class SessionsService {
         ...(calendar && { calendarSequence: before.calendarSequence + 1 }),
       });
       if (chairs) await this.sessions.replaceSeats(tx, sessionId, chairs);
+      await this.history.note(tx, member, {
+        ...{ what: 'session.changed', subjectId: sessionId },
+        ...changeOf(before, values, chairs && { chairs }),
+      });
+      await announceSession(tx, sessionId);
+      return this.present(tx, member, sessionId);
+    });
+  }
+
+  /** Another code, for when the old one got around: that one opens nothing from here on. */
+  async changeCode(member: Member, sessionId: string): Promise<Session> {
+    return this.db.transaction(async (tx) => {
+      const session = await this.sessions.lock(tx, sessionId);
+      if (!session) throw notFound();
+      let code = makeCode();
+      while (await this.sessions.byCode(tx, code)) code = makeCode();
+      await this.sessions.update(tx, sessionId, { code, codeGivenAt: new Date() });
+      // Not the codes themselves: whoever reads the history later has no need of them.
+      await this.history.note(tx, member, {
+        ...{ what: 'session.code-changed', subjectId: sessionId },
+        after: { title: session.title },
+      });
       await announceSession(tx, sessionId);
       return this.present(tx, member, sessionId);
     });
@@ -100,7 +128,7 @@ export class SessionsService {
       const session = await this.sessions.lock(tx, sessionId);
       if (!session) throw notFound();
       await this.sessions.update(tx, sessionId, { removedAt: new Date() });
-      await this.circles.note(tx, member, {
+      await this.history.note(tx, member, {
         what: 'session.removed',
         subjectId: sessionId,
         before: { title: session.title },
@@ -145,6 +173,14 @@ export class SessionsService {
       if (row) return row;
     }
   }
+}
+
+/** What the body said, beside what was there. Seats are told as they became: they are rows of their own. */
+function changeOf(row: SessionRow, values: Partial<NewSession>, seats: object | null) {
+  const before = Object.fromEntries(
+    Object.entries(row).filter(([name]) => name === 'title' || name in values),
+  );
+  return { before, after: { title: row.title, ...values, ...seats } };
 }
 
 /** The row's fields that the body names, read; everything that cannot be is told with its place. */

@@ -11,7 +11,7 @@ import type {
 } from '@pegwell/shared/contract/tunes';
 import { actionsOf } from '@pegwell/shared/policy';
 import { readKindTunings, type Accepted } from '@pegwell/shared/tunes/kind-tunings';
-import { CirclesService } from '../circles/circles.service';
+import { HistoryService } from '../circles/history.service';
 import { UsualTuningsService, type UsualLookup } from '../circles/usual-tunings.service';
 import type { Member } from '../common/access';
 import { announceCircle } from '../common/announce';
@@ -36,7 +36,7 @@ export class TunesService {
     @Inject(DATABASE) private readonly db: RootDatabase,
     private readonly tunes: TunesRepository,
     private readonly writes: TuneWritesRepository,
-    private readonly circles: CirclesService,
+    private readonly history: HistoryService,
     private readonly usual: UsualTuningsService,
   ) {}
 
@@ -73,7 +73,7 @@ export class TunesService {
     return this.db.transaction(async (tx) => {
       await this.writes.insert(tx, member.circleId, [{ id, settingId: randomUUID(), ...words, stated }]);
       const tune = await this.standing(tx, member, id);
-      await this.circles.note(tx, member, { what: 'tune.created', subjectId: id, after: contentOf(tune) });
+      await this.history.note(tx, member, { what: 'tune.created', subjectId: id, after: contentOf(tune) });
       return this.present(tx, member, tune);
     });
   }
@@ -87,7 +87,7 @@ export class TunesService {
       const after = { ...before, ...words, stated: stated ?? before.stated };
       if (sameContent(before, after)) return this.present(tx, member, before);
       await this.writes.update(tx, [after]);
-      await this.circles.note(tx, member, {
+      await this.history.note(tx, member, {
         ...{ what: 'tune.changed', subjectId: tuneId },
         ...{ before: contentOf(before), after: contentOf(after) },
       });
@@ -102,7 +102,7 @@ export class TunesService {
       await this.tunes.hold(tx, member.circleId, tuneId);
       const before = await this.standing(tx, member, tuneId);
       await this.tunes.setRemoved(tx, tuneId, new Date());
-      await this.circles.note(tx, member, {
+      await this.history.note(tx, member, {
         ...{ what: 'tune.removed', subjectId: tuneId },
         before: contentOf(before),
       });
@@ -116,7 +116,7 @@ export class TunesService {
       await this.tunes.hold(tx, member.circleId, tuneId);
       if (await this.tunes.byId(tx, member.circleId, tuneId, 'removed')) {
         await this.tunes.setRemoved(tx, tuneId, null);
-        await this.circles.note(tx, member, { what: 'tune.restored', subjectId: tuneId });
+        await this.history.note(tx, member, { what: 'tune.restored', subjectId: tuneId });
         await announceCircle(tx, member.circleId);
       }
       return this.present(tx, member, await this.standing(tx, member, tuneId));

@@ -44,6 +44,8 @@ export const addMemberSchema = z.strictObject({
 });
 export type AddMember = z.infer<typeof addMemberSchema>;
 
+export const changeMemberSchema = z.strictObject({ role: roleSchema });
+
 export const memberSchema = z.object({
   accountId: idSchema,
   displayName: z.string(),
