@@ -26,6 +26,12 @@ describe('readAbcKey', () => {
     // Not in the standard: Pegwell's own mode, and a capital M as in chords.
     ['A modal', 'A', 'modal'],
     ['GM', 'G', 'major'],
+    // Nor these, which people write.
+    ['em', 'E', 'minor'],
+    ['bb', 'Bb', 'major'],
+    ['a dorian', 'A', 'dorian'],
+    ['A harmonic minor', 'A', 'minor'],
+    ['G major/E minor', 'G', 'major'],
   ])('reads K:%s', (text, tonic, mode) => {
     expect(readAbcKey(text)).toEqual({ tonic, mode });
   });
@@ -61,6 +67,8 @@ describe('readAbcKey', () => {
 
   it.each([
     ['D =c', 'D', 'major'],
+    ['Dm^c', 'D', 'minor'],
+    ['Gmaj clef=treble', 'G', 'major'],
     ['Dmix^f', 'D', 'mixolydian'],
     ['D Phr ^f', 'D', 'phrygian'],
     ['Am clef=bass', 'A', 'minor'],
@@ -88,6 +96,8 @@ describe('readAbcKey', () => {
     'perc stafflines=1',
     '^c',
     'H',
+    'alto',
+    'clef=bass',
   ])('finds no tonic in K:%s', (text) => {
     expect(readAbcKey(text)).toEqual({ tonic: null, mode: null });
   });

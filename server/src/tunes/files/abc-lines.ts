@@ -10,10 +10,11 @@ export type AbcLine =
   /** Music or free text. */
   | { readonly kind: 'other'; readonly line: number };
 
-// `s`: line separators of Unicode are no line ends here.
-const FIELD = /^([A-Za-z]):(.*)$/s;
+// `s`: line separators of Unicode are no line ends here. Indented headers are no part of the standard.
+const FIELD = /^([A-Za-z]|\s+[A-Z]):(.*)$/s;
 const DIRECTIVE = /^(?:%%|I:)\s*(\S+)\s*(.*)$/s;
 const COMMENT = /(?<!\\)(?:\\\\)*%/;
+const COMMENT_BEHIND_TITLE = /(?<![\\\d])(?:\\\\)*%/;
 
 /**
  * Lines from 1, with `+:` joined by a space to the field, or the `I:` directive, that it continues; comments and
@@ -26,7 +27,11 @@ export function readAbcLines(text: string): AbcLine[] {
   text.split(/\r\n|\n|\r/).forEach((raw, index) => {
     const continued = raw.startsWith('+:') && open !== null ? lines[open] : undefined;
     if (open !== null && (continued?.kind === 'field' || continued?.kind === 'directive')) {
-      lines[open] = { ...continued, text: `${continued.text} ${withoutComment(raw.slice(2))}`.trim() };
+      const letter = continued.kind === 'field' ? continued.letter : null;
+      lines[open] = {
+        ...continued,
+        text: `${continued.text} ${withoutComment(raw.slice(2), letter)}`.trim(),
+      };
       return;
     }
     const line = readLine(raw, index + 1);
@@ -44,14 +49,17 @@ function readLine(raw: string, line: number): AbcLine {
     return { kind: 'directive', line, name: name.toLowerCase(), text: withoutComment(value) };
   // Also behind white space (2.2.5): it leaves no empty line.
   if (raw.trimStart().startsWith('%')) return { kind: 'comment', line };
-  const [, letter = null, text = ''] = FIELD.exec(raw) ?? [];
-  return letter === null
-    ? { kind: 'other', line }
-    : { kind: 'field', line, letter, text: withoutComment(text) };
+  const [, indented = null, text = ''] = FIELD.exec(raw) ?? [];
+  if (indented === null) return { kind: 'other', line };
+  const letter = indented.trim();
+  return { kind: 'field', line, letter, text: withoutComment(text, letter) };
 }
 
-/** `%` begins a comment (2.2.5) unless it is escaped: an odd number of backslashes before it (8.2). */
-function withoutComment(text: string): string {
-  const match = COMMENT.exec(text);
+/**
+ * `%` begins a comment (2.2.5) unless it is escaped: an odd number of backslashes before it (8.2). In a title it
+ * is a percent sign where it follows a digit, which people do not escape: `T:The 50% Reel`.
+ */
+function withoutComment(text: string, letter: string | null = null): string {
+  const match = (letter === 'T' ? COMMENT_BEHIND_TITLE : COMMENT).exec(text);
   return (match ? text.slice(0, match.index + match[0].length - 1) : text).trim();
 }

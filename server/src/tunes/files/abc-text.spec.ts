@@ -32,6 +32,9 @@ describe('decodeText', () => {
     ['gin & tonic &copy; &amp; &quot;', 'gin & tonic © & "'],
     // The mnemonics of abc 2.0 (14.2).
     ['\\,c \\oa', 'ç å'],
+    // TeX's braces and HTML's numbers are no part of the standard, but of files.
+    ['Se\\\'{a}n \\"{u}ber', 'Seán über'],
+    ['Caf&#233; &#xe9;tude &rsquo;tis &#128020;', 'Café étude ’tis 🐔'],
     // Nothing is lost where nothing was meant.
     ["\\'t \\x & &nosuch; &; \\U99999999", "\\'t \\x & &nosuch; &; \\U99999999"],
   ])('reads %j', (text, plain) => {

@@ -50,6 +50,13 @@ const ENTITIES: Readonly<Record<string, string>> = {
   apos: "'",
   copy: '©',
   nbsp: '\u00a0',
+  lsquo: '‘',
+  rsquo: '’',
+  ldquo: '“',
+  rdquo: '”',
+  ndash: '–',
+  mdash: '—',
+  hellip: '…',
   Oslash: 'Ø',
   oslash: 'ø',
   AElig: 'Æ',
@@ -64,9 +71,10 @@ const ENTITIES: Readonly<Record<string, string>> = {
 };
 
 const ESCAPE =
-  /\\(?:u([0-9A-Fa-f]{4})|U([0-9A-Fa-f]{8})|([\\%&])|(\/[Oo]|AA|aa|AE|ae|OE|oe|ss|DH|dh|TH|th)|([`'^~"uvHc,o])([A-Za-z]))|&([A-Za-z]{2,10});/g;
+  /\\(?:u([0-9A-Fa-f]{4})|U([0-9A-Fa-f]{8})|([\\%&])|(\/[Oo]|AA|aa|AE|ae|OE|oe|ss|DH|dh|TH|th)|([`'^~"uvHc,o])(?:([A-Za-z])|\{([A-Za-z])\}))|&(?:([A-Za-z]{2,10})|#(\d{1,7})|#[xX]([0-9A-Fa-f]{1,6}));/g;
 
 /**
+ * Beyond the standard: TeX's braces (`\\'{e}`) and HTML's numbers (`&#233;`), which other programs leave behind.
  * @example decodeText("Se\\'an \\% caf&eacute;") // 'Seán % café'
  */
 export function decodeText(text: string): string {
@@ -79,14 +87,20 @@ export function decodeText(text: string): string {
       sign?: string,
       ligature?: string,
       mark?: string,
-      letter?: string,
+      bare?: string,
+      braced?: string,
       entity?: string,
+      decimal?: string,
+      hex?: string,
     ) => {
       if (code !== undefined) return String.fromCharCode(parseInt(code, 16));
       if (longCode !== undefined) return characterOf(parseInt(longCode, 16)) ?? whole;
       if (sign !== undefined) return sign;
       if (ligature !== undefined) return LIGATURES[ligature] ?? whole;
+      const letter = bare ?? braced;
       if (mark !== undefined && letter !== undefined) return compose(letter, MARKS[mark]) ?? whole;
+      if (decimal !== undefined) return characterOf(Number(decimal)) ?? whole;
+      if (hex !== undefined) return characterOf(parseInt(hex, 16)) ?? whole;
       return entity === undefined ? whole : (readEntity(entity) ?? whole);
     },
   );

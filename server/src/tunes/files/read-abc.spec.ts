@@ -91,7 +91,13 @@ describe('readAbc', () => {
         'K:A % key',
         'R:reel',
       ),
-    ).toEqual([{ title: 'Fifty % Off', key: 'A', mode: 'major' }]);
+    ).toEqual([{ title: 'Fifty % Off', key: 'A', mode: 'major', rhythm: 'reel' }]);
+  });
+
+  it('keeps the percent sign behind a number in a title, where nobody escapes it (2.2.5)', () => {
+    expect(words('X:1', 'T:The 50% Reel % from memory', 'R:2%', 'K:D').map(({ title }) => title)).toEqual([
+      'The 50% Reel',
+    ]);
   });
 
   it('joins continued fields by a space, through comments and directives (3.3)', () => {
@@ -125,6 +131,59 @@ describe('readAbc', () => {
       'Two',
     ]);
     expect(words('T:One', 'K:A', '', 'T:Two', 'K:A').map(({ title }) => title)).toEqual(['One', 'Two']);
+  });
+
+  // Not as the standard has it (2.2.1, 3.1.1, 3.1.2, 3.1.14), but as files are.
+  it.each<[string, string[], object[]]>([
+    ['X: is missing', ['T:One', 'K:A', 'abc|', '', 'T:Two', 'K:D'], [{ title: 'One' }, { title: 'Two' }]],
+    [
+      'X: is repeated',
+      ['X:1', 'T:One', 'K:A', '', 'X:1', 'T:Two', 'K:D'],
+      [{ title: 'One' }, { title: 'Two' }],
+    ],
+    [
+      'T: follows K:',
+      ['X:1', 'K:Ador', 'T:One', 'R:jig', 'abc|'],
+      [{ title: 'One', mode: 'dorian', rhythm: 'jig' }],
+    ],
+    [
+      'a header has a title, and K: is followed by another',
+      ['X:1', 'T:One', 'K:A', 'T:Part'],
+      [{ title: 'One' }],
+    ],
+    ['K: is repeated', ['X:1', 'T:One', 'K:G', 'K:D', 'abc|', 'K:A'], [{ title: 'One', key: 'G' }]],
+    ['T: is empty, then not', ['X:1', 'T:', 'T: ', 'T:One', 'K:A'], [{ title: 'One' }]],
+    ['T: is empty', ['X:1', 'T:', 'K:A'], [{ key: 'A', mode: 'major' }]],
+    [
+      'lines are apart by empty ones',
+      ['X:1', '', 'T:One', '', 'K:A', '', 'abc|', '', 'X:2', '', 'T:Two', '', 'K:D'],
+      [
+        { title: 'One', key: 'A' },
+        { title: 'Two', key: 'D' },
+      ],
+    ],
+    [
+      'K: is missing, and X: behind it',
+      ['X:1', 'T:One', '', 'T:Two', 'K:D'],
+      [{ title: 'One' }, { title: 'Two', key: 'D' }],
+    ],
+    ['headers are indented', ['  X:1', '  T:One', '\tK:A', '  abc|'], [{ title: 'One', key: 'A' }]],
+    ['a title ends in its article', ['X:1', 'T:Dusty Miller, The', 'K:G'], [{ title: 'Dusty Miller, The' }]],
+    ['a title names a part', ['X:1', 'T:Dusty Miller (A part)', 'K:G'], [{ title: 'Dusty Miller (A part)' }]],
+  ])('reads on where %s', (_oddity, lines, expected) => {
+    const found = words(...lines);
+    expect(found).toMatchObject(expected);
+    expect(found).toHaveLength(expected.length);
+  });
+
+  it('takes nothing from the music, even where a bar looks like a field (3.2)', () => {
+    expect(words('X:1', 'K:A', 'C:| abc', 'T:Variation', 'R:jig')).toEqual([{ key: 'A', mode: 'major' }]);
+  });
+
+  it('says that the scale of the pipes is no key (3.1.14: HP and Hp)', () => {
+    expect(read('X:1', 'T:One', 'K:Hp').tunes[0]!.problems).toEqual([
+      { line: 3, message: "K:Hp is the pipes' scale and names no key. Write K:Amix, or what it is." },
+    ]);
   });
 
   it('never executes a directive: what is not its own is passed over (3.1.17)', () => {

@@ -1,6 +1,7 @@
 import { decodeText } from './abc-text';
 import { readAbcKey } from './abc-key';
-import { readAbcLines, type AbcLine } from './abc-lines';
+import { findHeaders, type AbcDirective, type AbcHeader } from './abc-headers';
+import { readAbcLines } from './abc-lines';
 import {
   kindNamed,
   understandTune,
@@ -12,31 +13,18 @@ import {
 import type { KeyReading } from './key-cell';
 import { modeNamed } from './mode-word';
 
-type Field = AbcLine & { readonly kind: 'field' };
-type Directive = AbcLine & { readonly kind: 'directive' };
-
-/** Fields of one kind in the order they stand in. */
-interface Header {
-  readonly line: number;
-  readonly fields: Field[];
-  readonly directives: Directive[];
-  key: Field | null;
-}
-
 /** Fields that a file header may give to all tunes (2.1 sections 2.2.2 and 3), as far as they are read here. */
 const DEFAULTED = new Set(['C', 'S', 'R', 'N', 'G']);
 /** Text strings: repeated ones are more of the same, by semicolons (3, "Repeated information fields"). */
 const WORDS: Readonly<Record<string, WordField>> = { R: 'rhythm', C: 'composer', S: 'source' };
 
 /**
- * The tunes of an ABC file, by the header rules of ABC 2.1 (C. Walshaw, 2011): a tune begins at `X:` and ends at
- * an empty line, its header ends at `K:`; what stands before the first tune gives defaults; all else is free
- * text or music, and passed over. A paragraph that has `T:` and `K:` is taken for a tune that lost its `X:`.
+ * The tunes of an ABC file, by the header rules of ABC 2.1 (C. Walshaw, 2011); music and free text are passed over.
  * @param limit at most so many tunes are read, and one more
  */
 export function readAbc(text: string, limit: number): TuneFile {
   const lines = readAbcLines(text);
-  const { defaults, headers } = readHeaders(lines, limit);
+  const { defaults, headers } = findHeaders(lines, limit);
   const tunes = headers.map((header) => understandTune(readTune(header, defaults)));
   // A file of nothing but comments is an exported empty library.
   const isAnything = lines.some(({ kind }) => kind === 'field' || kind === 'other');
@@ -47,70 +35,26 @@ export function readAbc(text: string, limit: number): TuneFile {
   return { tunes, problems };
 }
 
-function readHeaders(lines: readonly AbcLine[], limit: number): { defaults: Header; headers: Header[] } {
-  const headers: Header[] = [];
-  let defaults: Header = emptyHeader(1);
-  // The paragraph that is being read: a tune's from `X:` on, else perhaps the file header or free text.
-  let open = emptyHeader(1);
-  let isTune = false;
-  let isText = false;
-  const close = () => {
-    const isNamed = open.fields.some(({ letter }) => letter === 'T') && open.key !== null;
-    if (isTune || (isNamed && !isText)) headers.push(open);
-    else if (headers.length === 0 && !isText && open.fields.length + open.directives.length > 0) {
-      defaults = merged(defaults, open);
-    }
-    isTune = isText = false;
-  };
-  for (const line of lines) {
-    const startsTune = line.kind === 'field' && line.letter === 'X';
-    if (line.kind === 'empty' || startsTune) {
-      close();
-      if (headers.length > limit) break;
-      open = emptyHeader(line.line + (startsTune ? 0 : 1));
-      isTune = startsTune;
-    } else if (line.kind === 'directive') open.directives.push(line);
-    else if (open.key === null) {
-      if (line.kind === 'other' && !isTune) isText = true;
-      if (line.kind === 'field' && line.letter === 'K') open.key = line;
-      else if (line.kind === 'field') open.fields.push(line);
-    }
-  }
-  if (headers.length <= limit) close();
-  return { defaults, headers };
-}
-
-function emptyHeader(line: number): Header {
-  return { line, fields: [], directives: [], key: null };
-}
-
-function merged(one: Header, other: Header): Header {
-  return {
-    ...one,
-    fields: [...one.fields, ...other.fields],
-    directives: [...one.directives, ...other.directives],
-  };
-}
-
-function readTune(header: Header, defaults: Header): RawTune {
+function readTune(header: AbcHeader, defaults: AbcHeader): RawTune {
   const textsOf = (letter: string): Written[] => {
-    const own = header.fields.filter((field) => field.letter === letter);
-    const fields =
-      own.length === 0 && DEFAULTED.has(letter)
-        ? defaults.fields.filter((field) => field.letter === letter)
-        : own;
+    const places = [header.fields, header.late, DEFAULTED.has(letter) ? defaults.fields : []];
+    // An empty title is none; an empty note is an empty line.
+    const said = places.map((fields) =>
+      fields.filter((f) => f.letter === letter && (f.text !== '' || letter === 'N')),
+    );
+    const fields = said.find((found) => found.length > 0) ?? [];
     return fields.map(({ text, line }) => ({ text: decodeText(text), line }));
   };
   const words: Partial<Record<WordField, Written>> = {};
-  const [title, ...others] = textsOf('T').filter(({ text }) => text !== '');
+  const [title, ...others] = textsOf('T');
   if (title) words.title = title;
   for (const [letter, field] of Object.entries(WORDS)) {
     const found = textsOf(letter).filter(({ text }) => text.trim() !== '');
     if (found[0]) words[field] = { line: found[0].line, text: found.map(({ text }) => text).join('; ') };
   }
-  // An instruction, unlike the others: the last one counts.
-  const parts = textsOf('P').at(-1);
-  if (parts) words.parts = parts;
+  // An instruction, unlike the others: the last one counts. Behind the key it names the part that begins.
+  const parts = header.fields.filter(({ letter }) => letter === 'P').at(-1);
+  if (parts) words.parts = { text: decodeText(parts.text), line: parts.line };
   // There is no place of their own yet for other titles and groups: the notes keep them.
   const notes = [
     ...textsOf('N'),
@@ -129,11 +73,15 @@ function readTune(header: Header, defaults: Header): RawTune {
 }
 
 function readKey(
-  { key, line }: Header,
-  modeWord: Directive | undefined,
+  { key, line }: AbcHeader,
+  modeWord: AbcDirective | undefined,
 ): KeyReading & Pick<RawTune, 'keyLine' | 'problems'> {
   const keyLine = key?.line ?? line;
   const { tonic, mode } = key ? readAbcKey(key.text) : { tonic: null, mode: null };
+  if (key && /^hp\b/i.test(key.text)) {
+    const message = `K:${key.text.slice(0, 2)} is the pipes' scale and names no key. Write K:Amix, or what it is.`;
+    return { tonic, mode, keyLine, problems: [{ line: keyLine, message }] };
+  }
   if (!modeWord) return { tonic, mode, keyLine, problems: [] };
   const named = modeNamed(modeWord.text);
   if (named) return { tonic, mode: named, keyLine, problems: [] };
@@ -142,7 +90,7 @@ function readKey(
 }
 
 /** The tune's own tunings; for kinds that it does not name, those of the file header. The last word counts. */
-function readCells(own: readonly Directive[], defaults: Header): RawTune['cells'] {
+function readCells(own: readonly AbcDirective[], defaults: AbcHeader): RawTune['cells'] {
   const given = defaults.directives.filter(({ name }) => name === 'pegwell-tuning');
   const cells = [...given, ...own].map(({ text, line }) => {
     const [kind = ''] = text.split(/\s/, 1);

@@ -15,6 +15,8 @@ import { AsMember, ForMembers, type Member } from '../../common/access';
 import { contentDisposition } from '../../common/content-disposition';
 import { PathIdPipe } from '../../common/path-id.pipe';
 import { ProblemException } from '../../common/problem';
+import { AtOnce } from '../../limits/at-once';
+import { Limited } from '../../limits/limited';
 import { ExportQueryDto, ImportProgressDto, ImportQueryDto, ImportReportDto } from '../tunes.dto';
 import { ExportService } from './export.service';
 import { ImportService } from './import.service';
@@ -32,6 +34,8 @@ export class TuneFilesController {
   @Post('import')
   @HttpCode(200)
   @ForMembers('tunes.change')
+  @Limited('import')
+  @AtOnce('import')
   @UseInterceptors(TuneFileInterceptor)
   @ApiConsumes('multipart/form-data')
   @ApiBody({
