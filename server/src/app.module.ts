@@ -10,6 +10,7 @@ import { DatabaseModule } from './database/database.module';
 import { DemoModule } from './demo/demo.module';
 import { ENV, type Env } from './env';
 import { HealthController } from './health/health.controller';
+import { LimitsModule } from './limits/limits.module';
 import { LiveModule } from './live/live.module';
 import { logging } from './logging';
 import { OrderingModule } from './ordering/ordering.module';
@@ -33,6 +34,7 @@ export class AppModule {
         },
         LoggerModule.forRoot(logging(env)),
         DatabaseModule,
+        LimitsModule,
         AccountsRoutesModule,
         CirclesModule,
         TunesModule,

@@ -19,13 +19,18 @@ export interface TestApp {
 export type Caller = ReturnType<typeof supertest.agent>;
 
 /** The real server on a free port, with a database of its own unless one is given. */
-export async function startApp(given?: TestDatabase, controllers: Type[] = []): Promise<TestApp> {
+export async function startApp(
+  given?: TestDatabase,
+  controllers: Type[] = [],
+  settings: Readonly<Record<string, string>> = {},
+): Promise<TestApp> {
   const database = given ?? (await migratedDatabase());
   const env = parseEnv({
     NODE_ENV: 'test',
     DATABASE_URL: database.url,
     PEGWELL_LOG: process.env['PEGWELL_TEST_LOG'] ?? 'silent',
     PEGWELL_SECRET: 'a secret of the tests, long enough to be one',
+    ...settings,
   });
   const app = await createApp(env, controllers);
   await app.listen(0, '127.0.0.1');

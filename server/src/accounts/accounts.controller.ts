@@ -4,6 +4,7 @@ import type { Me, SignedIn } from '@pegwell/shared/contract/accounts';
 import type { Request, Response } from 'express';
 import { CirclesService } from '../circles/circles.service';
 import { Caller, ForAccounts, ForAnyone, type Account } from '../common/access';
+import { Limited } from '../limits/limited';
 import { LoginDto, MeDto, RegisterDto, SignedInDto } from './accounts.dto';
 import { AccountsService } from './accounts.service';
 import { SignInsService } from './sign-ins.service';
@@ -33,6 +34,7 @@ export class AccountsController {
   @Post('login')
   @HttpCode(200)
   @ForAnyone()
+  @Limited('password')
   @ApiResponse({ status: 200, type: SignedInDto.Output })
   async login(
     @Body() body: LoginDto,

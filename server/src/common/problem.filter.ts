@@ -3,6 +3,7 @@ import { Catch, HttpException, Logger, type ArgumentsHost, type ExceptionFilter 
 import type { Response } from 'express';
 import type { ProblemCode } from '@pegwell/shared/contract/errors';
 import { ProblemException } from './problem';
+import { TooManyException } from './too-many';
 
 /** What Nest and Express throw of their own, in our list of codes. */
 const codeOfStatus: Partial<Record<number, ProblemCode>> = {
@@ -50,6 +51,7 @@ export class ProblemFilter implements ExceptionFilter {
       send(response, { ...problem.problem, instance });
       return;
     }
+    if (problem instanceof TooManyException) response.set('Retry-After', String(problem.retryAfter));
     send(response, problem.problem);
   }
 }

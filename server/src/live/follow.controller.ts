@@ -1,4 +1,4 @@
-import { Controller, Get, Headers, Param, Query, Res } from '@nestjs/common';
+import { Controller, Get, Headers, Ip, Param, Query, Res } from '@nestjs/common';
 import { ApiParam, ApiResponse, ApiTags } from '@nestjs/swagger';
 import type { Response } from 'express';
 import { ForAnyone } from '../common/access';
@@ -19,14 +19,19 @@ export class FollowController {
     status: 304,
     description: 'Nothing changed since the answer with the ETag of If-None-Match.',
   })
+  @ApiResponse({
+    status: 429,
+    description: 'Too many codes of this network opened nothing; never for who follows.',
+  })
   @ApiResponse({ status: 404, description: 'No evening has this code, or it ended more than 24 hours ago.' })
   async get(
     @Param('code') code: string,
     @Query() { kind }: FollowQueryDto,
     @Headers('if-none-match') known: string | undefined,
+    @Ip() ip: string | undefined,
     @Res() response: Response,
   ): Promise<void> {
-    const { etag, body } = await this.follow.answer(code, kind);
+    const { etag, body } = await this.follow.answer(code, kind, { ip, known });
     // Always asked again, never taken from a cache unasked.
     response.set({ ETag: etag, 'Cache-Control': 'no-cache' });
     if (matchesTag(known, etag)) response.status(304).end();

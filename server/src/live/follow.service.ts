@@ -3,6 +3,7 @@ import { builtInKind } from '@pegwell/shared/music/instrument';
 import { cannotBe, ProblemException } from '../common/problem';
 import { DATABASE, type RootDatabase } from '../database/database';
 import { ENV, type Env } from '../env';
+import { LimitsService } from '../limits/limits.service';
 import { walkOf } from '../sessions/evening';
 import { EveningsService } from '../sessions/evenings.service';
 import { CODE_LENGTH, CODE_LETTERS, codeEnds, normalCode } from '../sessions/session-code';
@@ -22,6 +23,12 @@ export interface FollowAnswer {
   readonly body: string;
 }
 
+/** Who asks: a network address, and the ETag of the answer they have. */
+export interface FollowAsker {
+  readonly ip: string | undefined;
+  readonly known: string | undefined;
+}
+
 interface FollowedEvening extends Remembered, Followed {
   /** By kind, made when first asked for. */
   readonly answers: Map<string, FollowAnswer>;
@@ -37,17 +44,18 @@ export class FollowService {
     @Inject(DATABASE) private readonly db: RootDatabase,
     private readonly evenings: EveningsService,
     private readonly live: LiveRepository,
+    private readonly limits: LimitsService,
     @Inject(ENV) private readonly env: Env,
   ) {}
 
   /** @param typed the code as a person typed it */
-  async answer(typed: string, kindId: string): Promise<FollowAnswer> {
+  async answer(typed: string, kindId: string, asker: FollowAsker): Promise<FollowAnswer> {
     const kind = builtInKind(kindId);
     if (!kind) {
       throw cannotBe([{ path: 'kind', message: `${kindId} is no instrument that Pegwell knows.` }]);
     }
     const code = normalCode(typed);
-    const evening = CODE.test(code) ? await this.memory.find(code) : null;
+    const evening = CODE.test(code) ? await this.find(code, asker) : null;
     if (!evening) {
       throw new ProblemException(
         'not-found',
@@ -56,11 +64,23 @@ export class FollowService {
     }
     let answer = evening.answers.get(kind.id);
     if (!answer) {
-      const etag = `"${evening.sessionId.slice(0, 8)}-${SHAPE}-${evening.version}-${kind.id}"`;
+      const etag = `${tagStart(evening)}${SHAPE}-${evening.version}-${kind.id}"`;
       answer = { etag, body: JSON.stringify(presentFollow(evening, kind)) };
       evening.answers.set(kind.id, answer);
     }
     return answer;
+  }
+
+  /**
+   * Only codes that open nothing count. A phone that follows already shows the tag of this very evening, and goes
+   * on whoever in the same hall tries codes.
+   */
+  private async find(code: string, { ip, known }: FollowAsker): Promise<FollowedEvening | null> {
+    const evening = await this.memory.find(code);
+    const follows = evening !== null && known?.includes(tagStart(evening));
+    if (!follows) await this.limits.letCodeThrough(ip);
+    if (!evening) await this.limits.codeMissed(ip);
+    return evening;
   }
 
   /** Evening, phase and version as they stood at one instant. */
@@ -85,4 +105,9 @@ export class FollowService {
       { isolationLevel: 'repeatable read', accessMode: 'read only' },
     );
   }
+}
+
+/** How every tag of an evening begins: nobody knows it who has no answer of this evening. */
+function tagStart({ sessionId }: Remembered): string {
+  return `"${sessionId.slice(0, 8)}-`;
 }

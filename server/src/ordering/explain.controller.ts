@@ -3,6 +3,7 @@ import { ApiParam, ApiResponse, ApiTags } from '@nestjs/swagger';
 import type { Explanation, HeldBack } from '@pegwell/shared/contract/explain';
 import type { Response } from 'express';
 import { AsMember, ForSessionMembers, type Member } from '../common/access';
+import { AtOnce } from '../limits/at-once';
 import { ExplanationDto, ExplanationRequestDto, HeldBackDto, HeldBackRequestDto } from './explain.dto';
 import { ExplainService } from './explain.service';
 import { goneAway } from './gone-away';
@@ -24,6 +25,7 @@ export class ExplainController {
   @Post('suggestion/held-back')
   @HttpCode(200)
   @ForSessionMembers('sessions.change')
+  @AtOnce('suggest')
   @ApiResponse({ status: 200, type: HeldBackDto.Output })
   heldBack(
     @AsMember() member: Member,

@@ -11,6 +11,7 @@ import {
   type Account,
   type Member,
 } from '../common/access';
+import { AtOnce } from '../limits/at-once';
 import { SessionDto } from '../sessions/sessions.dto';
 import {
   AcceptSuggestionDto,
@@ -40,6 +41,7 @@ export class OrderingController {
   @Post('suggest')
   @HttpCode(200)
   @ForAccounts()
+  @AtOnce('suggest')
   @ApiResponse({ status: 200, type: SuggestAnswerDto.Output })
   suggest(
     @Caller() account: Account,
@@ -52,6 +54,7 @@ export class OrderingController {
   @Post('sessions/:id/suggestion')
   @HttpCode(200)
   @ForSessionMembers('sessions.change')
+  @AtOnce('suggest')
   @ApiResponse({ status: 200, type: SessionSuggestionDto.Output })
   suggestFor(
     @AsMember() member: Member,
