@@ -27,16 +27,41 @@ export interface Page<T> {
 /** A UUID in any version, compared in lower case. */
 export const idSchema = z.guid({ error: 'This is not an id.' }).toLowerCase();
 
-/** What can be stored and shown: no control characters, no half of a surrogate pair. */
-const PLAIN = /^[^\p{Cc}\p{Cs}]*$/u;
-const PLAIN_LINES = /^(?:[^\p{Cc}\p{Cs}]|[\t\n\r])*$/u;
+/**
+ * What cannot be stored or shown: control characters, halves of surrogate pairs, and whatever turns the direction
+ * of the text that stands beside it (Unicode Technical Report 36, section 2.10).
+ */
+const UNSHOWABLE = String.raw`\p{Cc}\p{Cs}\u2028\u2029\u202a-\u202e\u2066-\u2069\ufff9-\ufffb`;
+const PLAIN = new RegExp(`^[^${UNSHOWABLE}]*$`, 'u');
+const PLAIN_LINES = new RegExp(String.raw`^(?:[^${UNSHOWABLE}]|[\t\n\r])*$`, 'u');
+/** More marks on one letter than any language puts there: they would be drawn over the lines above and below. */
+const PILED_UP = /\p{M}{7}/u;
+
+/**
+ * What nobody sees and nobody types on purpose: zero-width spaces, byte order marks, soft hyphens, marks of
+ * direction, joiners after what does not join (they stay in emoji and in scripts that need them), and tags
+ * outside a flag. Two names that look the same would differ by them.
+ */
+const UNSEEN = /[\u00ad\u061c\u200b\u200e\u200f\u2060-\u2064\ufeff]/g;
+const JOINING_NOTHING = /(^|[\p{Script=Latin}\p{N}\p{P}\p{Z}])[\u200c\u200d]+/gu;
+const FLAG_OR_TAGS = /(\u{1f3f4}[\u{e0020}-\u{e007f}]+)|[\u{e0000}-\u{e007f}]/gu;
+
+function withoutUnseen(text: string): string {
+  return text
+    .replace(UNSEEN, '')
+    .replace(JOINING_NOTHING, '$1')
+    .replace(FLAG_OR_TAGS, (_, flag: string | undefined) => flag ?? '')
+    .normalize('NFC');
+}
 
 /** One line of text, possibly empty. */
 export function plainSchema(max: number, what: string) {
   return z
     .string({ error: `${what} is missing.` })
     .max(max, `${what} is longer than ${max} characters.`)
-    .regex(PLAIN, `${what} has characters that cannot be shown.`);
+    .overwrite(withoutUnseen)
+    .regex(PLAIN, `${what} has characters that cannot be shown.`)
+    .refine(unpiled, `${what} has too many marks on one letter.`);
 }
 
 /** One line of text as people type it: trimmed, and something in it. */
@@ -49,5 +74,11 @@ export function textSchema(max: number, what: string) {
   return z
     .string()
     .max(max, `${what} is longer than ${max} characters.`)
-    .regex(PLAIN_LINES, `${what} has characters that cannot be shown.`);
+    .overwrite(withoutUnseen)
+    .regex(PLAIN_LINES, `${what} has characters that cannot be shown.`)
+    .refine(unpiled, `${what} has too many marks on one letter.`);
+}
+
+function unpiled(text: string): boolean {
+  return !PILED_UP.test(text);
 }
