@@ -191,11 +191,11 @@ describe('files of tunes', () => {
         'This file is not text.',
       ],
       [
-        'without columns',
-        Buffer.from('One,A\nTwo,D'),
+        'no list of tunes',
+        Buffer.from('Invoice,Total\nA-1,20'),
         'tunes.csv',
         422,
-        /^The first row has to name the columns/,
+        /^This is no list of tunes: the first row has to name the columns/,
       ],
       [
         'too long',

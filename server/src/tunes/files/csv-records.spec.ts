@@ -47,6 +47,17 @@ describe('readRecords', () => {
     ]);
   });
 
+  it('does what a first line says parts the cells, and counts signs outside quotes alone', () => {
+    expect(read('sep=;\r\ntitle;key\r\nOne;A').records).toEqual([
+      { line: 2, cells: ['title', 'key'] },
+      { line: 3, cells: ['One', 'A'] },
+    ]);
+    expect(cells('"a, b, c";key\nOne;A')).toEqual([
+      ['a, b, c', 'key'],
+      ['One', 'A'],
+    ]);
+  });
+
   it.each(['\n', '\r\n', '\r'])('says on which line a record begins, lines ending in %j', (end) => {
     const lines = ['title,notes', '', 'One,"first', '', 'third"', '', '', 'Two,"a', 'b"', 'Three,'];
     expect(read(lines.join(end)).records.map(({ line }) => line)).toEqual([1, 3, 8, 10]);

@@ -33,10 +33,12 @@ export function readRecords(
 ): { readonly records: readonly CsvRecord[]; readonly unread: readonly UnreadRecord[] } {
   const records: CsvRecord[] = [];
   const unread: UnreadRecord[] = [];
-  const delimiter = delimiterOf(text);
-  let rest = Buffer.from(text);
+  // Some spreadsheets write what parts their cells into a line of its own.
+  const [stated = '', sign] = /^sep=([,;\t])\s*?(?:\r\n|\n|\r)/.exec(text) ?? [];
+  const delimiter = sign ?? delimiterOf(text);
+  let rest = Buffer.from(text.slice(stated.length));
   // Lines before `rest`, then before the record that is read next.
-  let lines = 0;
+  let lines = stated === '' ? 0 : 1;
   while (rest.length > 0 && records.length <= limit) {
     let bytes = 0;
     const on_record = (chunk: unknown): null => {
@@ -81,7 +83,7 @@ function countLineEnds(text: string): number {
 
 /** The comma; or what spreadsheets in other languages put in its place, when the first line has more of those. */
 function delimiterOf(text: string): string {
-  const first = /^\s*([^\r\n]*)/.exec(text)?.[1] ?? '';
+  const first = /^\s*([^\r\n]*)/.exec(text)?.[1]?.replace(/"[^"]*"/g, '') ?? '';
   const counts = [',', ';', '\t'].map((sign) => ({ sign, count: first.split(sign).length }));
   return counts.reduce((most, other) => (other.count > most.count ? other : most)).sign;
 }

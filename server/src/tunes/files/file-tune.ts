@@ -4,6 +4,7 @@ import type { Mode } from '@pegwell/shared/music/mode';
 import { parseAccepted, type Tuned } from '@pegwell/shared/music/tuning';
 import type { Accepted } from '@pegwell/shared/tunes/kind-tunings';
 import type { TuneContent } from '../tune-content';
+import { findTunings, type FoundTunings } from './found-tunings';
 
 /** The fields of a tune that are plain words, in the order of a file's columns. */
 export const WORD_FIELDS = ['title', 'rhythm', 'parts', 'composer', 'source', 'notes'] as const;
@@ -26,6 +27,8 @@ export interface RawTune {
   readonly keyLine: number;
   /** Tunings, by the word that names the kind. */
   readonly cells: readonly (Written & { readonly kind: string })[];
+  /** Words outside the tune's own fields that may speak of a tuning. */
+  readonly hints?: readonly Written[];
   readonly problems: readonly LineProblem[];
 }
 
@@ -43,6 +46,10 @@ export interface FileTune {
   readonly words: Partial<Omit<TuneContent, 'stated'>>;
   readonly keyLine: number;
   readonly stated: Accepted;
+  /** Tunings that its words speak of, for kinds on which `stated` is silent. */
+  readonly found: readonly FoundTunings[];
+  /** The title without the tuning that was found in brackets at its end; null where none was. */
+  readonly plainTitle: string | null;
   /** Any of them keeps the tune out. */
   readonly problems: readonly LineProblem[];
 }
@@ -52,6 +59,9 @@ export interface TuneFile {
   readonly tunes: readonly FileTune[];
   readonly problems: readonly LineProblem[];
 }
+
+/** `June Apple (AEAE)` */
+const BRACKET_AT_END = /^(.*\S)\s*[([]([^()[\]]{3,60})[)\]]$/s;
 
 /** Characters of a kind's cell: far more than twenty tunings need. */
 const LONGEST_CELL = 2_000;
@@ -78,7 +88,21 @@ export function understandTune(raw: RawTune): FileTune {
   }
   const title = raw.words.title?.text.trim() ?? '';
   const { line, id, keyLine } = raw;
-  return { line, title: title === '' ? null : title, id, words, keyLine, stated, problems };
+  const [, plain = null, bracket = ''] = BRACKET_AT_END.exec(words.title ?? '') ?? [];
+  const inTitle = findTunings(bracket);
+  const hints = (raw.hints ?? []).flatMap(({ text }) => findTunings(text.slice(0, LONGEST_CELL)));
+  const inWords = [words.notes, words.source].flatMap((text) => findTunings(text ?? ''));
+  return {
+    ...{ line, title: title === '' ? null : title, id, words, keyLine, stated, problems },
+    found: firstOfEachKind([...inTitle, ...hints, ...inWords]).filter(
+      ({ kind }) => !Object.hasOwn(stated, kind),
+    ),
+    plainTitle: inTitle.length > 0 ? plain : null,
+  };
+}
+
+function firstOfEachKind(found: readonly FoundTunings[]): FoundTunings[] {
+  return found.filter(({ kind }, at) => found.findIndex((other) => other.kind === kind) === at);
 }
 
 function sentence(error: { readonly issues: readonly { readonly message: string }[] }): string {

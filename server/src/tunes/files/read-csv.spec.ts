@@ -78,9 +78,95 @@ describe('readCsv', () => {
     ]);
   });
 
-  it('refuses a file that names no columns', () => {
-    expect(readCsv('Soldier,A\nJoy,D', 10)).toEqual({
-      reason: 'The first row has to name the columns; none of them is named title.',
+  it.each([',', ';', '\t'])(
+    'tells columns by what stands in them where the first row names none, by %j',
+    (sign) => {
+      const rows = [
+        ['1', 'A', 'Lantern Hill', 'x'],
+        ['2', 'D dorian', 'Cold Kettle', ''],
+        ['3', 'Bb', 'Slack Tide', ''],
+      ];
+      const { tunes, problems } = read(...rows.map((row) => row.join(sign)));
+      expect(tunes.map(({ line, words }) => [line, words.title, words.key, words.mode])).toEqual([
+        [1, 'Lantern Hill', 'A', undefined],
+        [2, 'Cold Kettle', 'D', 'dorian'],
+        [3, 'Slack Tide', 'Bb', undefined],
+      ]);
+      const message =
+        'The first row names no columns: column 2 as key, column 3 as title. The others are left out.';
+      expect(problems).toEqual([{ line: 1, message }]);
+    },
+  );
+
+  it('takes a column of modes too, and leaves an odd row to its own problem', () => {
+    const rows = ['One,A,dorian', 'Two,D,mix', 'Three,G,major', 'Four,H,minor', 'Five,C,minor', 'Six,F,'];
+    const { tunes } = read(...rows);
+    expect(tunes.map(({ words, problems }) => [words.title, words.mode, problems.length])).toEqual([
+      ...[
+        ['One', 'dorian', 0],
+        ['Two', 'mixolydian', 0],
+        ['Three', 'major', 0],
+      ],
+      ...[
+        ['Four', undefined, 1],
+        ['Five', 'minor', 0],
+        ['Six', undefined, 0],
+      ],
+    ]);
+  });
+
+  it('takes what people call columns, where none has its own name', () => {
+    const [tune] = read(
+      'Tune,Tonic,Type,Learnt from,Comments,Fiddle tuning',
+      'One,A,reel,me,slow,AEAE',
+    ).tunes;
+    expect(tune).toMatchObject({
+      words: { title: 'One', key: 'A', rhythm: 'reel', source: 'me', notes: 'slow' },
+      stated: { fiddle: [{ pitches: ['A3', 'E4', 'A4', 'E5'] }] },
     });
+    const { tunes, problems } = read('name,title,key', 'Uno,One,A');
+    expect(tunes[0]!.title).toBe('One');
+    expect(problems).toEqual([{ line: 1, message: 'The column "name" is not known and is left out.' }]);
+  });
+
+  it('proposes a tuning that is found in words or in a column of no kind, and states none', () => {
+    const file = read(
+      'title,key,tuning,notes,banjo',
+      'One (AEAE),A,,,',
+      'Two,A,gDGBD,,',
+      'Three,A,,"fiddle tuned ADAE, banjo gDGBD",gCGCD',
+      'Four (AEAE),A,,fiddle tuned GDAE,',
+    );
+    expect(
+      file.tunes.map(({ found, plainTitle }) => [plainTitle, ...found.map(({ kind, said }) => [kind, said])]),
+    ).toEqual([
+      ['One', ['fiddle', 'AEAE']],
+      [null, ['banjo', 'gDGBD']],
+      // What is stated needs no proposal.
+      [null, ['fiddle', 'fiddle tuned ADAE']],
+      ['Four', ['fiddle', 'AEAE']],
+    ]);
+    expect(file.tunes.map(({ stated }) => Object.keys(stated))).toEqual([[], [], ['banjo'], []]);
+  });
+
+  it('takes short rows for rows of empty cells, and long ones where nothing more stands in them', () => {
+    const { tunes } = read('title,key,notes', 'One,A', 'Two,A,,,,', 'Three', 'Four,A,,x');
+    expect(tunes.map(({ title, problems }) => [title, problems.length])).toEqual([
+      ...[
+        ['One', 0],
+        ['Two', 0],
+        ['Three', 0],
+        ['Four', 1],
+      ],
+    ]);
+  });
+
+  it.each([
+    ['One\nTwo\nThree', /^This is no list of tunes/],
+    ['Invoice,Total\nA-1,20\nA-2,30', /^This is no list of tunes/],
+    ['<html><body>\n<p>Tunes</p>', /^This is no list of tunes/],
+    ['key,notes\nA,slow', /^The first row has to name the columns; none of them is named title\.$/],
+  ])('refuses %j, which is no list of tunes', (text, reason) => {
+    expect(readCsv(text, 10)).toEqual({ reason: expect.stringMatching(reason) });
   });
 });

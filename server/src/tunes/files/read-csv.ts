@@ -1,7 +1,7 @@
+import { columnProblems, guessColumns, guessProblem, readColumns, type Column } from './csv-columns';
+import { readRecords, type CsvRecord } from './csv-records';
 import {
-  kindNamed,
   understandTune,
-  WORD_FIELDS,
   type FileTune,
   type LineProblem,
   type RawTune,
@@ -9,15 +9,8 @@ import {
   type WordField,
   type Written,
 } from './file-tune';
-import { readRecords, type CsvRecord } from './csv-records';
 import { unquoteFormula } from './formula-quote';
 import { readKeyCells } from './key-cell';
-
-/** What a column holds; null: nothing that is read here. */
-type Column =
-  | { readonly field: WordField | 'id' | 'key' | 'mode' }
-  | { readonly kind: string }
-  | { readonly field: null };
 
 /** Nothing in it can be a tune. */
 export interface NoTable {
@@ -25,50 +18,39 @@ export interface NoTable {
 }
 
 /**
- * The tunes of a table (RFC 4180), one a row. The first row names the columns, in any order and case; a kind's
- * column is named by its id or its name.
+ * The tunes of a table (RFC 4180), one a row. The first row names the columns; where it names none that is known,
+ * they are told by what stands in them.
  * @param limit at most so many rows are read, and one more
  */
 export function readCsv(text: string, limit: number): TuneFile | NoTable {
   const { records, unread } = readRecords(text, limit + 1);
-  const [head, ...rows] = records;
+  const [head] = records;
   if (!head) return { reason: 'No row of this file can be read.' };
-  const columns = head.cells.map((name) => readColumn(unquoteFormula(name)));
-  const has = (field: string) => columns.some((column) => 'field' in column && column.field === field);
-  if (!has('title') && !has('id')) {
+  const names = head.cells.map(unquoteFormula);
+  const named = readColumns(names);
+  const isHead = named.some((column) => 'kind' in column || column.field !== null);
+  const columns = isHead ? named : guessColumns(records.map(({ cells }) => cells));
+  if (columns === null) {
+    return {
+      reason: 'This is no list of tunes: the first row has to name the columns, and none is named title.',
+    };
+  }
+  if (!has(columns, 'title') && !has(columns, 'id')) {
     return { reason: 'The first row has to name the columns; none of them is named title.' };
   }
-  const tunes = rows
+  const tunes = records
+    .slice(isHead ? 1 : 0)
     .filter(({ cells }) => cells.some((cell) => cell.trim() !== ''))
     .map((row) => readRow(row, columns));
   const lost = unread.map(({ line, message }) => broken(line, message));
   return {
     tunes: [...tunes, ...lost].sort((one, other) => one.line - other.line),
-    problems: headProblems(head, columns),
+    problems: isHead ? columnProblems(head.line, names, columns) : [guessProblem(head.line, columns)],
   };
 }
 
-function readColumn(name: string): Column {
-  const word = name.trim().toLowerCase();
-  const field = (['id', 'key', 'mode', ...WORD_FIELDS] as const).find((known) => known === word);
-  if (field) return { field };
-  const kind = kindNamed(word);
-  return kind ? { kind: kind.id } : { field: null };
-}
-
-/** Columns that are passed over are told, so that nothing is lost unseen. */
-function headProblems({ line, cells }: CsvRecord, columns: readonly Column[]): LineProblem[] {
-  const seen = new Set<string>();
-  return columns.flatMap((column, index) => {
-    const name = cells[index]?.trim().slice(0, 40) ?? '';
-    const known = 'kind' in column ? column.kind : column.field;
-    if (known === null) {
-      return name === '' ? [] : [{ line, message: `The column "${name}" is not known and is left out.` }];
-    }
-    if (seen.has(known)) return [{ line, message: `The column "${name}" is there twice; the first counts.` }];
-    seen.add(known);
-    return [];
-  });
+function has(columns: readonly Column[], field: string): boolean {
+  return columns.some((column) => 'field' in column && column.field === field);
 }
 
 function readRow({ line, cells }: CsvRecord, columns: readonly Column[]): FileTune {
@@ -79,7 +61,7 @@ function readRow({ line, cells }: CsvRecord, columns: readonly Column[]): FileTu
       message: `This row has ${cells.length} cells for ${columns.length} columns: a cell with a comma stands in quotes.`,
     });
   }
-  const words: Partial<Record<WordField | 'id' | 'key' | 'mode', Written>> = {};
+  const words: Partial<Record<WordField | 'id' | 'key' | 'mode' | 'tuning', Written>> = {};
   const tunings = new Map<string, Written & { readonly kind: string }>();
   columns.forEach((column, index) => {
     const written = { text: unquoteFormula(cells[index] ?? ''), line };
@@ -87,12 +69,13 @@ function readRow({ line, cells }: CsvRecord, columns: readonly Column[]): FileTu
       if (!tunings.has(column.kind)) tunings.set(column.kind, { kind: column.kind, ...written });
     } else if (column.field !== null) words[column.field] ??= written;
   });
-  const { id, key: keyCell, mode: modeCell, ...plain } = words;
+  const { id, key: keyCell, mode: modeCell, tuning, ...plain } = words;
   const key = readKeyCells(keyCell?.text ?? '', modeCell?.text ?? '');
   if (!key.ok) problems.push({ line, message: key.reason });
   const raw: RawTune = {
     ...{ line, keyLine: line, words: plain, problems, cells: [...tunings.values()] },
     id: id?.text.trim() ?? null,
+    hints: tuning ? [tuning] : [],
     ...(key.ok ? key.value : { tonic: null, mode: null }),
   };
   return understandTune(raw);
@@ -100,7 +83,7 @@ function readRow({ line, cells }: CsvRecord, columns: readonly Column[]): FileTu
 
 function broken(line: number, message: string): FileTune {
   return {
-    ...{ line, title: null, id: null, words: {}, keyLine: line, stated: {} },
+    ...{ line, title: null, id: null, words: {}, keyLine: line, stated: {}, found: [], plainTitle: null },
     problems: [{ line, message }],
   };
 }
