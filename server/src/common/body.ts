@@ -1,5 +1,6 @@
 import type { NextFunction, Request, Response } from 'express';
 import { json } from 'express';
+import { bodyShapeError } from './body-shape';
 import { ProblemException } from './problem';
 
 /** Bytes of a JSON body; a board of 300 entries is under 100 kB. */
@@ -32,6 +33,8 @@ export function readBody(request: Request, response: Response, next: NextFunctio
     return;
   }
   parse(request, response, (error: unknown) => {
+    const shape = error === undefined ? bodyShapeError(request.body) : null;
+    if (shape) request.bodyProblem = new ProblemException('not-valid', shape.message, { errors: [shape] });
     if (error !== undefined) request.bodyProblem = bodyProblem(error);
     next();
   });
