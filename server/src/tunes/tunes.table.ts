@@ -1,5 +1,15 @@
 import { sql } from 'drizzle-orm';
-import { boolean, index, integer, pgTable, primaryKey, text, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import {
+  boolean,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  primaryKey,
+  text,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core';
 import { circles } from '../circles/circles.table';
 import { createdAt, id, instant, removedAt } from '../database/columns';
 
@@ -68,14 +78,21 @@ export const settingTunings = pgTable(
   (table) => [primaryKey({ columns: [table.settingId, table.kind, table.rank] })],
 );
 
-/** An import under way: what the progress bar reads. Written outside the import's own transaction. */
+/**
+ * An import, under way or done, for a day: what the progress bar reads, and the answer that is given again to who
+ * lost it. How far it is gets written outside the import's own transaction.
+ */
 export const imports = pgTable('imports', {
   id: id(),
   circleId: uuid()
     .notNull()
     .references(() => circles.id, { onDelete: 'cascade' }),
+  /** SHA-256 of the file and the choices: the id stands for these alone. */
+  digest: text(),
   total: integer().notNull(),
   written: integer().notNull().default(0),
+  /** What became of the file, once all of it is written. */
+  report: jsonb(),
   finishedAt: instant(),
   createdAt: createdAt(),
 });
