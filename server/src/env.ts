@@ -47,6 +47,8 @@ const envSchema = z.object({
     .string()
     .regex(/^smtps?:\/\//, 'PEGWELL_MAIL_URL begins with smtp:// or smtps://.')
     .optional(),
+  /** The address that mail comes from. */
+  PEGWELL_MAIL_FROM: z.email('PEGWELL_MAIL_FROM is an e-mail address.').optional(),
   PEGWELL_DEMO: yesNo('PEGWELL_DEMO'),
   PEGWELL_INSECURE_LAN: yesNo('PEGWELL_INSECURE_LAN'),
   PEGWELL_LOG: z.enum(['silent', 'error', 'warn', 'info', 'debug']).default('info'),
