@@ -17,7 +17,10 @@ describe('accounts', () => {
     const values = fresh();
     const registered = await caller.post('/api/auth/register').send(values).expect(201);
     expect(registered.body).toEqual({
-      user: { id: expect.any(String) as string, email: values.email, displayName: 'Ada' },
+      user: {
+        ...{ id: expect.any(String) as string, email: values.email },
+        ...{ displayName: 'Ada', confirmed: false },
+      },
     });
     expect(registered.headers['set-cookie']?.[0]).toMatch(/^pegwell=.*; Path=\/;.* HttpOnly; SameSite=Lax$/);
     const me = await caller.get('/api/auth/me').expect(200);

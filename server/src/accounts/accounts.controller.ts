@@ -57,7 +57,7 @@ export class AccountsController {
   @Get('me')
   @ForAccounts()
   @ApiResponse({ status: 200, type: MeDto.Output })
-  async me(@Caller() { id, email, displayName }: Account): Promise<Me> {
-    return { user: { id, email, displayName }, circles: await this.circles.listOf(id) };
+  async me(@Caller() { id, email, displayName, confirmed }: Account): Promise<Me> {
+    return { user: { id, email, displayName, confirmed }, circles: await this.circles.listOf(id) };
   }
 }

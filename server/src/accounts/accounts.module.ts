@@ -1,12 +1,21 @@
 import { Module } from '@nestjs/common';
 import { JwtModule } from '@nestjs/jwt';
 import { ENV, type Env } from '../env';
+import { MailModule } from '../mail/mail.module';
+import { AccountLetters } from './account-letters';
 import { AccountsRepository } from './accounts.repository';
 import { AccountsService } from './accounts.service';
+import { AddressService } from './address.service';
+import { LinksRepository } from './links.repository';
+import { LinksService } from './links.service';
+import { OwnAccountService } from './own-account.service';
+import { RecoveryService } from './recovery.service';
+import { SignInsRepository } from './sign-ins.repository';
 import { SignInsService } from './sign-ins.service';
 
 @Module({
   imports: [
+    MailModule,
     JwtModule.registerAsync({
       inject: [ENV],
       useFactory: (env: Env) => ({
@@ -17,7 +26,18 @@ import { SignInsService } from './sign-ins.service';
       }),
     }),
   ],
-  providers: [AccountsRepository, AccountsService, SignInsService],
-  exports: [AccountsService, SignInsService],
+  providers: [
+    AccountLetters,
+    AccountsRepository,
+    AccountsService,
+    AddressService,
+    LinksRepository,
+    LinksService,
+    OwnAccountService,
+    RecoveryService,
+    SignInsRepository,
+    SignInsService,
+  ],
+  exports: [AccountsService, AddressService, OwnAccountService, RecoveryService, SignInsService],
 })
 export class AccountsModule {}

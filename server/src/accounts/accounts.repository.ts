@@ -1,10 +1,10 @@
 import { Injectable } from '@nestjs/common';
-import { and, eq, inArray, isNull } from 'drizzle-orm';
+import { eq, inArray } from 'drizzle-orm';
 import type { Database } from '../database/database';
-import { accounts, signIns } from './accounts.table';
+import { accounts } from './accounts.table';
 
 export type AccountRow = typeof accounts.$inferSelect;
-export type SignInRow = typeof signIns.$inferSelect;
+type Changes = Partial<typeof accounts.$inferInsert>;
 
 @Injectable()
 export class AccountsRepository {
@@ -23,6 +23,11 @@ export class AccountsRepository {
     return row ?? null;
   }
 
+  async byId(db: Database, accountId: string): Promise<AccountRow | null> {
+    const [row] = await this.byIds(db, [accountId]);
+    return row ?? null;
+  }
+
   async byIds(db: Database, accountIds: readonly string[]): Promise<AccountRow[]> {
     if (accountIds.length === 0) return [];
     return db
@@ -31,39 +36,19 @@ export class AccountsRepository {
       .where(inArray(accounts.id, [...accountIds]));
   }
 
-  async insertSignIn(db: Database, accountId: string, userAgent: string | null): Promise<SignInRow> {
-    const [row] = await db.insert(signIns).values({ accountId, userAgent }).returning();
-    if (!row) throw new Error('a sign-in was not stored');
-    return row;
-  }
-
-  /** The sign-in with its account, unless it was ended. */
-  async openSignIn(
-    db: Database,
-    signInId: string,
-  ): Promise<{ signIn: SignInRow; account: AccountRow } | null> {
-    const [row] = await db
-      .select({ signIn: signIns, account: accounts })
-      .from(signIns)
-      .innerJoin(accounts, eq(accounts.id, signIns.accountId))
-      .where(and(eq(signIns.id, signInId), isNull(signIns.endedAt)));
+  /** The account, held until the transaction ends. */
+  async hold(tx: Database, accountId: string): Promise<AccountRow | null> {
+    const [row] = await tx.select().from(accounts).where(eq(accounts.id, accountId)).for('update');
     return row ?? null;
   }
 
-  /** Only the first of two that renew at once changes the row; the answer says whether it was this one. */
-  async renewSignIn(db: Database, signInId: string, generation: number): Promise<boolean> {
-    const rows = await db
-      .update(signIns)
-      .set({ generation: generation + 1, renewedAt: new Date() })
-      .where(and(eq(signIns.id, signInId), eq(signIns.generation, generation), isNull(signIns.endedAt)))
-      .returning({ id: signIns.id });
-    return rows.length === 1;
+  /** Null when it is gone. */
+  async update(db: Database, accountId: string, changes: Changes): Promise<AccountRow | null> {
+    const [row] = await db.update(accounts).set(changes).where(eq(accounts.id, accountId)).returning();
+    return row ?? null;
   }
 
-  async endSignIn(db: Database, signInId: string): Promise<void> {
-    await db
-      .update(signIns)
-      .set({ endedAt: new Date() })
-      .where(and(eq(signIns.id, signInId), isNull(signIns.endedAt)));
+  async remove(db: Database, accountId: string): Promise<void> {
+    await db.delete(accounts).where(eq(accounts.id, accountId));
   }
 }

@@ -1,52 +1,51 @@
 import { Inject, Injectable } from '@nestjs/common';
 import type { Login, Register, User } from '@pegwell/shared/contract/accounts';
-import { compare, hash } from 'bcryptjs';
+import { emailKeyOf } from '../common/email-key';
 import { ProblemException } from '../common/problem';
 import { DATABASE, type Database, type RootDatabase } from '../database/database';
 import { AccountsRepository, type AccountRow } from './accounts.repository';
-import { isCommonPassword } from './common-passwords';
-
-/** About 60 ms here with bcryptjs on one core. */
-const BCRYPT_COST = 10;
-/** Compared against when nobody has the address, so that the answer takes as long. */
-const NOBODY = '$2b$10$Cm.wOXmEPxSHEB7ILtt8mOr5As.iD.SYYbKvb37JXrUip7fzuxBRS';
+import { AddressService, emailTaken } from './address.service';
+import { hashPassword, isHashedOtherwise, isPassword, refuseCommonPassword } from './passwords';
+import { toUser } from './user';
 
 @Injectable()
 export class AccountsService {
   constructor(
     @Inject(DATABASE) private readonly db: RootDatabase,
     private readonly accounts: AccountsRepository,
+    private readonly addresses: AddressService,
   ) {}
 
   async register(values: Register): Promise<User> {
-    return toUser(await this.create(this.db, values));
+    const passwordHash = await newPasswordHash(values);
+    return this.db.transaction(async (tx) => {
+      const row = await this.insert(tx, values, passwordHash, null);
+      await this.addresses.askToConfirm(tx, row);
+      return toUser(row);
+    });
   }
 
-  /** Also for the demo, inside its transaction. */
-  async create(db: Database, { email, password, displayName }: Register): Promise<AccountRow> {
-    if (isCommonPassword(password)) {
-      const message = 'This password is among the first that anybody would try. Take another.';
-      throw new ProblemException('not-valid', message, { errors: [{ path: 'password', message }] });
-    }
-    const passwordHash = await hash(password, BCRYPT_COST);
-    const row = await this.accounts.insert(db, {
-      email,
-      emailKey: emailKeyOf(email),
-      displayName,
-      passwordHash,
-    });
-    if (!row) {
-      const message = 'An account with this e-mail exists. Sign in instead.';
-      throw new ProblemException('email-taken', message, { errors: [{ path: 'email', message }] });
-    }
-    return row;
+  /** An account that nobody has to confirm: the demo's, or one that whoever runs the server made. */
+  async createConfirmed(db: Database, values: Register): Promise<User> {
+    return toUser(await this.insert(db, values, await newPasswordHash(values), new Date()));
   }
 
   async checkPassword({ email, password }: Login): Promise<User> {
     const row = await this.accounts.byEmailKey(this.db, emailKeyOf(email));
-    const right = await compare(password, row?.passwordHash ?? NOBODY);
+    const right = await isPassword(password, row?.passwordHash ?? null);
     if (!row || !right) throw new ProblemException('wrong-credentials');
+    if (isHashedOtherwise(row.passwordHash)) {
+      await this.accounts.update(this.db, row.id, { passwordHash: await hashPassword(password) });
+    }
     return toUser(row);
+  }
+
+  /** @throws wrong-password at `current`, which is no 401: a page would take the sign-in for ended */
+  async checkPresent(accountId: string, current: string): Promise<AccountRow> {
+    const row = await this.accounts.byId(this.db, accountId);
+    if (row && (await isPassword(current, row.passwordHash))) return row;
+    const message = 'This is not your password.';
+    throw new ProblemException('wrong-password', message, { errors: [{ path: 'current', message }] });
   }
 
   async byIds(db: Database, accountIds: readonly string[]): Promise<Map<string, User>> {
@@ -62,13 +61,34 @@ export class AccountsService {
     const row = await this.accounts.byEmailKey(db, emailKeyOf(email));
     return row && toUser(row);
   }
+
+  /** What is kept of the account itself, for its export. */
+  async recorded(db: Database, accountId: string) {
+    const row = await this.accounts.byId(db, accountId);
+    if (!row) throw new ProblemException('not-signed-in');
+    const { id, email, displayName, createdAt, confirmedAt } = row;
+    return { id, email, displayName, createdAt, confirmedAt };
+  }
+
+  /** Takes the account away, and with it its sign-ins, links and memberships; what it did stays, without a name. */
+  async remove(tx: Database, accountId: string): Promise<void> {
+    await this.accounts.remove(tx, accountId);
+  }
+
+  private async insert(
+    db: Database,
+    { email, displayName }: Register,
+    passwordHash: string,
+    confirmedAt: Date | null,
+  ): Promise<AccountRow> {
+    const emailKey = emailKeyOf(email);
+    const row = await this.accounts.insert(db, { email, emailKey, displayName, passwordHash, confirmedAt });
+    if (!row) throw emailTaken();
+    return row;
+  }
 }
 
-export function toUser(row: AccountRow): User {
-  return { id: row.id, email: row.email, displayName: row.displayName };
-}
-
-/** What addresses are compared by: compatibility forms and case folded away. */
-export function emailKeyOf(email: string): string {
-  return email.trim().normalize('NFKC').toLowerCase();
+function newPasswordHash({ email, displayName, password }: Register): Promise<string> {
+  refuseCommonPassword(password, [email, displayName]);
+  return hashPassword(password);
 }

@@ -3,6 +3,8 @@ import { AccountsModule } from '../accounts/accounts.module';
 import { CirclesController } from './circles.controller';
 import { CirclesRepository } from './circles.repository';
 import { CirclesService } from './circles.service';
+import { DepartureRepository } from './departure.repository';
+import { DepartureService } from './departure.service';
 import { HistoryController } from './history.controller';
 import { HistoryRepository } from './history.repository';
 import { HistoryService } from './history.service';
@@ -16,11 +18,13 @@ import { UsualTuningsService } from './usual-tunings.service';
   providers: [
     CirclesRepository,
     CirclesService,
+    DepartureRepository,
+    DepartureService,
     HistoryRepository,
     HistoryService,
     MembersService,
     UsualTuningsService,
   ],
-  exports: [CirclesService, HistoryService, MembersService, UsualTuningsService],
+  exports: [CirclesService, DepartureService, HistoryService, MembersService, UsualTuningsService],
 })
 export class CirclesModule {}

@@ -28,6 +28,8 @@ export interface Account {
   readonly id: string;
   readonly email: string;
   readonly displayName: string;
+  /** Whether mail to the address is known to reach them: without it, nothing they cause is mailed to others. */
+  readonly confirmed: boolean;
   readonly signInId: string;
 }
 

@@ -57,7 +57,9 @@ function interceptorFor(name: LimitName): Type<NestInterceptor> {
   return LimitInterceptor;
 }
 
-const isWrong = (error: unknown) => error instanceof ProblemException && error.code === 'wrong-credentials';
+const isWrong = (error: unknown) =>
+  error instanceof ProblemException &&
+  (error.code === 'wrong-credentials' || error.code === 'wrong-password');
 
 /** The e-mail address in a body that nobody has judged yet: anything may stand there. */
 function addressIn(request: Request): string | undefined {
