@@ -86,7 +86,9 @@ describe('GET /api/openapi.json', () => {
       ({ name, operation }) => /^(POST|PUT|PATCH)/.test(name) && !operation.requestBody,
     );
     // Signing out, bringing a tune back, asking for another code or another mail take none.
-    expect(bare.map(({ name }) => name).filter((name) => !/logout|restore|code$|again$/.test(name))).toEqual([]);
+    expect(bare.map(({ name }) => name).filter((name) => !/logout|restore|code$|again$/.test(name))).toEqual(
+      [],
+    );
   });
 
   it('points only to schemas that are there', () => {

@@ -7,7 +7,7 @@ import { follow, tune } from '../features/live/follow-fixtures';
 import { mockApi, ok, type Answer } from '../lib/mock-api';
 import { renderApp } from './test-app';
 
-const user = { id: 'u1', email: 'ada@example.org', displayName: 'Ada Weir' };
+const user = { id: 'u1', email: 'ada@example.org', displayName: 'Ada Weir', confirmed: true };
 const circle = {
   id: 'c1',
   name: 'Heron Weir Circle',

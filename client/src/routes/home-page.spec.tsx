@@ -4,7 +4,7 @@ import { describe, expect, it } from 'vitest';
 import { mockApi, ok } from '../lib/mock-api';
 import { renderApp } from './test-app';
 
-const user = { id: 'u1', email: 'ada@example.org', displayName: 'Ada Weir' };
+const user = { id: 'u1', email: 'ada@example.org', displayName: 'Ada Weir', confirmed: true };
 const circle = {
   id: 'c1',
   name: 'Heron Weir Circle',

@@ -5,7 +5,7 @@ import { mockApi } from '../lib/mock-api';
 import { renderApp } from './test-app';
 import { safeNext } from './use-after-sign-in';
 
-const user = { id: 'u1', email: 'ada@example.org', displayName: 'Ada Weir' };
+const user = { id: 'u1', email: 'ada@example.org', displayName: 'Ada Weir', confirmed: true };
 const circles = [{ id: 'c1', name: 'Heron Weir Circle', role: 'host' }];
 const nobody = () => ({
   status: 401,

@@ -24,7 +24,7 @@ export function circleAnswers(role: Role): Answers {
   };
   return {
     'GET /api/auth/me': ok({
-      user: { id: id(2), email: 'ada@example.org', displayName: 'Ada Weir' },
+      user: { id: id(2), email: 'ada@example.org', displayName: 'Ada Weir', confirmed: true },
       circles: [{ id: CIRCLE, name: circle.name, role }],
     }),
     [api('GET', '')]: ok(circle),
