@@ -14,8 +14,8 @@ import { randomProblem } from './random-problem';
 
 /** Tables of no size, so that trees must do it; tables too small for some kinds; tables for all. */
 const LIMITS: Record<string, BoundLimits> = {
-  trees: { joints: 400, together: 1, apart: 1 },
-  some: { joints: 400, together: 60, apart: 30 },
+  trees: { joints: 400, whole: 1, together: 1, apart: 1 },
+  some: { joints: 400, whole: 60, together: 60, apart: 30 },
   small: SMALL_BOUND,
 };
 

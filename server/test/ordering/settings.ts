@@ -4,7 +4,9 @@ import { SETTINGS, type SearchSettings } from '../../src/ordering/engine/search'
 export const BARE: SearchSettings = {
   ...SETTINGS,
   closerWidth: 1,
-  bounds: [{ limits: { joints: 400, together: 1, apart: 1 }, width: 1, improveSteps: 0, share: Infinity }],
+  bounds: [
+    { limits: { joints: 400, whole: 1, together: 1, apart: 1 }, width: 1, improveSteps: 0, share: Infinity },
+  ],
   lookSteps: 1,
   cheapSweep: 0,
 };

@@ -11,15 +11,22 @@ import { mostPegs, type Weights } from './weights';
 /** How much may go into the table of all kinds together, and into each table of some kinds. */
 export interface BoundLimits {
   readonly joints: number;
-  /** Cells times moves tried for each; about 5 ms per million. */
+  /** Cells times moves tried for each; about 5 ms per million. Of a table of all kinds that follows every group. */
+  readonly whole: number;
+  /** Of one that has to leave groups out. */
   readonly together: number;
   readonly apart: number;
 }
 
 /** Made in a few milliseconds, and enough for most evenings. */
-export const SMALL_BOUND: BoundLimits = { joints: 400, together: 400_000, apart: 100_000 };
+export const SMALL_BOUND: BoundLimits = { joints: 400, whole: 3_000_000, together: 400_000, apart: 100_000 };
 /** Made in tenths of a second. */
-export const LARGE_BOUND: BoundLimits = { joints: 400, together: 12_000_000, apart: 3_000_000 };
+export const LARGE_BOUND: BoundLimits = {
+  joints: 400,
+  whole: 12_000_000,
+  together: 12_000_000,
+  apart: 3_000_000,
+};
 
 /** More pins than these are followed as groups that are still to come. */
 const MOST_MILESTONES = 4;
@@ -30,6 +37,8 @@ const MOST_MILESTONES = 4;
  * kinds each, whose pegs add up.
  */
 export class Bound {
+  /** Whether one table of all kinds follows everything, so that more work would add nothing. */
+  readonly full: boolean;
   private readonly parts: readonly (readonly TuningBound[])[];
   private readonly milestones: readonly Milestone[];
   private readonly mostPegs: number;
@@ -51,22 +60,23 @@ export class Bound {
     this.milestones = milestonesOf(plan);
     this.mostPegs = mostPegs(compiled);
     const everyone = compiled.kinds.map((_, k) => k);
-    const table = (kinds: readonly number[], work: number): SubsetTable | null => {
+    const table = (kinds: readonly number[], whole: number, part: number): SubsetTable | null => {
       try {
         const tunings = new TuningMoves(compiled, kinds, goal, limits.joints, steps);
-        return new SubsetTable(tunings, plan, this.milestones, work, steps);
+        return new SubsetTable(tunings, plan, this.milestones, { whole, part }, steps);
       } catch (error) {
         if (error instanceof TooManyStands) return null;
         throw error;
       }
     };
-    const together = table(everyone, limits.together);
+    const together = table(everyone, limits.whole, limits.together);
     const parts: (readonly TuningBound[])[] = together ? [[together]] : [];
     if (together && !together.complete) parts.push([new TreeBound(together.tunings, plan, steps)]);
     if (everyone.length > 1 && !together?.complete) {
-      parts.push(clusters(everyone, (kinds) => table(kinds, limits.apart)));
+      parts.push(clusters(everyone, (kinds) => table(kinds, limits.apart, limits.apart)));
     }
     this.parts = parts;
+    this.full = together?.full ?? false;
     const isMilestone = new Set(this.milestones.map(({ position }) => position));
     this.milestonesAhead = fromTheEnd(plan, (position) => isMilestone.has(position));
     this.breaksAhead = fromTheEnd(plan, (position) => plan.setStart[position]!);

@@ -34,7 +34,7 @@ export interface SearchSettings {
 export const SETTINGS: SearchSettings = {
   lookSteps: 800_000,
   bounds: [
-    { limits: SMALL_BOUND, width: 32, improveSteps: 0, share: 60_000 },
+    { limits: SMALL_BOUND, width: 8, improveSteps: 0, share: 60_000 },
     { limits: LARGE_BOUND, width: 200, improveSteps: 600_000, share: Infinity },
   ],
   closerWidth: 24,
@@ -55,9 +55,9 @@ export interface Found {
 type Base = Pick<SweepOptions, 'bound' | 'steps' | 'keyWeight'>;
 
 /**
- * Three stages, each closer than the one before and bounded by its exact cost to go: tunings alone, then
- * capos, ranks and keys, then spaced rhythms too. Before each, narrow sweeps look for a good order; only
- * what can be better than the best order known is followed, so that an empty sweep is a proof.
+ * Stages, each closer than the one before and bounded by its exact cost to go: tunings alone, then capos, ranks
+ * and keys, then spaced rhythms too. Before each, narrow sweeps look for a good order; only what can be better
+ * than the best order known is followed, so that an empty sweep is a proof.
  */
 export class Search {
   private readonly compiled: Compiled;
@@ -121,19 +121,38 @@ export class Search {
     if (!isLess(this.least, this.best.cost)) return;
 
     // Only spaced rhythms stand between the bound and the best order known.
-    const coarse = this.deepened({ ...byTunings, stage: keys });
-    if (coarse === null) return;
+    const apart = this.least.high < this.best.cost.high;
+    const coarse = apart ? this.rhythmsSwept(byTunings) : this.deepened({ ...byTunings, stage: keys });
+    if (coarse === null || !isLess(this.least, this.best.cost)) return;
     sweepBack(coarse, this.best.cost, steps);
-    const byKeys = { ...swept.base, coarse };
-    this.look({ ...byKeys, stage: this.all }, this.settings.closerWidth);
-    this.deepened({ ...byKeys, stage: this.all, together: true });
+    const bySomething = { ...swept.base, coarse };
+    this.look({ ...bySomething, stage: this.all }, this.settings.closerWidth);
+    this.deepened({ ...bySomething, stage: this.all, together: true });
+  }
+
+  /**
+   * Where every order may have to break a rule, the breaks are settled with tunings and spaced rhythms alone:
+   * keys and capos would spread the many orders that tie until then over far more states.
+   */
+  private rhythmsSwept(byTunings: Base & Pick<SweepOptions, 'coarse'>): Swept | null {
+    const byKeys = this.least;
+    const rhythms = new Stage(this.compiled, this.plan, this.weights, 'rhythms', this.steps);
+    this.look({ ...byTunings, stage: rhythms }, this.settings.closerWidth);
+    const swept = this.deepened({ ...byTunings, stage: rhythms });
+    // An order with those breaks and the pegs and turning places of the stage of keys has at least its low too.
+    const breaks = this.least.high - byKeys.high;
+    if (breaks < Math.min(this.weights.peg, this.weights.stop)) {
+      this.raise({ high: this.least.high, low: byKeys.low });
+    }
+    return swept;
   }
 
   /** The first stage, under a bound that is quickly made, and where that leaves too much, a better one. */
   private tuningsSwept(stage: Stage): { readonly swept: Swept; readonly base: Base } | null {
     const { compiled, plan, problem, weights, steps } = this;
+    let bound: Bound | null = null;
     for (const { limits, width, improveSteps, share } of this.settings.bounds) {
-      const bound = new Bound(compiled, plan, problem.goal, weights, limits, steps);
+      if (!bound?.full) bound = new Bound(compiled, plan, problem.goal, weights, limits, steps);
       const root = new Int32Array(stage.stride);
       stage.start(root);
       this.raise({ high: bound.toGo(stage, root, 0, 0), low: 0 });

@@ -7,10 +7,12 @@ import type { Weights } from './weights';
 
 /**
  * How closely a sweep looks. `tunings`: entries with the same tunings are one class, and capos, ranks, rhythms
- * and keys cost nothing. `keys`: only spaced rhythms cost nothing. `all`: everything.
+ * and keys cost nothing. `rhythms`: tunings and spaced rhythms. `keys`: all but spaced rhythms. `all`: everything.
  * What costs nothing at a coarser stage makes its cost to go a bound for the finer one.
  */
-export type Closeness = 'tunings' | 'keys' | 'all';
+export type Closeness = 'tunings' | 'rhythms' | 'keys' | 'all';
+
+export const stageSeesKeys = (closeness: Closeness): boolean => closeness === 'keys' || closeness === 'all';
 
 /**
  * The units of a problem sorted into classes of which one is as good as another, and states packed as
@@ -48,7 +50,9 @@ export class Stage {
     readonly closeness: Closeness,
     steps: Steps,
   ) {
-    const grain: Grain = closeness === 'tunings' ? 'tuning' : 'stance';
+    const seesKeys = stageSeesKeys(closeness);
+    const seesSpaced = closeness === 'rhythms' || closeness === 'all';
+    const grain: Grain = seesKeys ? 'stance' : 'tuning';
     this.joints = new Joints(compiled, grain);
     this.moves = new MoveTable(this.joints, weights, steps);
     const { units } = plan;
@@ -66,7 +70,7 @@ export class Stage {
       return faces.push({ tonic, spaced }) - 1;
     };
     const keyOf = ({ tonic, spaced }: { tonic: number; spaced: boolean }): number => {
-      return closeness === 'tunings' ? 0 : face(tonic, closeness === 'all' && spaced);
+      return closeness === 'tunings' ? 0 : face(seesKeys ? tonic : -1, seesSpaced && spaced);
     };
     this.headKey = Int32Array.from(entriesOf, (entries) => keyOf(entries[0]!));
     this.tailKey = Int32Array.from(entriesOf, (entries) => keyOf(entries[entries.length - 1]!));

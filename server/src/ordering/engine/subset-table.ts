@@ -1,3 +1,4 @@
+import { closedSets, setsOf, type ClosedSets } from './closed-sets';
 import type { Steps } from './steps';
 import { NEVER, type TuningMove, type TuningMoves } from './tuning-moves';
 import type { Plan } from './units';
@@ -9,6 +10,12 @@ export interface Milestone {
   /** Positions before it, and after, that are not fixed. */
   readonly freeBefore: number;
   readonly freeAfter: number;
+}
+
+/** Cells times moves tried for each: of a table that follows every group, and of one that leaves some out. */
+export interface TableWork {
+  readonly whole: number;
+  readonly part: number;
 }
 
 /** Something that must still come: entries of a group, or one unit with rules of its own. */
@@ -32,6 +39,12 @@ interface Element {
  * passed from end to end, and before/after pairs in their order. Other positions and breaks play no part, so
  * the table bounds every order from below.
  *
+ * A group that can be played wherever another has just been is brought along by it: it takes no visit of its own
+ * while the other is still to come. So only closed sets have cells, which are far fewer than all (15 groups of an
+ * evening with alternatives and silent kinds: some 2,000 of 32,768). What a set says of positions is read
+ * either way in favour of passing a milestone: brought along counts as not done before it, and as not needing a
+ * place after it.
+ *
  * Where there are more elements than the work allowed, pairs are read as mere members of their groups, and
  * then the groups nearest to another are left out; both only lower the bound.
  */
@@ -40,29 +53,44 @@ export class SubsetTable {
   readonly bitsOf: readonly number[];
   /** Whether every group is followed. */
   readonly complete: boolean;
+  /** Whether every unit with rules of its own is followed too, so that more work would add nothing. */
+  readonly full: boolean;
   private readonly size: number;
+  /** By mask: its closed set. */
+  private readonly setOf: Int32Array;
+  private readonly sets: number;
   private readonly cells: Int32Array;
 
   constructor(
     readonly tunings: TuningMoves,
     private readonly plan: Plan,
     private readonly milestones: readonly Milestone[],
-    work: number,
+    work: TableWork,
     steps: Steps,
   ) {
-    const { elements, bitsOf, complete } = this.chosen(work / (milestones.length + 1));
+    const { elements, bitsOf, complete, full } = this.chosen(work);
     this.bitsOf = bitsOf;
     this.complete = complete;
+    this.full = full;
     this.size = elements.length;
-    this.cells = this.filled(elements, steps);
+    const closures = this.closures(elements);
+    const closed = closedSets(closures, Infinity)!;
+    this.setOf = setsOf(closed.masks, closures);
+    this.sets = closed.masks.length;
+    this.cells = this.filled(elements, closed, steps);
   }
 
   /** What is still to come from a joint stand; read by TuningMoves. */
   toGo(mask: number, joint: number, milestonesLeft: number): number {
-    return this.cells[((milestonesLeft << this.size) + mask) * this.tunings.joinedStands + joint]!;
+    return this.cells[(milestonesLeft * this.sets + this.setOf[mask]!) * this.tunings.joinedStands + joint]!;
   }
 
-  private chosen(work: number): { elements: Element[]; bitsOf: number[]; complete: boolean } {
+  private chosen(work: TableWork): {
+    elements: Element[];
+    bitsOf: number[];
+    complete: boolean;
+    full: boolean;
+  } {
     const { units } = this.plan;
     const { groupOf, moves } = this.tunings;
     const awaited = new Set(this.milestones.map(({ unit }) => unit));
@@ -72,24 +100,25 @@ export class SubsetTable {
     let ways = 0;
     for (const row of moves) for (const list of row) ways += list.length;
     const each = ways / Math.max(1, moves[0]!.length);
-    const fits = (count: number): boolean => count < 26 && 2 ** count * count * each <= work;
+    const fits = (groups: Iterable<number>, work: number): boolean => {
+      const most = work / (this.milestones.length + 1) / each;
+      return closedSets(this.closures(this.elements(own, [...groups])), most) !== null;
+    };
 
+    const rulesOfTheirOwn = own.length;
     let groups = this.groupsOf(own, awaited);
-    while (own.length > 0 && !fits(own.length + groups.size)) {
+    while (own.length > 0 && !fits(groups, work.whole)) {
       own.pop();
       groups = this.groupsOf(own, awaited);
     }
+    const complete = fits(groups, work.whole);
     let followed = [...groups];
-    while (followed.length > 0 && !fits(own.length + followed.length)) {
+    while (!complete && followed.length > 0 && !fits(followed, work.part)) {
       const nearest = this.nearest(followed);
       followed = followed.filter((group) => group !== nearest);
     }
 
-    const elements: Element[] = followed.map((group) => ({ group, unit: null, count: 0, atLeast: 1 }));
-    for (const unit of own) {
-      const { length } = units[unit]!.entries;
-      elements.push({ group: -1, unit, count: length, atLeast: length });
-    }
+    const elements = this.elements(own, followed);
     const bitsOf = units.map(({ entries, fixedAt }, unit) => {
       const itself = elements.findIndex((element) => element.unit === unit);
       if (itself !== -1) return 2 ** itself;
@@ -105,7 +134,30 @@ export class SubsetTable {
       }
       return bits;
     });
-    return { elements, bitsOf, complete: followed.length === groups.size };
+    return { elements, bitsOf, complete, full: complete && own.length === rulesOfTheirOwn };
+  }
+
+  private elements(own: readonly number[], groups: readonly number[]): Element[] {
+    const elements: Element[] = groups.map((group) => ({ group, unit: null, count: 0, atLeast: 1 }));
+    for (const unit of own) {
+      const { length } = this.plan.units[unit]!.entries;
+      elements.push({ group: -1, unit, count: length, atLeast: length });
+    }
+    return elements;
+  }
+
+  /** By element: itself, and the groups that can be played where it has just been, with nothing turned. */
+  private closures(elements: readonly Element[]): number[] {
+    const { groupOf } = this.tunings;
+    return elements.map(({ group, unit }, index) => {
+      const last = unit === null ? group : groupOf[this.plan.units[unit]!.entries.at(-1)!]!;
+      let mask = 1 << index;
+      if (last === -1) return mask;
+      elements.forEach((other, bit) => {
+        if (other.unit === null && bit !== index && this.tunings.follows(other.group, last)) mask |= 1 << bit;
+      });
+      return mask;
+    });
   }
 
   /** Groups of the units that are not followed one by one. */
@@ -135,18 +187,15 @@ export class SubsetTable {
   }
 
   /** Table by table, from the one with no milestone ahead to the one with all. */
-  private filled(elements: readonly Element[], steps: Steps): Int32Array {
-    const { tunings, plan, milestones, size } = this;
+  private filled(elements: readonly Element[], { masks, firsts }: ClosedSets, steps: Steps): Int32Array {
+    const { tunings, plan, milestones, size, setOf } = this;
     const width = tunings.joinedStands;
-    const sets = 2 ** size;
+    const sets = masks.length;
     const cells = new Int32Array((milestones.length + 1) * sets * width);
-    const left = new Int32Array(sets);
-    const undone = new Int32Array(sets);
-    for (let mask = 1; mask < sets; mask++) {
-      const bit = 31 - Math.clz32(mask);
-      left[mask] = left[mask ^ (1 << bit)]! + elements[bit]!.count;
-      undone[mask] = undone[mask ^ (1 << bit)]! + elements[bit]!.atLeast;
-    }
+    const sum = (mask: number, of: (element: Element) => number): number =>
+      elements.reduce((total, element, bit) => total + (mask & (1 << bit) ? of(element) : 0), 0);
+    const left = masks.map((mask) => sum(mask, ({ count }) => count));
+    const undone = firsts.map((mask) => sum(mask, ({ atLeast }) => atLeast));
     const all = left[sets - 1]!;
     const { start, to, cost } = this.columns(elements);
     const bitOf = new Map(elements.flatMap(({ unit }, bit) => (unit === null ? [] : [[unit, bit] as const])));
@@ -160,29 +209,31 @@ export class SubsetTable {
       const base = ahead * sets;
       const next = milestones.length - ahead;
       const milestone = milestones[next];
-      for (let mask = 0; mask < sets; mask++) {
-        if (mask === 0 && ahead === 0) continue;
+      for (let set = 0; set < sets; set++) {
+        if (set === 0 && ahead === 0) continue;
+        const mask = masks[set]!;
         steps.take(width);
         const mayPass =
           milestone !== undefined &&
-          all - left[mask]! <= milestone.freeBefore &&
-          undone[mask]! <= milestone.freeAfter &&
+          all - left[set]! <= milestone.freeBefore &&
+          undone[set]! <= milestone.freeAfter &&
           (mask & milestoneWaits[next]!) === 0;
         let open = 0;
         for (let bit = 0; bit < size; bit++) {
-          if (mask & (1 << bit) && !(mask & waits[bit]!.mask) && ahead <= waits[bit]!.ahead) open |= 1 << bit;
+          if (firsts[set]! & (1 << bit) && !(mask & waits[bit]!.mask) && ahead <= waits[bit]!.ahead)
+            open |= 1 << bit;
         }
         for (let joint = 0; joint < width; joint++) {
           const row = joint * size;
           let least = NEVER;
           if (mayPass) {
-            const beyond = (base - sets + mask) * width;
+            const beyond = (base - sets + set) * width;
             for (const move of passing[next]![joint]!)
               least = Math.min(least, move.cost + cells[beyond + move.to]!);
           }
           for (let rest = open; rest !== 0; rest &= rest - 1) {
             const bit = 31 - Math.clz32(rest & -rest);
-            const without = (base + (mask ^ (1 << bit))) * width;
+            const without = (base + setOf[mask ^ (1 << bit)]!) * width;
             const first = start[row + bit]!;
             const end = start[row + bit + 1]!;
             // With no milestone ahead, what suits this stand ends the row: what it leaves is the least.
@@ -195,7 +246,7 @@ export class SubsetTable {
               if (value < least) least = value;
             }
           }
-          cells[(base + mask) * width + joint] = least < NEVER ? least : NEVER;
+          cells[(base + set) * width + joint] = least < NEVER ? least : NEVER;
         }
       }
     }

@@ -1,7 +1,7 @@
 import type { Bound } from './bound';
 import { KeyBound } from './key-bound';
 import { Layer } from './layer';
-import type { Stage } from './stage';
+import { stageSeesKeys, type Stage } from './stage';
 import type { Steps } from './steps';
 import { Successors } from './successors';
 
@@ -63,10 +63,8 @@ export function sweep(options: SweepOptions): Swept {
   const count = plan.setStart.length;
   const layers = Array.from({ length: count + 1 }, () => new Layer(stage.stride));
   const successors = new Successors(stage, options.together ?? false);
-  const seesKeys = (closer: Stage | undefined): boolean =>
-    closer !== undefined && closer.closeness !== 'tunings';
-  const keyBound =
-    seesKeys(stage) && !seesKeys(coarse?.stage) ? new KeyBound(stage, options.keyWeight) : null;
+  const boundsKeys = stageSeesKeys(stage.closeness) && !(coarse && stageSeesKeys(coarse.stage.closeness));
+  const keyBound = boundsKeys ? new KeyBound(stage, options.keyWeight) : null;
   const project = coarse === null ? null : new Projection(stage, coarse);
   const state = new Int32Array(stage.stride);
   let exact = true;

@@ -27,6 +27,8 @@ export class TuningMoves {
   readonly groupOf: readonly number[];
   /** By joint stand and group. */
   readonly moves: readonly (readonly (readonly TuningMove[])[])[];
+  /** By group and kind: the tunings accepted; null for all. */
+  private readonly groups: (readonly (readonly number[] | null)[])[] = [];
   private readonly joints: number[][] = [];
   private readonly known = new Map<string, number>();
   /** By kind: the tunings that tunes state. */
@@ -42,13 +44,12 @@ export class TuningMoves {
     mostJoints: number,
     steps: Steps,
   ) {
-    const groups: (readonly (readonly number[] | null)[])[] = [];
     const groupByKey = new Map<string, number>();
     this.groupOf = compiled.entries.map((entry) => {
       const tunings = this.tuningsOf(entry);
       if (tunings.every((list) => list === null)) return -1;
       const key = tunings.map((list) => list?.join(',') ?? 'any').join(';');
-      const known = groupByKey.get(key) ?? groups.push(tunings) - 1;
+      const known = groupByKey.get(key) ?? this.groups.push(tunings) - 1;
       groupByKey.set(key, known);
       return known;
     });
@@ -59,13 +60,13 @@ export class TuningMoves {
     this.turn = goal === 'pegs' ? 1 : dearest * most;
     if (dearest * most * most >= NEVER) throw new TooManyStands();
 
-    this.stated = kinds.map((_, index) => [...new Set(groups.flatMap((lists) => lists[index] ?? []))]);
+    this.stated = kinds.map((_, index) => [...new Set(this.groups.flatMap((lists) => lists[index] ?? []))]);
     this.of(kinds.map((k) => compiled.kinds[k]!.tuningOf[compiled.kinds[k]!.opening]!));
     const moves: (readonly TuningMove[])[][] = [];
     for (let joint = 0; joint < this.joints.length; joint++) {
       if (joint >= mostJoints) throw new TooManyStands();
-      steps.take(groups.length * kinds.length);
-      moves.push(groups.map((lists) => this.movesFrom(joint, lists)));
+      steps.take(this.groups.length * kinds.length);
+      moves.push(this.groups.map((lists) => this.movesFrom(joint, lists)));
     }
     this.moves = moves;
   }
@@ -77,6 +78,14 @@ export class TuningMoves {
   /** @param tunings of all kinds of the problem @returns the joint stand of these kinds */
   joint(tunings: readonly number[]): number {
     return this.known.get(String.fromCharCode(...this.kinds.map((k) => tunings[k]!))) ?? -1;
+  }
+
+  /** Whether one group can be played wherever another has just been played, with nothing turned. */
+  follows(group: number, other: number): boolean {
+    return this.groups[group]!.every((list, index) => {
+      const theirs = this.groups[other]![index] ?? null;
+      return list === null || (theirs !== null && theirs.every((tuning) => list.includes(tuning)));
+    });
   }
 
   pegs(cost: number): number {
