@@ -13,6 +13,8 @@ export type Remembered = {
   readonly databasePort?: number;
   readonly pagesPort?: number;
   readonly apiPort?: number;
+  /** Where development shows the mail it caught. */
+  readonly mailPort?: number;
   /** Where `start` serves. */
   readonly sitePort?: number;
 };

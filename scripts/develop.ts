@@ -4,6 +4,7 @@ import { startChild, type Child } from './children';
 import { remember, remembered } from './data-folder';
 import { showDemoSignIns } from './demo-sign-ins';
 import { untilItAnswers, reachableAt } from './health';
+import { catchMail, type CaughtHere } from './mail/catch-mail';
 import { inRoot, installed } from './places';
 import { choosePort } from './ports';
 import { say, Sentence } from './sentence';
@@ -26,6 +27,7 @@ const COMPILE_SERVER = ['start', '--config', 'nest-cli.dev.json'];
 export async function develop(): Promise<number> {
   await claimSite();
   const { pages, api } = await choosePorts();
+  const caught = await catchMail([pages, api]);
   const databaseUrl = await openDatabase();
   const url = setting('PEGWELL_URL') ?? `http://${HOST}:${pages}`;
   const apiAddress = reachableAt(HOST, api);
@@ -58,12 +60,13 @@ export async function develop(): Promise<number> {
     host: HOST,
     url,
     demo: 'yes',
+    mailUrl: caught?.mailUrl,
   });
   const server = follow('server', 'nest', [...COMPILE_SERVER, '--watch', '--preserveWatchOutput'], env);
   const ended = Promise.race(
     [pagesServer, shared, server].map(async (child) => ({ child, code: await child.ended })),
   );
-  void greet(apiAddress, url);
+  void greet(apiAddress, url, caught);
   const { child, code } = await ended;
   throw new Sentence(`The ${child.name} program ended by itself (code ${code}); its reason stands above.`);
 }
@@ -102,9 +105,10 @@ async function choosePorts(): Promise<{ readonly pages: number; readonly api: nu
   return { pages, api };
 }
 
-async function greet(apiAddress: string, url: string): Promise<void> {
+async function greet(apiAddress: string, url: string, caught: CaughtHere | null): Promise<void> {
   if (!(await untilItAnswers(`${apiAddress}/api/health`))) return;
   say(`\nPegwell is at ${url}`);
   await showDemoSignIns(apiAddress);
+  if (caught) say(`Mail goes to nobody; what it would have been is at ${caught.pageUrl}`);
   say('Edits show by themselves. Ctrl-C stops everything.\n');
 }

@@ -52,10 +52,20 @@ type Serving = {
   /** The address people open, used in links and for the Origin check. */
   readonly url: string;
   readonly demo: 'yes' | 'no';
+  /** Where mail goes that the person's own settings send nowhere. */
+  readonly mailUrl?: string | undefined;
 };
 
 /** The server's environment: the person's own settings first, then ours. */
-export function serverEnvironment({ mode, databaseUrl, port, host, url, demo }: Serving): NodeJS.ProcessEnv {
+export function serverEnvironment({
+  mode,
+  databaseUrl,
+  port,
+  host,
+  url,
+  demo,
+  mailUrl,
+}: Serving): NodeJS.ProcessEnv {
   return {
     ...process.env,
     NODE_ENV: mode,
@@ -66,6 +76,7 @@ export function serverEnvironment({ mode, databaseUrl, port, host, url, demo }: 
     PEGWELL_SECRET: setting('PEGWELL_SECRET') ?? secret('secret'),
     PEGWELL_DATA_DIR: setting('PEGWELL_DATA_DIR') ?? path.join(DATA, 'files'),
     PEGWELL_DEMO: setting('PEGWELL_DEMO') ?? demo,
+    PEGWELL_MAIL_URL: setting('PEGWELL_MAIL_URL') ?? mailUrl,
     // Among three programs that speak at once, only what is wrong.
     PEGWELL_LOG: setting('PEGWELL_LOG') ?? (mode === 'development' ? 'warn' : 'info'),
   };
