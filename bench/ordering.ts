@@ -18,7 +18,7 @@ import { at, row, short, timed } from './figures';
  */
 const [only, runs, each] = [process.argv[2] ?? 'all', Number(process.argv[3] ?? 40), process.argv[4]];
 const wanted = (key: string): boolean => only === 'all' || only === key;
-const WARMING = Array.from({ length: 8 }, (_, index) => 9001 + index);
+const WARMING = Array.from({ length: 16 }, (_, index) => 9001 + index);
 
 const cases = CASES.filter(({ key }) => wanted(key));
 if (cases.length > 0) speed(cases);
@@ -63,7 +63,7 @@ function cold(key: string): number {
 
 function insertions(): void {
   const times: number[] = [];
-  for (let run = -50; run < 200; run++) {
+  for (let run = -200; run < 200; run++) {
     const evening = benchEvening({ ...LARGEST, seed: 100 + run });
     const tune = { ...benchEvening({ ...LARGEST, seed: 5_000 + run }).tunes[0]!, id: 'one more' };
     const { ms } = timed(() => new Insertions(evening).everywhere(tune));

@@ -64,6 +64,16 @@ export function pagesOf({ circleId, coming, past, tuneId }: DemoPlaces): readonl
         await page.getByRole('button', { name: 'Take this order' }).waitFor();
       },
     },
+    { name: 'card-menu', path: board, doing: openCardMenu },
+    {
+      name: 'must-come-before',
+      path: board,
+      doing: async (page) => {
+        await openCardMenu(page);
+        await page.getByRole('menuitem', { name: 'Must come before …' }).click();
+        await page.getByRole('button', { name: 'Keep it so' }).waitFor();
+      },
+    },
     { name: 'racks', path: `${board}/racks` },
     {
       name: 'racks-add',
@@ -97,6 +107,15 @@ export function openPagesOf({ coming }: DemoPlaces): readonly SeenPage[] {
     { name: 'follow', path: `/f/${coming.code}`, phone: true, doing: chooseFiddle },
     { name: 'room', path: `/f/${coming.code}/room`, phone: true },
   ];
+}
+
+/** Of the second tune, which has one before it to be put together with. */
+async function openCardMenu(page: Page): Promise<void> {
+  await page
+    .getByRole('button', { name: /^What to do with/ })
+    .nth(1)
+    .click();
+  await page.getByRole('menuitem', { name: 'Must come before …' }).waitFor();
 }
 
 async function chooseFiddle(page: Page): Promise<void> {

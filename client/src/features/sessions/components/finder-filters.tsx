@@ -54,7 +54,7 @@ export function FinderFilters({ filter, onFilter, kinds, problem }: FinderFilter
         value={filter.key}
         onChange={(event) => onFilter({ ...filter, key: event.target.value })}
       >
-        <option value="">Any key</option>
+        <option value="">Key</option>
         {TONICS.map((tonic) => (
           <option key={tonic}>{tonic}</option>
         ))}
