@@ -1,9 +1,10 @@
+import { createRequire } from 'node:module';
 import { remember, remembered } from '../data-folder';
 import { atEnd } from '../ending';
 import { choosePort } from '../ports';
 import { setting } from '../site';
 import { serveCaughtMail } from './caught-page';
-import { startMailCatcher } from './catcher';
+import type * as Catcher from './catcher';
 
 const USUAL_PAGE = 5174;
 /** As many as somebody looks through. */
@@ -27,6 +28,8 @@ export async function catchMail(not: readonly number[]): Promise<CaughtHere | nu
     not,
   });
   remember({ mailPort: port });
+  // Loaded here alone: reading mail takes half a second to load, which `stop` and `test` do without.
+  const { startMailCatcher } = createRequire(__filename)('./catcher') as typeof Catcher;
   const catcher = await startMailCatcher({ keep: KEPT });
   const page = await serveCaughtMail(catcher, port);
   atEnd(async () => {

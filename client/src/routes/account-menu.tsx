@@ -14,7 +14,7 @@ const initialsOf = (name: string) =>
     .map((word) => [...word][0]?.toUpperCase() ?? '')
     .join('');
 
-/** Whose account this is, the way to the other circles, and out. */
+/** Whose account this is, the way to it and to the other circles, and out. */
 export function AccountMenu({ me }: { readonly me: Me }) {
   const navigate = useNavigate();
   const say = useSay();
@@ -30,7 +30,10 @@ export function AccountMenu({ me }: { readonly me: Me }) {
         </button>
       }
       groups={[
-        [{ id: 'circles', label: 'Your circles', onSelect: () => void navigate('/') }],
+        [
+          { id: 'circles', label: 'Your circles', onSelect: () => void navigate('/') },
+          { id: 'account', label: 'Your account', onSelect: () => void navigate('/account') },
+        ],
         [
           {
             id: 'out',

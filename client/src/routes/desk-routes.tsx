@@ -7,6 +7,10 @@ import { SignedInLayout } from './signed-in-layout';
 
 const SignInPage = lazyPage(() => import('./sign-in-page'), 'SignInPage');
 const RegisterPage = lazyPage(() => import('./register-page'), 'RegisterPage');
+const ForgotPage = lazyPage(() => import('./forgot-page'), 'ForgotPage');
+const ResetPage = lazyPage(() => import('./reset-page'), 'ResetPage');
+const ConfirmPage = lazyPage(() => import('./confirm-page'), 'ConfirmPage');
+const AccountPage = lazyPage(() => import('./account-page'), 'AccountPage');
 const HomePage = lazyPage(() => import('./home-page'), 'HomePage');
 const EveningsPage = lazyPage(() => import('./evenings-page'), 'EveningsPage');
 const EveningNewPage = lazyPage(() => import('./evening-new-page'), 'EveningNewPage');
@@ -29,8 +33,12 @@ export function DeskRoutes() {
       <Route element={<DeskLayout />}>
         <Route path="/sign-in" element={<SignInPage />} />
         <Route path="/register" element={<RegisterPage />} />
+        <Route path="/forgot" element={<ForgotPage />} />
+        <Route path="/reset" element={<ResetPage />} />
+        <Route path="/confirm" element={<ConfirmPage />} />
         <Route element={<SignedInLayout />}>
           <Route path="/" element={<HomePage />} />
+          <Route path="/account" element={<AccountPage />} />
           <Route path="/c/:circleId" element={<CircleLayout />}>
             <Route index element={<Navigate to="evenings" replace />} />
             <Route path="evenings" element={<EveningsPage />} />

@@ -1,8 +1,8 @@
-import { useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 import { Link, useNavigate } from 'react-router-dom';
-import { getMe, meKey } from '../features/accounts/api/me';
+import { UnconfirmedLine } from '../features/accounts/components/unconfirmed-line';
 import { useMe } from '../features/accounts/hooks/use-me';
+import { useRenewMe } from '../features/accounts/hooks/use-renew-me';
 import { CreateCircleForm } from '../features/circles/components/create-circle-form';
 import { Button } from '../ui/button';
 import { Page, PageHeading } from '../ui/page';
@@ -11,7 +11,7 @@ import styles from './home.module.css';
 /** My circles; for somebody without one, the form to make the first. */
 export function HomePage() {
   const me = useMe().data;
-  const client = useQueryClient();
+  const renewMe = useRenewMe();
   const navigate = useNavigate();
   const [making, setMaking] = useState(false);
   const circles = me?.circles ?? [];
@@ -19,6 +19,7 @@ export function HomePage() {
 
   return (
     <Page narrow>
+      {me && !me.user.confirmed ? <UnconfirmedLine email={me.user.email} /> : null}
       <PageHeading
         title={first ? 'Make your first circle' : 'Your circles'}
         about={
@@ -50,7 +51,7 @@ export function HomePage() {
           {first ? null : <h2>A new circle</h2>}
           <CreateCircleForm
             onCreated={async (circle) => {
-              client.setQueryData(meKey, await getMe());
+              await renewMe();
               await navigate(`/c/${circle.id}/evenings`);
             }}
           />

@@ -1,6 +1,5 @@
-import { useQueryClient } from '@tanstack/react-query';
 import { useNavigate, useSearchParams } from 'react-router-dom';
-import { getMe, meKey } from '../features/accounts/api/me';
+import { useRenewMe } from '../features/accounts/hooks/use-renew-me';
 
 /** Only a path of this site is followed; `//elsewhere` and `/\elsewhere` would leave it. */
 export function safeNext(next: string | null): string {
@@ -15,11 +14,11 @@ export function useNext(): string {
 
 /** Learns who signed in, then goes on to where the reader wanted to be. */
 export function useAfterSignIn(): () => Promise<void> {
-  const client = useQueryClient();
+  const renewMe = useRenewMe();
   const navigate = useNavigate();
   const next = useNext();
   return async () => {
-    client.setQueryData(meKey, await getMe());
+    await renewMe();
     await navigate(next, { replace: true });
   };
 }

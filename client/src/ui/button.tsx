@@ -61,3 +61,8 @@ export function Button({
 export function LinkButton({ look, size, wide, className, ...rest }: LinkProps & Looks) {
   return <Link {...rest} className={classes({ look, size, wide }, className)} />;
 }
+
+/** A file to save or a page elsewhere that looks like a button. */
+export function ButtonAnchor({ look, size, wide, className, ...rest }: ComponentProps<'a'> & Looks) {
+  return <a {...rest} className={classes({ look, size, wide }, className)} />;
+}

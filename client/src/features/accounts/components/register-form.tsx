@@ -1,11 +1,11 @@
 import { zodResolver } from '@hookform/resolvers/zod';
-import { PASSWORD_MIN_CHARACTERS, registerSchema } from '@pegwell/shared/contract/accounts';
-import type { Register } from '@pegwell/shared/contract/accounts';
+import { registerSchema, type Register } from '@pegwell/shared/contract/accounts';
 import { Button } from '../../../ui/button';
 import { FormProblems, TextField } from '../../../ui/fields';
 import { useProblemForm } from '../../../lib/use-problem-form';
 import { register } from '../api/sign-in';
 import styles from './account-form.module.css';
+import { NewPasswordField } from './new-password-field';
 
 /** Makes an account, checked by the same schema as the server; signed in afterwards. */
 export function RegisterForm({ onSignedIn }: { readonly onSignedIn: () => Promise<void> | void }) {
@@ -37,14 +37,7 @@ export function RegisterForm({ onSignedIn }: { readonly onSignedIn: () => Promis
         error={errors.email?.message}
         {...form.register('email')}
       />
-      <TextField
-        label="Password"
-        hint={`At least ${PASSWORD_MIN_CHARACTERS} characters; four unrelated words do well.`}
-        type="password"
-        autoComplete="new-password"
-        error={errors.password?.message}
-        {...form.register('password')}
-      />
+      <NewPasswordField label="Password" error={errors.password?.message} {...form.register('password')} />
       <FormProblems problems={problems} />
       <Button type="submit" wide busy={isSubmitting && 'Making your account'}>
         Make an account

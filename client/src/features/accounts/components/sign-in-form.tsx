@@ -1,4 +1,5 @@
 import type { Login } from '@pegwell/shared/contract/accounts';
+import { Link } from 'react-router-dom';
 import { Button } from '../../../ui/button';
 import { FormProblems, TextField } from '../../../ui/fields';
 import { useProblemForm } from '../../../lib/use-problem-form';
@@ -36,6 +37,9 @@ export function SignInForm({ onSignedIn }: { readonly onSignedIn: () => Promise<
       <Button type="submit" wide busy={isSubmitting && 'Signing in'}>
         Sign in
       </Button>
+      <Link className={styles.forgot} to="/forgot">
+        Forgot your password?
+      </Link>
     </form>
   );
 }

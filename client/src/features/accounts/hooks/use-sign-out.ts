@@ -1,15 +1,8 @@
-import { useMutation, useQueryClient } from '@tanstack/react-query';
-import { meKey } from '../api/me';
+import { useMutation } from '@tanstack/react-query';
 import { signOut } from '../api/sign-in';
+import { useSignedOut } from './use-signed-out';
 
-/** Ends this sign-in and forgets everything that was loaded with it. */
+/** Ends this sign-in. */
 export function useSignOut() {
-  const client = useQueryClient();
-  return useMutation({
-    mutationFn: signOut,
-    onSuccess: () => {
-      client.clear();
-      client.setQueryData(meKey, null);
-    },
-  });
+  return useMutation({ mutationFn: signOut, onSuccess: useSignedOut() });
 }
