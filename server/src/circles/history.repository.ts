@@ -1,5 +1,5 @@
 import { Injectable } from '@nestjs/common';
-import { count, desc, eq, sql } from 'drizzle-orm';
+import { and, count, desc, eq, sql } from 'drizzle-orm';
 import type { EventKind } from '@pegwell/shared/contract/history';
 import type { PageQuery } from '@pegwell/shared/contract/page';
 import type { Database } from '../database/database';
@@ -20,6 +20,13 @@ const lengthOf = (field: 'created' | 'updated') =>
   sql<number>`case when jsonb_typeof(${after}->'${sql.raw(field)}') = 'array'
     then jsonb_array_length(${after}->'${sql.raw(field)}') else 0 end`;
 
+/** An event as it is stored, for whoever undoes it. */
+export interface PastEvent {
+  readonly at: Date;
+  readonly before: unknown;
+  readonly after: unknown;
+}
+
 @Injectable()
 export class HistoryRepository {
   async insert(
@@ -27,6 +34,16 @@ export class HistoryRepository {
     values: typeof events.$inferInsert & { readonly what: EventKind },
   ): Promise<void> {
     await db.insert(events).values(values);
+  }
+
+  async last(db: Database, circleId: string, what: EventKind, subjectId: string): Promise<PastEvent | null> {
+    const [event] = await db
+      .select({ at: events.at, before: events.before, after: events.after })
+      .from(events)
+      .where(and(eq(events.circleId, circleId), eq(events.what, what), eq(events.subjectId, subjectId)))
+      .orderBy(desc(events.at))
+      .limit(1);
+    return event ?? null;
   }
 
   /** Newest first. The stored before and after stay behind: of an import they are thousands of tunes. */

@@ -4,7 +4,7 @@ import type { Page, PageQuery } from '@pegwell/shared/contract/page';
 import { AccountsService } from '../accounts/accounts.service';
 import type { Member } from '../common/access';
 import { DATABASE, type Database, type RootDatabase } from '../database/database';
-import { HistoryRepository } from './history.repository';
+import { HistoryRepository, type PastEvent } from './history.repository';
 
 /** One line of the circle's history: who did what to what, and how it was before. */
 export interface CircleEvent {
@@ -26,6 +26,11 @@ export class HistoryService {
   /** Writes a line, in the transaction of the change: both are there, or neither. */
   note(db: Database, member: Pick<Member, 'circleId' | 'account'>, event: CircleEvent): Promise<void> {
     return this.history.insert(db, { circleId: member.circleId, accountId: member.account.id, ...event });
+  }
+
+  /** The last event of that kind about that subject, with what was there before and after. */
+  last(db: Database, circleId: string, what: EventKind, subjectId: string): Promise<PastEvent | null> {
+    return this.history.last(db, circleId, what, subjectId);
   }
 
   async page(member: Member, query: PageQuery): Promise<Page<Happened>> {

@@ -4,6 +4,7 @@ import {
   importProgressSchema,
   importQuerySchema,
   importReportSchema,
+  importUndoneSchema,
   tunePageSchema,
   tuneQuerySchema,
   tuneSchema,
@@ -18,5 +19,6 @@ export class CreateTuneDto extends createZodDto(createTuneSchema) {}
 export class UpdateTuneDto extends createZodDto(updateTuneSchema) {}
 export class ImportQueryDto extends createZodDto(importQuerySchema) {}
 export class ImportReportDto extends createZodDto(importReportSchema) {}
+export class ImportUndoneDto extends createZodDto(importUndoneSchema) {}
 export class ImportProgressDto extends createZodDto(importProgressSchema) {}
 export class ExportQueryDto extends createZodDto(exportQuerySchema) {}

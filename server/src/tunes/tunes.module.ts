@@ -3,6 +3,8 @@ import { CirclesModule } from '../circles/circles.module';
 import { ExportService } from './files/export.service';
 import { ImportProgressRepository } from './files/import-progress.repository';
 import { ImportService } from './files/import.service';
+import { ImportThread } from './files/import-thread';
+import { ImportUndoService } from './files/import-undo.service';
 import { TuneFilesController } from './files/tune-files.controller';
 import { PlayableRepository } from './playable.repository';
 import { PlayableService } from './playable.service';
@@ -19,6 +21,8 @@ import { TunesService } from './tunes.service';
     ExportService,
     ImportProgressRepository,
     ImportService,
+    ImportThread,
+    ImportUndoService,
     PlayableRepository,
     PlayableService,
     TuneWritesRepository,

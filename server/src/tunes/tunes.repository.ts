@@ -115,8 +115,25 @@ export class TunesRepository {
       .for('no key update');
   }
 
+  /**
+   * Holds the whole library, and lets no other import begin: two at once would both miss what the other makes. (A
+   * lock on the circle's row would also stop the rows of progress, which point at it.)
+   */
+  async holdForImport(db: Database, circleId: string): Promise<void> {
+    await db.execute(sql`select pg_advisory_xact_lock(hashtextextended(${`import ${circleId}`}, 0))`);
+    await this.hold(db, circleId);
+  }
+
   async setRemoved(db: Database, tuneId: string, removedAt: Date | null): Promise<void> {
     await db.update(tunes).set({ removedAt }).where(eq(tunes.id, tuneId));
+  }
+
+  async removeMany(db: Database, tuneIds: readonly string[]): Promise<void> {
+    const ids = sql`select value::uuid from jsonb_array_elements_text(${JSON.stringify(tuneIds)}::jsonb)`;
+    await db
+      .update(tunes)
+      .set({ removedAt: sql`now()` })
+      .where(sql`${tunes.id} in (${ids})`);
   }
 
   private async withTunings(db: Database, rows: Row[]): Promise<StoredTune[]> {

@@ -129,10 +129,29 @@ export const importQuerySchema = z.strictObject({
     .enum(['true', 'false'])
     .default('false')
     .transform((word) => word === 'true'),
-  /** A new id, under which the import can be watched; nothing is written for it in a dry run. */
+  /**
+   * A new id, under which the import can be watched; nothing is written for it in a dry run. Sent again with the
+   * same file and choices it gets the first answer again, or goes on where nothing was written yet.
+   */
   progress: idSchema.optional(),
+  /** Words pasted into a page, as a file of any name: what they are is told by what stands in them. */
+  pasted: z
+    .enum(['true', 'false'])
+    .default('false')
+    .transform((word) => word === 'true'),
 });
 export type ImportQuery = z.infer<typeof importQuerySchema>;
+
+/** What undoing an import did. */
+export const importUndoneSchema = z.object({
+  /** New tunes that went. */
+  removed: z.number().int(),
+  /** Changed tunes that are as they were. */
+  restored: z.number().int(),
+  /** Tunes that were changed since, and stay as they are. */
+  kept: z.array(z.object({ id: idSchema, title: z.string() })),
+});
+export type ImportUndone = z.infer<typeof importUndoneSchema>;
 
 /** How far an import is: `written` of the `total` tunes that it has to write. */
 export const importProgressSchema = z.object({
@@ -143,8 +162,16 @@ export const importProgressSchema = z.object({
 export type ImportProgress = z.infer<typeof importProgressSchema>;
 
 export const importActionSchema = z.enum(['create', 'update', 'unchanged', 'skip']);
+
+const cellsSchema = z.array(z.object({ kind: z.string(), tuning: z.string() }));
+
 export const importReportSchema = z.object({
-  format: z.enum(['abc', 'csv']),
+  /** `list`: pasted, a tune a line. */
+  format: z.enum(['abc', 'csv', 'list']),
+  /** The character encoding that the file was read in, as IANA names it. */
+  encoding: z.string(),
+  /** Under which the import can be undone; none in a dry run. */
+  importId: idSchema.optional(),
   read: z.number().int(),
   created: z.number().int(),
   updated: z.number().int(),
@@ -157,6 +184,27 @@ export const importReportSchema = z.object({
       title: z.string(),
       action: importActionSchema,
       id: idSchema.optional(),
+      key: z.string().optional(),
+      mode: modeSchema.optional(),
+      rhythm: z.string().nullable().optional(),
+      /** Tunings that its words speak of, and in which words; taken only where the choices say so. */
+      found: z.array(z.object({ kind: z.string(), tuning: z.string(), said: z.string() })).optional(),
+      /** Tunes of the library, or of earlier lines, that are likely the same as this new one. */
+      alike: z
+        .array(
+          z.object({
+            id: idSchema.optional(),
+            line: z.number().int().optional(),
+            title: z.string(),
+            key: z.string(),
+            mode: modeSchema,
+            rhythm: z.string().nullable(),
+            tunings: cellsSchema,
+          }),
+        )
+        .optional(),
+      /** What a new tune that is likely another states, to be held beside it. */
+      tunings: cellsSchema.optional(),
     }),
   ),
 });

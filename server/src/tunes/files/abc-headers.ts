@@ -35,7 +35,7 @@ interface Paragraph {
  * @param limit at most so many tunes are read, and one more
  */
 export function findHeaders(
-  lines: readonly AbcLine[],
+  lines: Iterable<AbcLine>,
   limit: number,
 ): { readonly defaults: AbcHeader; readonly headers: readonly AbcHeader[] } {
   const headers: AbcHeader[] = [];
@@ -52,7 +52,7 @@ function isTune({ isTune: begins, isText, key, fields }: Paragraph): boolean {
   return begins || (!isText && key !== null && has(fields, 'T'));
 }
 
-function* paragraphs(lines: readonly AbcLine[]): Generator<Paragraph> {
+function* paragraphs(lines: Iterable<AbcLine>): Generator<Paragraph> {
   let open = emptyParagraph(1);
   for (const line of lines) {
     const begins = line.kind === 'field' && line.letter === 'X';

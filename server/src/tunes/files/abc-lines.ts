@@ -1,3 +1,5 @@
+import { textLines } from './text-lines';
+
 /** What a line of an ABC file is, as far as headers go (ABC 2.1 sections 2 and 3). */
 export type AbcLine =
   /** Nothing, or nothing but white space (2.2.4). */
@@ -10,6 +12,10 @@ export type AbcLine =
   /** Music or free text. */
   | { readonly kind: 'other'; readonly line: number };
 
+type Continued = Extract<AbcLine, { readonly kind: 'field' } | { readonly kind: 'directive' }>;
+
+/** Characters of a line that are read: far more than the longest note needs, all of it escaped. */
+const LONGEST = 40_000;
 // `s`: line separators of Unicode are no line ends here. Indented headers are no part of the standard.
 const FIELD = /^([A-Za-z]|\s+[A-Z]):(.*)$/s;
 const DIRECTIVE = /^(?:%%|I:)\s*(\S+)\s*(.*)$/s;
@@ -20,26 +26,36 @@ const COMMENT_BEHIND_TITLE = /(?<![\\\d])(?:\\\\)*%/;
  * Lines from 1, with `+:` joined by a space to the field, or the `I:` directive, that it continues; comments and
  * `%%` directives may stand between (section 3.3).
  */
-export function readAbcLines(text: string): AbcLine[] {
-  const lines: AbcLine[] = [];
-  // Where in `lines` stands what a `+:` would continue.
-  let open: number | null = null;
-  text.split(/\r\n|\n|\r/).forEach((raw, index) => {
-    const continued = raw.startsWith('+:') && open !== null ? lines[open] : undefined;
-    if (open !== null && (continued?.kind === 'field' || continued?.kind === 'directive')) {
-      const letter = continued.kind === 'field' ? continued.letter : null;
-      lines[open] = {
-        ...continued,
-        text: `${continued.text} ${withoutComment(raw.slice(2), letter)}`.trim(),
-      };
-      return;
+export function* readAbcLines(text: string): Generator<AbcLine> {
+  // What a `+:` would continue, held back until something else comes.
+  let open: Continued | null = null;
+  // Comments and directives behind it.
+  let behind: AbcLine[] = [];
+  for (const [number, whole] of textLines(text)) {
+    const raw = whole.slice(0, LONGEST);
+    if (raw.startsWith('+:') && open !== null) {
+      open = continued(open, raw.slice(2));
+      continue;
     }
-    const line = readLine(raw, index + 1);
-    if (line.kind === 'field' || raw.startsWith('I:')) open = lines.length;
-    else if (line.kind === 'empty' || line.kind === 'other') open = null;
-    lines.push(line);
-  });
-  return lines;
+    const line = readLine(raw, number);
+    const opens = line.kind === 'field' || (line.kind === 'directive' && raw.startsWith('I:'));
+    const closes = opens || line.kind === 'empty' || line.kind === 'other';
+    if (open !== null && !closes) {
+      behind.push(line);
+      continue;
+    }
+    if (open !== null) yield* [open, ...behind];
+    behind = [];
+    open = opens ? line : null;
+    if (!opens) yield line;
+  }
+  if (open !== null) yield* [open, ...behind];
+}
+
+function continued(field: Continued, more: string): Continued {
+  if (field.text.length >= LONGEST) return field;
+  const said = withoutComment(more, field.kind === 'field' ? field.letter : null);
+  return { ...field, text: `${field.text} ${said}`.trim() };
 }
 
 function readLine(raw: string, line: number): AbcLine {

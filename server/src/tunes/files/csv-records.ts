@@ -18,8 +18,9 @@ interface Chunk {
   readonly info: { readonly bytes: number };
 }
 
-/** Unclosed quotes that are recovered from; each costs one more reading of the rest. */
+/** Unclosed quotes that are recovered from; each costs one more reading of the rest, so many bytes at most. */
 const MOST_RECOVERIES = 20;
+const MOST_READ_AGAIN = 16 * 1024 * 1024;
 const LINE_END = /\r\n|\n|\r/g;
 
 /**
@@ -39,6 +40,7 @@ export function readRecords(
   let rest = Buffer.from(text.slice(stated.length));
   // Lines before `rest`, then before the record that is read next.
   let lines = stated === '' ? 0 : 1;
+  let readAgain = 0;
   while (rest.length > 0 && records.length <= limit) {
     let bytes = 0;
     const on_record = (chunk: unknown): null => {
@@ -63,7 +65,9 @@ export function readRecords(
       lines += countLineEnds(empty) + 1;
       unread.push({ line: lines, message: 'A quote (") is opened and never closed.' });
       rest = Buffer.from(behind.slice(own.length));
-      if (unread.length === MOST_RECOVERIES && rest.length > 0) {
+      readAgain += rest.length;
+      const isEnough = unread.length === MOST_RECOVERIES || readAgain > MOST_READ_AGAIN;
+      if (isEnough && rest.length > 0) {
         unread.push({ line: lines + 1, message: 'From here on too many quotes are left open to go on.' });
         break;
       }

@@ -65,6 +65,8 @@ const BRACKET_AT_END = /^(.*\S)\s*[([]([^()[\]]{3,60})[)\]]$/s;
 
 /** Characters of a kind's cell: far more than twenty tunings need. */
 const LONGEST_CELL = 2_000;
+/** More than the longest field holds. */
+const LONGEST_TEXT = 10_000;
 
 /** Reads the tunings of a tune, and holds its words to the same limits as a form's. */
 export function understandTune(raw: RawTune): FileTune {
@@ -73,7 +75,8 @@ export function understandTune(raw: RawTune): FileTune {
   for (const field of WORD_FIELDS) {
     const written = raw.words[field];
     if (!written || written.text.trim() === '') continue;
-    const parsed = updateTuneSchema.shape[field].safeParse(written.text);
+    // Cut, it is still too long for any field, and quickly found to be so.
+    const parsed = updateTuneSchema.shape[field].safeParse(written.text.slice(0, LONGEST_TEXT));
     if (!parsed.success) problems.push({ line: written.line, message: sentence(parsed.error) });
     else if (typeof parsed.data === 'string') words[field] = parsed.data;
   }
@@ -86,7 +89,7 @@ export function understandTune(raw: RawTune): FileTune {
     if (typeof read === 'string') problems.push({ line: cell.line, message: read });
     else stated[read.kind.id] = read.accepted;
   }
-  const title = raw.words.title?.text.trim() ?? '';
+  const title = raw.words.title?.text.trim().slice(0, LONGEST_CELL) ?? '';
   const { line, id, keyLine } = raw;
   const [, plain = null, bracket = ''] = BRACKET_AT_END.exec(words.title ?? '') ?? [];
   const inTitle = findTunings(bracket);

@@ -1,33 +1,45 @@
 import { Injectable } from '@nestjs/common';
 import { and, eq, lt, sql } from 'drizzle-orm';
-import type { ImportProgress } from '@pegwell/shared/contract/tunes';
+import { importReportSchema, type ImportProgress, type ImportReport } from '@pegwell/shared/contract/tunes';
 import type { Database } from '../../database/database';
 import { imports } from '../tunes.table';
 
-/** How far imports are. Handed the pool and not a transaction, or nobody could watch. */
+/** How far imports are, and what became of them. */
 @Injectable()
 export class ImportProgressRepository {
-  /** False when the id was used before. Rows that nobody watches any more go. */
-  async start(db: Database, circleId: string, id: string, total: number): Promise<boolean> {
+  /**
+   * Handed the pool and not a transaction, as `move` is, or nobody could watch. Rows of yesterday go.
+   * @returns false when the id stands for another circle's import, or for another file
+   */
+  async start(db: Database, circleId: string, id: string, digest: string, total: number): Promise<boolean> {
     const dayAgo = sql`now() - interval '1 day'`;
     await db.delete(imports).where(and(eq(imports.circleId, circleId), lt(imports.createdAt, dayAgo)));
-    const rows = await db
-      .insert(imports)
-      .values({ id, circleId, total })
-      .onConflictDoNothing()
-      .returning({ id: imports.id });
-    return rows.length === 1;
+    await db.insert(imports).values({ id, circleId, digest, total }).onConflictDoNothing();
+    const [row] = await db.select().from(imports).where(eq(imports.id, id));
+    return row?.circleId === circleId && row.digest === digest;
   }
 
   async move(db: Database, id: string, total: number, written: number): Promise<void> {
     await db.update(imports).set({ total, written }).where(eq(imports.id, id));
   }
 
-  async finish(db: Database, id: string): Promise<void> {
+  /** In the import's own transaction: an import that is finished is one whose tunes are there. */
+  async finish(db: Database, id: string, report: ImportReport): Promise<void> {
     await db
       .update(imports)
-      .set({ finishedAt: sql`now()` })
+      .set({ report, finishedAt: sql`now()` })
       .where(eq(imports.id, id));
+  }
+
+  /** What became of it; null while it is not finished. */
+  async reportOf(db: Database, id: string): Promise<ImportReport | null> {
+    const [row] = await db.select({ report: imports.report }).from(imports).where(eq(imports.id, id));
+    return row?.report ? importReportSchema.parse(row.report) : null;
+  }
+
+  /** An import that failed leaves its id free. */
+  async forget(db: Database, id: string): Promise<void> {
+    await db.delete(imports).where(eq(imports.id, id));
   }
 
   async byId(db: Database, circleId: string, id: string): Promise<ImportProgress | null> {

@@ -1,13 +1,7 @@
-import { randomUUID } from 'node:crypto';
+import { createHash, randomUUID } from 'node:crypto';
 import { Inject, Injectable, Logger } from '@nestjs/common';
-import { sql } from 'drizzle-orm';
-import {
-  IMPORT_MAX_TUNES,
-  type ImportProgress,
-  type ImportQuery,
-  type ImportReport,
-  type TuneFileFormat,
-} from '@pegwell/shared/contract/tunes';
+import type { ImportChoice } from '@pegwell/shared/contract/import-choices';
+import type { ImportProgress, ImportQuery, ImportReport } from '@pegwell/shared/contract/tunes';
 import { HistoryService } from '../../circles/history.service';
 import type { Member } from '../../common/access';
 import { announceCircle } from '../../common/announce';
@@ -16,22 +10,21 @@ import { DATABASE, type Database, type RootDatabase } from '../../database/datab
 import { contentOf } from '../tune-content';
 import { TuneWritesRepository, type WrittenTune } from '../tune-writes.repository';
 import { TunesRepository } from '../tunes.repository';
-import { decode } from './decode';
-import type { TuneFile } from './file-tune';
 import { ImportProgressRepository } from './import-progress.repository';
-import { planImport, type ImportPlan } from './plan-import';
-import { readAbc } from './read-abc';
-import { readCsv } from './read-csv';
-
-export interface Upload {
-  readonly format: TuneFileFormat;
-  readonly bytes: Buffer;
-}
+import { reportOf } from './import-report';
+import { ImportThread } from './import-thread';
+import type { ImportPlan } from './plan-import';
+import type { ReadFile, Upload } from './read-file';
 
 /** Tunes written between two moves of the progress bar. */
 const BATCH = 100;
 
-/** A library from a file: read, matched with what is there, and written in one transaction or not at all. */
+type Moved = (total: number, written: number) => Promise<void>;
+
+/**
+ * A library from a file: read, matched with what is there, and written in one transaction or not at all. It goes on
+ * without whoever sent it; sent again under its id, it answers what it answered.
+ */
 @Injectable()
 export class ImportService {
   private readonly logger = new Logger(ImportService.name);
@@ -42,25 +35,32 @@ export class ImportService {
     private readonly writes: TuneWritesRepository,
     private readonly progress: ImportProgressRepository,
     private readonly history: HistoryService,
+    private readonly thread: ImportThread,
   ) {}
 
   /** @throws ProblemException (422, at `file`) when the file is no text, no table, or holds too much */
-  async import(member: Member, upload: Upload, { dryRun, progress }: ImportQuery): Promise<ImportReport> {
-    const file = readFile(upload);
+  async import(
+    member: Member,
+    upload: Upload,
+    { dryRun, progress }: Pick<ImportQuery, 'dryRun' | 'progress'>,
+    choices: readonly ImportChoice[] = [],
+  ): Promise<ImportReport> {
+    const file = await this.thread.read(upload);
+    if (!file.ok) throw cannotBe([{ path: 'file', message: file.reason }]);
     if (dryRun) {
-      const plan = planImport(file.tunes, await this.tunes.all(this.db, member.circleId));
-      return report(upload.format, file, plan);
+      const library = await this.tunes.all(this.db, member.circleId);
+      return reportOf(file.value, await this.thread.plan(file.value.tunes, library, choices));
     }
-    if (progress === undefined) return this.write(member, upload.format, file, async () => undefined);
-    if (!(await this.progress.start(this.db, member.circleId, progress, file.tunes.length))) {
-      throw cannotBe([{ path: 'progress', message: 'An import with this id was begun before.' }]);
+    const id = progress ?? randomUUID();
+    const total = file.value.tunes.length;
+    if (!(await this.progress.start(this.db, member.circleId, id, digestOf(upload, choices), total))) {
+      throw cannotBe([{ path: 'progress', message: 'Another import with this id was begun before.' }]);
     }
     try {
-      return await this.write(member, upload.format, file, (total, written) =>
-        this.watched(() => this.progress.move(this.db, progress, total, written)),
-      );
-    } finally {
-      await this.watched(() => this.progress.finish(this.db, progress));
+      return await this.write(member, id, file.value, choices);
+    } catch (error) {
+      await this.watched(() => this.progress.forget(this.db, id));
+      throw error;
     }
   }
 
@@ -72,34 +72,40 @@ export class ImportService {
 
   private async write(
     member: Member,
-    format: TuneFileFormat,
-    file: TuneFile,
-    moved: (total: number, written: number) => Promise<void>,
+    importId: string,
+    file: ReadFile,
+    choices: readonly ImportChoice[],
   ): Promise<ImportReport> {
     return this.db.transaction(async (tx) => {
-      // Two imports at once would both miss what the other makes. (A lock on the circle's row would also
-      // stop the progress rows, which point at it.)
-      await tx.execute(
-        sql`select pg_advisory_xact_lock(hashtextextended(${`import ${member.circleId}`}, 0))`,
+      await this.tunes.holdForImport(tx, member.circleId);
+      const done = await this.progress.reportOf(tx, importId);
+      if (done) return done;
+      const library = await this.tunes.all(tx, member.circleId);
+      const plan = await this.thread.plan(file.tunes, library, choices);
+      const ids = await this.store(tx, member, { importId, format: file.format }, plan, (total, written) =>
+        this.watched(() => this.progress.move(this.db, importId, total, written)),
       );
-      await this.tunes.hold(tx, member.circleId);
-      const plan = planImport(file.tunes, await this.tunes.all(tx, member.circleId));
-      const ids = await this.store(tx, member, format, plan, moved);
-      return report(format, file, plan, ids);
+      const report = reportOf(file, plan, { importId, ids });
+      await this.progress.finish(tx, importId, report);
+      return report;
     });
   }
 
-  /** @returns the ids of what was made, in the order of the plan's creations */
+  /** @returns the ids of what was made, by its place in the plan */
   private async store(
     tx: Database,
     member: Member,
-    format: TuneFileFormat,
+    { importId, format }: { readonly importId: string; readonly format: ReadFile['format'] },
     plan: ImportPlan,
-    moved: (total: number, written: number) => Promise<void>,
-  ): Promise<string[]> {
-    const created = plan.tunes.flatMap((tune): WrittenTune[] =>
-      tune.action === 'create' ? [{ id: randomUUID(), settingId: randomUUID(), ...tune.content }] : [],
-    );
+    moved: Moved,
+  ): Promise<ReadonlyMap<number, string>> {
+    const ids = new Map<number, string>();
+    const created = plan.tunes.flatMap((tune, at): WrittenTune[] => {
+      if (tune.action !== 'create') return [];
+      const id = randomUUID();
+      ids.set(at, id);
+      return [{ id, settingId: randomUUID(), ...tune.content }];
+    });
     const updated = plan.tunes.flatMap((tune) => (tune.action === 'update' ? [tune] : []));
     const total = created.length + updated.length;
     await moved(total, 0);
@@ -114,14 +120,13 @@ export class ImportService {
       );
       await moved(total, created.length + Math.min(from + BATCH, updated.length));
     }
-    const ids = created.map(({ id }) => id);
     if (total === 0) return ids;
     await this.history.note(tx, member, {
-      what: 'tunes.imported',
+      ...{ what: 'tunes.imported', subjectId: importId },
       before: updated.map(({ before }) => ({ id: before.id, ...contentOf(before) })),
       after: {
         format,
-        created: ids,
+        created: created.map(({ id }) => id),
         updated: updated.map(({ after }) => ({ id: after.id, ...contentOf(after) })),
       },
     });
@@ -139,44 +144,7 @@ export class ImportService {
   }
 }
 
-function readFile({ format, bytes }: Upload): TuneFile {
-  const refuse = (message: string) => cannotBe([{ path: 'file', message }]);
-  const text = decode(bytes);
-  if (!text.ok) throw refuse(text.reason);
-  const file =
-    format === 'abc'
-      ? readAbc(text.value.text, IMPORT_MAX_TUNES)
-      : readCsv(text.value.text, IMPORT_MAX_TUNES);
-  if ('reason' in file) throw refuse(file.reason);
-  if (file.tunes.length > IMPORT_MAX_TUNES) {
-    throw refuse(`This file holds more than ${IMPORT_MAX_TUNES} tunes. Cut it in parts.`);
-  }
-  return file;
-}
-
-function report(
-  format: TuneFileFormat,
-  file: TuneFile,
-  plan: ImportPlan,
-  createdIds: readonly string[] = [],
-): ImportReport {
-  const count = (action: string) => plan.tunes.filter((tune) => tune.action === action).length;
-  const fresh = createdIds[Symbol.iterator]();
-  const tunes = plan.tunes.map((tune) => {
-    const { line, title, action } = tune;
-    if (tune.action === 'skip') return { line, title, action };
-    const id = tune.action === 'create' ? fresh.next().value : tune.before.id;
-    return { line, title, action, ...(id !== undefined && { id }) };
-  });
-  const problems = [...file.problems.map((problem) => ({ ...problem, tune: null })), ...plan.problems];
-  return {
-    format,
-    read: plan.tunes.length,
-    created: count('create'),
-    updated: count('update'),
-    unchanged: count('unchanged'),
-    skipped: count('skip'),
-    problems: problems.sort((one, other) => one.line - other.line),
-    tunes,
-  };
+function digestOf({ format, bytes }: Upload, choices: readonly ImportChoice[]): string {
+  const words = JSON.stringify([format, choices]);
+  return createHash('sha256').update(words).update(bytes).digest('hex');
 }

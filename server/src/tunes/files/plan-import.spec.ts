@@ -1,4 +1,5 @@
 import { randomUUID } from 'node:crypto';
+import type { ImportChoice } from '@pegwell/shared/contract/import-choices';
 import type { StoredTune } from '../tune-content';
 import { planImport, type ImportPlan } from './plan-import';
 import { readCsv } from './read-csv';
@@ -138,6 +139,145 @@ describe('planImport', () => {
       { line: 3, tune: 'No Key', message: expect.stringMatching(/^No key is given/) },
       { line: 4, tune: 'None', message: expect.stringMatching(/^No key is given/) },
     ]);
+  });
+
+  describe('with what a host chooses', () => {
+    const AEAE = { pitches: ['A3', 'E4', 'A4', 'E5'], capo: 0 };
+    const choose = (library: readonly StoredTune[], choices: readonly ImportChoice[], ...rows: string[]) => {
+      const file = readCsv(rows.join('\n'), 1_000);
+      if ('reason' in file) throw new Error(file.reason);
+      return planImport(file.tunes, library, choices).tunes;
+    };
+    const choice = (line: number, rest: Partial<ImportChoice>): ImportChoice => ({
+      ...{ line, found: [], alike: 'keep' },
+      ...rest,
+    });
+
+    it('proposes tunings that are found, where the library states none, and takes those that are chosen', () => {
+      const library = [stored('Stated', { stated: { fiddle: 'any' } }), stored('Silent')];
+      const rows = [
+        'title,key,notes',
+        'Stated,A,fiddle AEAE',
+        'Silent,A,',
+        'Fresh (AEAE),A,',
+        'Fresh (AEAE),D,',
+      ];
+      rows[2] = 'Silent,A,"fiddle AEAE"';
+      const plain = choose(library, [], ...rows);
+      expect(plain.map(({ action, found }) => [action, found.length])).toEqual([
+        ...[
+          ['update', 0],
+          ['update', 1],
+          ['create', 1],
+          ['create', 1],
+        ],
+      ]);
+      const [, silent, fresh, other] = choose(
+        library,
+        [choice(3, { found: ['fiddle'] }), choice(4, { found: ['fiddle', 'banjo'] })],
+        ...rows,
+      );
+      expect(silent).toMatchObject({ found: [], after: { stated: { fiddle: [AEAE] } } });
+      expect(fresh).toMatchObject({
+        title: 'Fresh',
+        found: [],
+        content: { title: 'Fresh', stated: { fiddle: [AEAE] } },
+      });
+      // Not chosen: nothing is taken, and the title is as written.
+      expect(other).toMatchObject({ title: 'Fresh (AEAE)', content: { title: 'Fresh (AEAE)', stated: {} } });
+    });
+
+    it('shows what is likely the same, and makes new tunes all the same unless it is told otherwise', () => {
+      const library = [stored('The Dusty Miller', { key: 'G' }), stored('Lantern Hill')];
+      const rows = ['title,key', '"Dusty Miller, The",G', 'Lantern Hil,A', 'Lantern Hill,D', 'Other,A'];
+      const plain = choose(library, [], ...rows);
+      expect(
+        plain.map((tune) => [tune.action, 'alike' in tune && tune.alike.map(({ id, line }) => id ?? line)]),
+      ).toEqual([
+        ['create', [library[0]!.id]],
+        ['create', [library[1]!.id]],
+        ['create', [library[1]!.id, 3]],
+        ['create', []],
+      ]);
+      const skipped = choose(library, [choice(2, { alike: 'skip' }), choice(5, { alike: 'skip' })], ...rows);
+      expect(skipped.map(({ action }) => action)).toEqual(['skip', 'create', 'create', 'create']);
+    });
+
+    it('merges: what is there stays, what is empty is filled, nothing is lost', () => {
+      const library = [stored('The Dusty Miller', { key: 'G', rhythm: 'reel', notes: 'old' })];
+      const [tune] = choose(
+        library,
+        [choice(2, { alike: 'merge' })],
+        'title,key,rhythm,composer,notes,fiddle',
+        '"Dusty Miller, The",G,jig,trad,new,GDGD',
+      );
+      expect(tune).toMatchObject({
+        ...{ action: 'update', before: library[0] },
+        after: {
+          ...{ id: library[0]!.id, title: 'The Dusty Miller', key: 'G', rhythm: 'reel', composer: 'trad' },
+          ...{
+            notes: 'old\nAlso: Dusty Miller, The\nnew',
+            stated: { fiddle: [{ pitches: ['G3', 'D4', 'G4', 'D5'] }] },
+          },
+        },
+      });
+    });
+
+    it('merges a tune of another key without its tunings, and says which key it was', () => {
+      const library = [stored('Cuckoo')];
+      const rows = ['title,key,fiddle', 'Cuckoo,D minor,ADAE'];
+      const [tune] = choose(library, [choice(2, { alike: 'merge', with: library[0]!.id })], ...rows);
+      expect(tune).toMatchObject({
+        after: { key: 'A', mode: 'major', stated: {}, notes: 'Also in D minor' },
+      });
+    });
+
+    it('merges several into one, of the library or of the file, and nothing twice', () => {
+      const library = [stored('Lantern Hill', { notes: 'x' })];
+      const rows = [
+        'title,key,notes',
+        'Lantern Hill,A,x',
+        'Lantern Hil,A,y',
+        'Lanter Hill,A,y',
+        'New One,D,',
+        'The New One,D,z',
+      ];
+      const tunes = choose(
+        library,
+        [3, 4, 6].map((line) => choice(line, { alike: 'merge' })),
+        ...rows,
+      );
+      expect(tunes).toMatchObject([
+        { action: 'update', after: { notes: 'x\nAlso: Lantern Hil\ny\nAlso: Lanter Hill' } },
+        { action: 'merge', into: 0 },
+        { action: 'merge', into: 0 },
+        { action: 'create', content: { title: 'New One', notes: 'Also: The New One\nz' } },
+        { action: 'merge', into: 3 },
+      ]);
+      // A second time there is nothing left to add.
+      const first = tunes[0]!;
+      if (first.action !== 'update') throw new Error('It was changed.');
+      const again = choose(
+        [first.after],
+        [3, 4].map((line) => choice(line, { alike: 'merge' })),
+        ...rows.slice(0, 4),
+      );
+      expect(again.slice(1).map(({ action }) => action)).toEqual(['merge', 'merge']);
+      expect(again[0]!.action).toBe('unchanged');
+    });
+
+    it('keeps a tune apart whose other is left out, or is none of those alike', () => {
+      const rows = ['title,key', 'New One,D', 'The New One,D'];
+      const library = [stored('New One', { key: 'G' }), stored('Old One')];
+      const left = choose(
+        library,
+        [choice(2, { alike: 'skip' }), choice(3, { alike: 'merge', with: 2 })],
+        ...rows,
+      );
+      expect(left.map(({ action }) => action)).toEqual(['skip', 'create']);
+      const other = choose(library, [choice(3, { alike: 'merge', with: library[1]!.id })], ...rows);
+      expect(other.map(({ action }) => action)).toEqual(['create', 'create']);
+    });
   });
 
   it('plans twenty thousand tunes of one name in a moment', () => {

@@ -1,7 +1,7 @@
 import { decodeText } from './abc-text';
 import { readAbcKey } from './abc-key';
 import { findHeaders, type AbcDirective, type AbcHeader } from './abc-headers';
-import { readAbcLines } from './abc-lines';
+import { readAbcLines, type AbcLine } from './abc-lines';
 import {
   kindNamed,
   understandTune,
@@ -23,16 +23,20 @@ const WORDS: Readonly<Record<string, WordField>> = { R: 'rhythm', C: 'composer',
  * @param limit at most so many tunes are read, and one more
  */
 export function readAbc(text: string, limit: number): TuneFile {
-  const lines = readAbcLines(text);
-  const { defaults, headers } = findHeaders(lines, limit);
+  const { defaults, headers } = findHeaders(readAbcLines(text), limit);
   const tunes = headers.map((header) => understandTune(readTune(header, defaults)));
   // A file of nothing but comments is an exported empty library.
-  const isAnything = lines.some(({ kind }) => kind === 'field' || kind === 'other');
+  const isEmpty = () => every(readAbcLines(text), ({ kind }) => kind !== 'field' && kind !== 'other');
   const problems =
-    headers.length === 0 && isAnything
+    headers.length === 0 && !isEmpty()
       ? [{ line: 1, message: 'No tune was found: a tune begins with a line X:1.' }]
       : [];
   return { tunes, problems };
+}
+
+function every(lines: Iterable<AbcLine>, holds: (line: AbcLine) => boolean): boolean {
+  for (const line of lines) if (!holds(line)) return false;
+  return true;
 }
 
 function readTune(header: AbcHeader, defaults: AbcHeader): RawTune {

@@ -42,10 +42,14 @@ export function readCsv(text: string, limit: number): TuneFile | NoTable {
     .slice(isHead ? 1 : 0)
     .filter(({ cells }) => cells.some((cell) => cell.trim() !== ''))
     .map((row) => readRow(row, columns));
+  const problems = isHead ? columnProblems(head.line, names, columns) : [guessProblem(head.line, columns)];
+  if (records.length > 1 && tunes.length === 0) {
+    problems.push({ line: head.line + 1, message: 'All rows under the first are empty.' });
+  }
   const lost = unread.map(({ line, message }) => broken(line, message));
   return {
     tunes: [...tunes, ...lost].sort((one, other) => one.line - other.line),
-    problems: isHead ? columnProblems(head.line, names, columns) : [guessProblem(head.line, columns)],
+    problems,
   };
 }
 

@@ -5,7 +5,9 @@ import {
   type CallHandler,
   type ExecutionContext,
 } from '@nestjs/common';
+import type { Request } from 'express';
 import { FileInterceptor } from '@nestjs/platform-express';
+import { CHOICES_MAX_LENGTH } from '@pegwell/shared/contract/import-choices';
 import { IMPORT_MAX_BYTES, type TuneFileFormat } from '@pegwell/shared/contract/tunes';
 import { ProblemException } from '../../common/problem';
 
@@ -23,11 +25,11 @@ export function formatOf(fileName: string): TuneFileFormat {
   throw new ProblemException('wrong-media-type', message, { errors: [{ path: 'file', message }] });
 }
 
-/** One file in memory, at most as large as an import may be; its name is judged before it is read. */
+/** One file in memory, at most as large as an import may be; its name, if it has one, is judged before it is read. */
 const Multipart = FileInterceptor('file', {
-  limits: { fileSize: IMPORT_MAX_BYTES, files: 1, fields: 10, fieldSize: 1_000, parts: 11 },
-  fileFilter: (_request, file, done) => {
-    formatOf(file.originalname);
+  limits: { fileSize: IMPORT_MAX_BYTES, files: 1, fields: 10, fieldSize: CHOICES_MAX_LENGTH, parts: 11 },
+  fileFilter: (request: Request, file, done) => {
+    if (request.query['pasted'] !== 'true') formatOf(file.originalname);
     done(null, true);
   },
 });

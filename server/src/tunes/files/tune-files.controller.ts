@@ -1,4 +1,5 @@
 import {
+  Body,
   Controller,
   Get,
   HttpCode,
@@ -10,16 +11,24 @@ import {
   UseInterceptors,
 } from '@nestjs/common';
 import { ApiBody, ApiConsumes, ApiParam, ApiProduces, ApiResponse, ApiTags } from '@nestjs/swagger';
-import type { ImportProgress, ImportReport } from '@pegwell/shared/contract/tunes';
+import type { ImportProgress, ImportReport, ImportUndone } from '@pegwell/shared/contract/tunes';
 import { AsMember, ForMembers, type Member } from '../../common/access';
 import { contentDisposition } from '../../common/content-disposition';
 import { PathIdPipe } from '../../common/path-id.pipe';
 import { ProblemException } from '../../common/problem';
 import { AtOnce } from '../../limits/at-once';
 import { Limited } from '../../limits/limited';
-import { ExportQueryDto, ImportProgressDto, ImportQueryDto, ImportReportDto } from '../tunes.dto';
+import {
+  ExportQueryDto,
+  ImportProgressDto,
+  ImportQueryDto,
+  ImportReportDto,
+  ImportUndoneDto,
+} from '../tunes.dto';
 import { ExportService } from './export.service';
+import { readChoices } from './import-choices';
 import { ImportService } from './import.service';
+import { ImportUndoService } from './import-undo.service';
 import { formatOf, TuneFileInterceptor, type UploadedTuneFile } from './tune-file.interceptor';
 
 @ApiTags('tunes')
@@ -28,6 +37,7 @@ import { formatOf, TuneFileInterceptor, type UploadedTuneFile } from './tune-fil
 export class TuneFilesController {
   constructor(
     private readonly imports: ImportService,
+    private readonly undoing: ImportUndoService,
     private readonly exports: ExportService,
   ) {}
 
@@ -41,7 +51,13 @@ export class TuneFilesController {
   @ApiBody({
     schema: {
       type: 'object',
-      properties: { file: { type: 'string', format: 'binary' } },
+      properties: {
+        file: { type: 'string', format: 'binary' },
+        choices: {
+          type: 'string',
+          description: 'What becomes of tunes of the file, as JSON (ImportChoice[]).',
+        },
+      },
       required: ['file'],
     },
   })
@@ -50,12 +66,14 @@ export class TuneFilesController {
     @AsMember() member: Member,
     @Query() query: ImportQueryDto,
     @UploadedFile() file: UploadedTuneFile | undefined,
+    @Body('choices') choices: unknown,
   ): Promise<ImportReport> {
     if (!file) {
       const message = 'A file is missing: it comes as "file" in multipart/form-data.';
       throw new ProblemException('not-valid', message, { errors: [{ path: 'file', message }] });
     }
-    return this.imports.import(member, { format: formatOf(file.originalname), bytes: file.buffer }, query);
+    const format = query.pasted ? null : formatOf(file.originalname);
+    return this.imports.import(member, { format, bytes: file.buffer }, query, readChoices(choices));
   }
 
   @Get('imports/:importId')
@@ -67,6 +85,15 @@ export class TuneFilesController {
     @Param('importId', PathIdPipe) importId: string,
   ): Promise<ImportProgress> {
     return this.imports.watch(member, importId);
+  }
+
+  @Post('imports/:importId/undo')
+  @HttpCode(200)
+  @ForMembers('tunes.change')
+  @ApiParam({ name: 'importId', format: 'uuid' })
+  @ApiResponse({ status: 200, type: ImportUndoneDto.Output })
+  undo(@AsMember() member: Member, @Param('importId', PathIdPipe) importId: string): Promise<ImportUndone> {
+    return this.undoing.undo(member, importId);
   }
 
   @Get('export')
