@@ -20,6 +20,7 @@ export class AccountsController {
 
   @Post('register')
   @ForAnyone()
+  @Limited('register')
   @ApiResponse({ status: 201, type: SignedInDto.Output })
   async register(
     @Body() body: RegisterDto,

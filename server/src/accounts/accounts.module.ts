@@ -1,3 +1,4 @@
+import { createSecretKey } from 'node:crypto';
 import { Module } from '@nestjs/common';
 import { JwtModule } from '@nestjs/jwt';
 import { ENV, type Env } from '../env';
@@ -19,7 +20,8 @@ import { SignInsService } from './sign-ins.service';
     JwtModule.registerAsync({
       inject: [ENV],
       useFactory: (env: Env) => ({
-        secret: env.PEGWELL_SECRET,
+        // A key, not its text: jsonwebtoken would try to read the text as a public key with every request (1 ms).
+        secret: createSecretKey(env.PEGWELL_SECRET, 'utf8'),
         // Named, so that a token signed in any other way (or not at all) is none.
         signOptions: { algorithm: 'HS256' as const },
         verifyOptions: { algorithms: ['HS256' as const] },

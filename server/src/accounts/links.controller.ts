@@ -28,6 +28,7 @@ export class LinksController {
   @Post('reset')
   @HttpCode(204)
   @ForAnyone()
+  @Limited('link')
   @ApiResponse({ status: 204, description: 'The password is the new one, and all sign-ins have ended.' })
   reset(@Body() body: ResetDto): Promise<void> {
     return this.recovery.reset(body);
@@ -36,6 +37,7 @@ export class LinksController {
   @Post('confirm')
   @HttpCode(200)
   @ForAnyone()
+  @Limited('link')
   @ApiResponse({ status: 200, type: ConfirmedDto.Output })
   confirm(@Body() body: ConfirmDto): Promise<Confirmed> {
     return this.addresses.confirm(body);

@@ -12,7 +12,7 @@ import type { Request } from 'express';
 import { catchError, from, mergeMap, type Observable } from 'rxjs';
 import { emailKeyOf } from '../common/email-key';
 import { ProblemException } from '../common/problem';
-import { limitRules, type LimitName } from './limits';
+import { limitRules, type LimitName, type LimitRule } from './limits';
 import { LimitsService } from './limits.service';
 
 /** Longer ones are no addresses, and are refused where the body is judged. */
@@ -33,11 +33,9 @@ function interceptorFor(name: LimitName): Type<NestInterceptor> {
     async intercept(context: ExecutionContext, next: CallHandler): Promise<Observable<unknown>> {
       const request = context.switchToHttp().getRequest<Request>();
       const { ip, account } = request;
-      const tried = await this.limits.count(name, {
-        ip,
-        address: addressIn(request),
-        accountId: account?.id,
-      });
+      // Whoever is signed in tries their own password, whatever address the body names.
+      const address = name === 'password' && account ? undefined : addressIn(request);
+      const tried = await this.limits.count(name, { ip, address, accountId: account?.id });
       if (limitRules[name].counts === 'all') return next.handle();
       return next.handle().pipe(
         mergeMap(async (answer: unknown) => {
@@ -45,7 +43,7 @@ function interceptorFor(name: LimitName): Type<NestInterceptor> {
           return answer;
         }),
         catchError((error: unknown) =>
-          from(isWrong(error) ? Promise.resolve() : tried.forgive()).pipe(
+          from(isWrong(name, error) ? Promise.resolve() : tried.forgive()).pipe(
             mergeMap(() => {
               throw error;
             }),
@@ -57,9 +55,11 @@ function interceptorFor(name: LimitName): Type<NestInterceptor> {
   return LimitInterceptor;
 }
 
-const isWrong = (error: unknown) =>
-  error instanceof ProblemException &&
-  (error.code === 'wrong-credentials' || error.code === 'wrong-password');
+/** By the rule's own list: refused for another reason, a try says nothing about a password or a link. */
+function isWrong(name: LimitName, error: unknown): boolean {
+  const { wrong = [] }: LimitRule = limitRules[name];
+  return error instanceof ProblemException && wrong.includes(error.code);
+}
 
 /** The e-mail address in a body that nobody has judged yet: anything may stand there. */
 function addressIn(request: Request): string | undefined {

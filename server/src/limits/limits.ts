@@ -1,3 +1,5 @@
+import type { ProblemCode } from '@pegwell/shared/contract/errors';
+
 /** How often something may be tried. A window begins with the first try that counts. */
 export interface Limit {
   readonly tries: number;
@@ -18,8 +20,10 @@ export type Counted = 'here' | 'address' | 'network' | 'account';
 
 export interface LimitRule {
   readonly limits: Partial<Record<Counted, Limit>>;
-  /** Whether only refused tries count (what was right is taken off again), or all of them. */
+  /** Whether only wrong tries count (what was right is taken off again), or all of them. */
   readonly counts: 'wrong' | 'all';
+  /** Codes of the problems that a wrong try meets. */
+  readonly wrong?: readonly ProblemCode[];
   /** What was too much; "Wait …" follows. */
   readonly words: string;
 }
@@ -34,6 +38,7 @@ export const limitRules = {
       network: { tries: 2_000, seconds: HOUR },
     },
     counts: 'wrong',
+    wrong: ['wrong-credentials', 'wrong-password'],
     words: 'That were too many wrong passwords.',
   },
   /** Whatever makes this server send a mail: it must not become somebody's nuisance. */
@@ -45,6 +50,19 @@ export const limitRules = {
     },
     counts: 'all',
     words: 'That were many mails already.',
+  },
+  /** The tokens of links in mail: 256 bits that nobody guesses, but a new password is hashed before they are judged. */
+  link: {
+    limits: { network: { tries: 1_000, seconds: HOUR } },
+    counts: 'wrong',
+    wrong: ['link-over'],
+    words: 'From your network came too many links that are over.',
+  },
+  /** An account costs a mail and a tenth of a second. A hall may make its thousand in one evening. */
+  register: {
+    limits: { network: { tries: 3_000, seconds: HOUR } },
+    counts: 'all',
+    words: 'From your network many accounts were made.',
   },
   /** A file is read and matched with the whole library: seconds of work at its largest. */
   import: {
