@@ -53,6 +53,12 @@ export function pagesOf({ circleId, coming, past, tuneId }: DemoPlaces): readonl
   const board = `${circle}/evenings/${coming.id}`;
   return [
     { name: 'home', path: '/' },
+    { name: 'account', path: '/account' },
+    {
+      name: 'account-delete',
+      path: '/account',
+      doing: async (page) => page.getByRole('button', { name: 'Delete my account …' }).click(),
+    },
     { name: 'evenings', path: `${circle}/evenings` },
     { name: 'evening-new', path: `${circle}/evenings/new` },
     { name: 'board', path: board },
@@ -101,6 +107,10 @@ export function openPagesOf({ coming }: DemoPlaces): readonly SeenPage[] {
   return [
     { name: 'sign-in', path: '/sign-in' },
     { name: 'register', path: '/register' },
+    { name: 'forgot', path: '/forgot' },
+    { name: 'reset', path: '/reset#a-token' },
+    { name: 'reset-part', path: '/reset' },
+    { name: 'confirm', path: '/confirm#a-token' },
     { name: 'code', path: '/f', phone: true },
     { name: 'follow-unknown', path: '/f/ZZZZZZZZ', phone: true },
     { name: 'follow-choose', path: `/f/${coming.code}`, phone: true },

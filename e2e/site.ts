@@ -16,8 +16,9 @@ export interface SiteDatabase {
 export interface Site {
   readonly url: string;
   readonly databaseUrl: string;
-  /** Ends the process as a power cut would, and starts another on the same port. */
   stop(): Promise<void>;
+  /** Ends the process as a power cut would. */
+  kill(): Promise<void>;
 }
 
 export async function freshDatabase(): Promise<SiteDatabase> {
@@ -42,8 +43,10 @@ async function query(url: string, statement: string): Promise<void> {
 
 export interface SiteOptions {
   readonly demo?: boolean;
-  /** What the pages are told to be; by default the server's own address. */
+  /** By default any free one. */
   readonly port?: number;
+  /** Where mail goes; without it, none is sent. */
+  readonly mailUrl?: string;
 }
 
 export async function startSite(databaseUrl: string, options: SiteOptions = {}): Promise<Site> {
@@ -58,12 +61,13 @@ export async function startSite(databaseUrl: string, options: SiteOptions = {}):
       PEGWELL_LOG: 'error',
       PEGWELL_SECRET: 'a secret of the journeys, long enough to be one',
       PEGWELL_DEMO: options.demo ? 'yes' : 'no',
+      PEGWELL_MAIL_URL: options.mailUrl,
       DATABASE_URL: databaseUrl,
     },
     stdio: ['ignore', 'inherit', 'inherit'],
   });
   await untilHealthy(url, child);
-  return { url, databaseUrl, stop: () => stop(child) };
+  return { url, databaseUrl, stop: () => end(child, 'SIGTERM'), kill: () => end(child, 'SIGKILL') };
 }
 
 async function untilHealthy(url: string, child: ChildProcess): Promise<void> {
@@ -80,11 +84,11 @@ async function untilHealthy(url: string, child: ChildProcess): Promise<void> {
   throw new Error('the server does not answer');
 }
 
-function stop(child: ChildProcess): Promise<void> {
-  if (child.exitCode !== null) return Promise.resolve();
+function end(child: ChildProcess, signal: NodeJS.Signals): Promise<void> {
+  if (child.exitCode !== null || child.signalCode !== null) return Promise.resolve();
   return new Promise((resolve) => {
     child.once('exit', () => resolve());
-    child.kill('SIGTERM');
+    child.kill(signal);
   });
 }
 

@@ -1,4 +1,5 @@
 import type { AddressInfo } from 'node:net';
+import { setTimeout as pause } from 'node:timers/promises';
 import { simpleParser } from 'mailparser';
 import { SMTPServer } from 'smtp-server';
 
@@ -30,6 +31,8 @@ interface CatcherOptions {
   readonly port?: number;
   /** An SMTP status to refuse a recipient with, as real servers do (RFC 5321, section 4.2). */
   readonly refuse?: (address: string) => number | undefined;
+  /** Milliseconds that it takes over each mail, as real servers do. */
+  readonly slow?: number;
   /** How many are kept; the oldest go. */
   readonly keep?: number;
 }
@@ -40,14 +43,17 @@ interface CatcherOptions {
 export async function startMailCatcher({
   port = 0,
   refuse,
+  slow = 0,
   keep = Infinity,
 }: CatcherOptions = {}): Promise<MailCatcher> {
   const mails: CaughtMail[] = [];
   const waiting = new Set<() => void>();
+  const gone = new Set<string>();
   const server = new SMTPServer({
     authOptional: true,
     disabledCommands: ['AUTH', 'STARTTLS'],
     logger: false,
+    onClose: ({ id }) => gone.add(id),
     onRcptTo: ({ address }, _session, callback) => {
       const status = refuse?.(address);
       if (status === undefined) callback();
@@ -55,7 +61,10 @@ export async function startMailCatcher({
     },
     onData: (stream, session, callback) => {
       simpleParser(stream).then(
-        (parsed) => {
+        async (parsed) => {
+          await pause(slow);
+          // Who does not wait for the answer has not handed it over, and will send it again (RFC 5321, section 4.2.5).
+          if (gone.has(session.id)) return;
           mails.push({
             messageId: parsed.messageId ?? '',
             from: parsed.from?.text ?? '',
