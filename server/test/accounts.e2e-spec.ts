@@ -68,6 +68,16 @@ describe('accounts', () => {
     expect(error?.message).toMatch(message);
   });
 
+  it('takes a password for the same however a keyboard writes its letters', async () => {
+    const values = { ...fresh(), password: 'Zaunk\u00f6nig im Schilf' };
+    await test.caller().post('/api/auth/register').send(values).expect(201);
+    // An o and a combining diaeresis, as some systems type it (Unicode Standard Annex 15).
+    const password = 'Zaunko\u0308nig im Schilf';
+    await test.caller().post('/api/auth/login').send({ email: values.email, password }).expect(200);
+    const other = { email: values.email, password: 'Zaunkonig im Schilf' };
+    await test.caller().post('/api/auth/login').send(other).expect(401);
+  });
+
   it('refuses a taken e-mail, however it is written', async () => {
     const values = fresh();
     await test.caller().post('/api/auth/register').send(values).expect(201);

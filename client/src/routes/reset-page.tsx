@@ -26,7 +26,7 @@ export function ResetPage() {
     <Page narrow>
       <PageHeading
         title="Choose a new password"
-        about={token ? 'It ends all sign-ins.' : 'The link is not whole. Open it again from the mail.'}
+        about={token ? 'It ends all your sign-ins.' : 'The link is not whole. Open it again from the mail.'}
       />
       {token ? (
         <div className={styles.form}>

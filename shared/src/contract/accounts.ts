@@ -20,9 +20,14 @@ function utf8Bytes(text: string): number {
   }, 0);
 }
 
+/**
+ * A password as text: keyboards write the same letter in more than one way, and all of them are the same password
+ * (NIST SP 800-63B, section 3.1.1.2).
+ */
+const passwordText = () => z.string({ error: 'A password is missing.' }).normalize('NFKC');
+
 /** A new password. */
-const passwordSchema = z
-  .string({ error: 'A password is missing.' })
+const passwordSchema = passwordText()
   .refine((text) => [...text].length >= PASSWORD_MIN_CHARACTERS, {
     error: `At least ${PASSWORD_MIN_CHARACTERS} characters.`,
   })
@@ -31,8 +36,7 @@ const passwordSchema = z
   });
 
 /** A password as somebody remembers it: right or wrong, but never of the wrong form. */
-const presentPasswordSchema = z
-  .string({ error: 'A password is missing.' })
+const presentPasswordSchema = passwordText()
   .min(1, 'A password is missing.')
   .max(1000, 'No password is as long as this.');
 

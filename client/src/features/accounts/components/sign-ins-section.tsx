@@ -62,11 +62,12 @@ export function SignInsSection() {
 function SignInRow({ signIn, onEnd }: { readonly signIn: SignIn; readonly onEnd: () => void }) {
   const { device, begunAt, usedAt, here } = signIn;
   const begun = momentOf(begunAt, ownTimeZone());
+  const used = momentOf(usedAt, ownTimeZone());
   return (
     <li>
       <span className={styles.words}>
         <b>{device}</b>
-        <span>{`since ${begun}; last used ${momentOf(usedAt, ownTimeZone())}`}</span>
+        <span>{used === begun ? `since ${begun}` : `since ${begun}; last used ${used}`}</span>
       </span>
       {here ? (
         <span className={styles.here}>this one</span>
