@@ -8,6 +8,8 @@ import { api, at, circleAnswers, id, page, refusal, tune } from './test-circle';
 
 const report: ImportReport = {
   format: 'csv',
+  encoding: 'utf-8',
+  importId: id(40),
   read: 4,
   created: 1,
   updated: 1,
@@ -136,6 +138,149 @@ describe('importing a list', () => {
     await choose(large);
     expect(await screen.findByText('A file of tunes is at most 10 MB.')).toBeTruthy();
     expect(asked).not.toContain(post);
+  });
+
+  it('proposes tunings and likely duplicates, and sends what is chosen', async () => {
+    const bodies: FormData[] = [];
+    const tunes: ImportReport['tunes'] = [
+      {
+        ...{ line: 2, title: 'Slack Tide (AEAE)', action: 'create' },
+        found: [{ kind: 'fiddle', tuning: 'AEAE', said: 'AEAE' }],
+      },
+      {
+        ...{
+          line: 3,
+          title: 'The Grey Owl',
+          action: 'create',
+          key: 'G',
+          mode: 'major',
+          rhythm: null,
+          tunings: [],
+        },
+        alike: [
+          {
+            id: id(31),
+            title: 'Grey Owl',
+            key: 'D',
+            mode: 'dorian',
+            rhythm: 'reel',
+            tunings: [{ kind: 'fiddle', tuning: 'ADAE' }],
+          },
+        ],
+      },
+    ];
+    const proposing = {
+      ...report,
+      read: 2,
+      created: 2,
+      updated: 0,
+      unchanged: 0,
+      skipped: 0,
+      tunes,
+      problems: [],
+    };
+    start({
+      [post]: ok(proposing),
+    });
+    const answered = fetch;
+    globalThis.fetch = (input, init) => {
+      if (init?.body instanceof FormData) bodies.push(init.body);
+      return answered(input, init);
+    };
+    await choose(csv());
+    expect(await screen.findByText(/0 of 1 taken/)).toBeTruthy();
+    await userEvent.click(screen.getByRole('button', { name: '1 likely there already' }));
+    expect(screen.getAllByRole('rowheader').map((cell) => cell.textContent)).toEqual(['The Grey Owl']);
+    const group = screen.getByRole('group', { name: 'Likely a tune that is there already: The Grey Owl' });
+    expect(within(group).getByText('ADAE')).toBeTruthy();
+    expect(within(group).getByLabelText<HTMLInputElement>('Keep both').checked).toBe(true);
+    await userEvent.click(within(group).getByLabelText('Add what is new to Grey Owl (D dorian)'));
+    await userEvent.click(screen.getByRole('button', { name: 'Take all that were found' }));
+    expect(screen.getByText(/1 of 1 taken/)).toBeTruthy();
+    await userEvent.click(screen.getByRole('button', { name: 'Import 2 tunes' }));
+    await screen.findByText('2 added, 0 changed, 0 unchanged, 0 left out.');
+    expect(
+      bodies.map((body) => JSON.parse((body.get('choices') as string | null) ?? '[]') as unknown),
+    ).toEqual([
+      [],
+      [
+        { line: 3, found: [], alike: 'merge', with: id(31) },
+        { line: 2, found: ['fiddle'], alike: 'keep' },
+      ],
+    ]);
+    // What was done leaves nothing to choose.
+    expect(screen.queryByText('Keep both')).toBeNull();
+  });
+
+  it('leaves a likely duplicate out of what it counts', async () => {
+    const alike = [{ line: 2, title: 'Owl', key: 'G', mode: 'major' as const, rhythm: null, tunings: [] }];
+    const tunes: ImportReport['tunes'] = [
+      { line: 2, title: 'Owl', action: 'create' },
+      { line: 3, title: 'The Owl', action: 'create', alike },
+    ];
+    start({ [post]: ok({ ...report, created: 2, updated: 0, skipped: 0, tunes, problems: [] }) });
+    await choose(csv());
+    await userEvent.click(await screen.findByLabelText('Leave this one out'));
+    expect(screen.getByRole('button', { name: 'Import 1 tune' })).toBeTruthy();
+    expect(screen.getByText('In line 2')).toBeTruthy();
+  });
+
+  it('reads a pasted list, and says at the list what is wrong with it', async () => {
+    const urls: URL[] = [];
+    start({
+      [post]: (_, url) => {
+        urls.push(url);
+        return refusal(422, 'cannot-be', { file: 'This file is empty.' });
+      },
+    });
+    const field = await screen.findByLabelText('Or paste a list');
+    await userEvent.click(screen.getByRole('button', { name: 'Read the list' }));
+    expect(await screen.findByText('Nothing is pasted yet.')).toBeTruthy();
+    expect(urls).toEqual([]);
+    await userEvent.type(field, 'June Apple (A)');
+    await userEvent.click(screen.getByRole('button', { name: 'Read the list' }));
+    expect(await screen.findByText('This file is empty.')).toBeTruthy();
+    expect(field.getAttribute('aria-invalid')).toBe('true');
+    expect(urls.map(({ searchParams }) => searchParams.get('pasted'))).toEqual(['true']);
+  });
+
+  it('says in which encoding a file was read that does not say so itself', async () => {
+    start({ [post]: ok({ ...report, encoding: 'windows-1252' }) });
+    await choose(csv());
+    expect(await screen.findByText(/it was read as windows-1252/)).toBeTruthy();
+  });
+
+  it('asks again under the same id when the connection breaks', async () => {
+    start({ [post]: ok(report) });
+    const answered = fetch;
+    const ids: (string | null)[] = [];
+    globalThis.fetch = (input, init) => {
+      const url = new URL(input as string, 'http://pegwell.test');
+      if (url.searchParams.get('dryRun') !== 'false') return answered(input, init);
+      ids.push(url.searchParams.get('progress'));
+      return ids.length === 1 ? Promise.reject(new TypeError('gone')) : answered(input, init);
+    };
+    await choose(csv());
+    await userEvent.click(await screen.findByRole('button', { name: 'Import 2 tunes' }));
+    expect(await screen.findByText(/The connection broke. The import goes on/)).toBeTruthy();
+    expect(await screen.findByText(/^1 added/, {}, { timeout: 5_000 })).toBeTruthy();
+    expect(ids).toHaveLength(2);
+    expect(ids[0]).toBe(ids[1]);
+  });
+
+  it('undoes as one step, and lists what stays', async () => {
+    start({
+      [post]: ok(report),
+      [api('POST', `/tunes/imports/${id(40)}/undo`)]: ok({
+        ...{ removed: 3, restored: 1 },
+        kept: [{ id: id(33), title: 'Changed Since' }],
+      }),
+    });
+    await choose(csv());
+    await userEvent.click(await screen.findByRole('button', { name: 'Import 2 tunes' }));
+    await userEvent.click(await screen.findByRole('button', { name: 'Undo this import' }));
+    expect(await screen.findByText('Undone: 3 tunes taken out, 1 as before.')).toBeTruthy();
+    expect(screen.getByText('Changed Since')).toBeTruthy();
   });
 
   it('offers nothing to write where nothing would change', async () => {

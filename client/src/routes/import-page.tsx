@@ -2,8 +2,10 @@ import { Navigate } from 'react-router-dom';
 import { exportUrl } from '../features/tunes/api/tune-list';
 import { ImportPreview } from '../features/tunes/components/import-preview';
 import { ImportProgress } from '../features/tunes/components/import-progress';
+import { ImportUndo } from '../features/tunes/components/import-undo';
+import { PasteField } from '../features/tunes/components/paste-field';
 import { useImport } from '../features/tunes/hooks/use-import';
-import { toWrite } from '../features/tunes/import-rows';
+import { countWrites } from '../features/tunes/import-choices';
 import { count, grouped } from '../lib/format';
 import { BackLink } from '../ui/back-link';
 import { Button, LinkButton } from '../ui/button';
@@ -24,7 +26,7 @@ export function ImportPage() {
   );
   if (!circle.may('tunes.change')) return <Navigate to={tunesPath} replace />;
   const { preview, done, file } = it;
-  const writes = preview ? toWrite(preview) : 0;
+  const writes = preview ? countWrites(it.choices, preview) : 0;
   return (
     <Page narrow>
       <BackLink to={tunesPath}>Tunes</BackLink>
@@ -36,11 +38,19 @@ export function ImportPage() {
         label={file ? 'Choose another file' : 'Choose a file'}
         accept=".csv,.abc"
         file={file}
-        error={it.error}
+        error={it.pasted ? undefined : it.error}
         disabled={it.progressId !== null}
-        onFile={it.choose}
-        hint="A .csv or .abc file in UTF-8, at most 10 MB."
+        onFile={(chosen) => it.choose({ file: chosen, pasted: false })}
+        hint="A .csv or .abc file, at most 10 MB."
       />
+      <div className={styles.paste}>
+        <PasteField
+          error={it.pasted ? it.error : undefined}
+          busy={it.reading && it.pasted}
+          disabled={it.progressId !== null}
+          onPaste={(text) => it.choose({ file: new File([text], 'pasted'), pasted: true })}
+        />
+      </div>
       {it.failedToWrite ? (
         <p className={styles.after}>
           Pegwell keeps all of a file or nothing of it. Look in the library before you try again.
@@ -50,13 +60,14 @@ export function ImportPage() {
       {preview && !it.reading ? (
         <section className={styles.result} aria-label={done ? 'What was imported' : 'What will become of it'}>
           {it.progressId ? (
-            <ImportProgress circleId={circle.id} importId={it.progressId} expected={writes} />
+            <ImportProgress circleId={circle.id} importId={it.progressId} expected={writes} lost={it.lost} />
           ) : done ? (
             <div className={styles.do}>
               <p className={styles.done}>
                 {`${grouped(done.created)} added, ${grouped(done.updated)} changed, ${grouped(done.unchanged)} unchanged, ${grouped(done.skipped)} left out.`}
               </p>
               <LinkButton to={tunesPath}>To the tunes</LinkButton>
+              <ImportUndo undone={it.undone} busy={it.undoing} error={it.undoError} onUndo={it.undo} />
             </div>
           ) : (
             <div className={styles.do}>
@@ -67,10 +78,17 @@ export function ImportPage() {
               )}
             </div>
           )}
+          {isGuessed(preview.encoding) ? (
+            <p className={styles.encoding}>
+              This file is not Unicode; it was read as {preview.encoding}. See whether accents are right.
+            </p>
+          ) : null}
           <ImportPreview
-            key={done ? 'done' : file?.name}
+            key={done ? 'done' : it.round}
             report={done ?? preview}
             tense={done ? 'done' : 'plan'}
+            choices={it.choices}
+            {...(!done && !it.progressId && { onChoose: it.setChoices })}
           />
         </section>
       ) : (
@@ -79,6 +97,9 @@ export function ImportPage() {
     </Page>
   );
 }
+
+/** Unicode says itself what it is; everything else was told by looking at it. */
+const isGuessed = (encoding: string) => !encoding.startsWith('utf-');
 
 /** What a file looks like; stands there until one is read. */
 function Help({ circleId }: { readonly circleId: string }) {
@@ -90,7 +111,7 @@ function Help({ circleId }: { readonly circleId: string }) {
         them <code>mode</code>, <code>rhythm</code>, <code>parts</code>, <code>composer</code>,{' '}
         <code>source</code>, <code>notes</code>. Tunings have a column per instrument, as <code>fiddle</code>{' '}
         or <code>banjo</code>: <code>AEAE or GDAE</code>, <code>gDGBD capo 2</code>, or <code>any</code> where
-        nobody retunes for it.
+        nobody retunes for it. Without column names the keys are looked for, and the titles beside them.
       </p>
       <p>
         <a href="/example-tunes.csv" download>
@@ -100,7 +121,8 @@ function Help({ circleId }: { readonly circleId: string }) {
       <h2>ABC notation</h2>
       <p>
         Titles, keys and rhythms are read from the header of each tune. Tunings stand in it as{' '}
-        <code>%%pegwell-tuning fiddle AEAE</code>.
+        <code>%%pegwell-tuning fiddle AEAE</code>. Those in notes or titles are found, and taken if you say
+        so.
       </p>
       <h2>Once more</h2>
       <p>

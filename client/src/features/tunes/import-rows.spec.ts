@@ -3,7 +3,15 @@ import { describe, expect, it } from 'vitest';
 import { importRows } from './import-rows';
 
 const report = (tunes: ImportReport['tunes'], problems: ImportReport['problems']): ImportReport => ({
-  ...{ format: 'abc', read: tunes.length, created: 0, updated: 0, unchanged: 0, skipped: 0 },
+  ...{
+    format: 'abc',
+    encoding: 'utf-8',
+    read: tunes.length,
+    created: 0,
+    updated: 0,
+    unchanged: 0,
+    skipped: 0,
+  },
   tunes,
   problems,
 });

@@ -1,8 +1,9 @@
 import type { ImportAction, ImportReport } from '@pegwell/shared/contract/tunes';
 
-interface ImportRow {
-  readonly line: number;
-  readonly title: string;
+export interface ImportRow extends Pick<
+  ImportReport['tunes'][number],
+  'line' | 'title' | 'key' | 'mode' | 'tunings' | 'found' | 'alike'
+> {
   readonly action: ImportAction;
   /** Why it is left out; empty otherwise. */
   readonly reasons: readonly string[];
@@ -31,15 +32,6 @@ export function importRows({ tunes, problems }: ImportReport): ImportRows {
   }
   return {
     notes,
-    rows: sorted.map((tune) => ({
-      line: tune.line,
-      title: tune.title,
-      action: tune.action,
-      reasons: reasons.get(tune) ?? [],
-    })),
+    rows: sorted.map((tune) => ({ ...tune, reasons: reasons.get(tune) ?? [] })),
   };
 }
-
-/** How many tunes an import writes. */
-export const toWrite = ({ created, updated }: Pick<ImportReport, 'created' | 'updated'>): number =>
-  created + updated;

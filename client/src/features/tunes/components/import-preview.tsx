@@ -1,8 +1,12 @@
 import type { ImportAction, ImportReport } from '@pegwell/shared/contract/tunes';
 import { useMemo, useState } from 'react';
 import { grouped } from '../../../lib/format';
+import { Button } from '../../../ui/button';
 import { Pager } from '../../../ui/pager';
-import { importRows } from '../import-rows';
+import { choiceOf, choose, countFound, takeAllFound, type ImportChoices } from '../import-choices';
+import { importRows, type ImportRow } from '../import-rows';
+import { AlikeChoice } from './alike-choice';
+import { FoundChoice } from './found-choice';
 import styles from './import-preview.module.css';
 
 /** Rows drawn at once: five thousand would make a page that is slow to scroll and to read aloud. */
@@ -15,19 +19,26 @@ const WORDS: Readonly<Record<ImportAction, { readonly plan: string; readonly don
   skip: { plan: 'left out', done: 'left out' },
 };
 
+/** What rows are looked at: those of one action, or those that leave something to choose. */
+type Shown = ImportAction | 'found' | 'alike';
+
 interface ImportPreviewProps {
   readonly report: ImportReport;
   /** `plan` before the import, `done` behind it. */
   readonly tense: 'plan' | 'done';
+  readonly choices: ImportChoices;
+  /** Absent where nothing can be chosen any more. */
+  readonly onChoose?: (choices: ImportChoices) => void;
 }
 
-/** A file line by line: what becomes of each tune, and why some are left out. Counts on top are filters. */
-export function ImportPreview({ report, tense }: ImportPreviewProps) {
+/**
+ * A file line by line: what becomes of each tune, why some are left out, and what there is to choose. Counts on top
+ * are filters.
+ */
+export function ImportPreview({ report, tense, choices, onChoose }: ImportPreviewProps) {
   const { rows, notes } = useMemo(() => importRows(report), [report]);
   // Behind an import what was left out is what there is still to do.
-  const [only, setOnly] = useState<ImportAction | null>(
-    tense === 'done' && report.skipped > 0 ? 'skip' : null,
-  );
+  const [only, setOnly] = useState<Shown | null>(tense === 'done' && report.skipped > 0 ? 'skip' : null);
   const [page, setPage] = useState(1);
   const counts: readonly (readonly [ImportAction, number])[] = [
     ['create', report.created],
@@ -35,9 +46,11 @@ export function ImportPreview({ report, tense }: ImportPreviewProps) {
     ['unchanged', report.unchanged],
     ['skip', report.skipped],
   ];
-  const shown = only ? rows.filter(({ action }) => action === only) : rows;
-  const show = (action: ImportAction | null) => {
-    setOnly(action);
+  const shown = only ? rows.filter((row) => isShown(row, only)) : rows;
+  const { found, taken } = countFound(choices, report);
+  const alike = rows.filter((row) => isShown(row, 'alike')).length;
+  const show = (what: Shown | null) => {
+    setOnly(what);
     setPage(1);
   };
   return (
@@ -57,7 +70,28 @@ export function ImportPreview({ report, tense }: ImportPreviewProps) {
             <b>{grouped(number)}</b> {WORDS[action][tense]}
           </button>
         ))}
+        {onChoose && found > 0 ? (
+          <button type="button" aria-pressed={only === 'found'} onClick={() => show('found')}>
+            <b>{grouped(found)}</b> {found === 1 ? 'tuning found' : 'tunings found'}
+          </button>
+        ) : null}
+        {onChoose && alike > 0 ? (
+          <button type="button" aria-pressed={only === 'alike'} onClick={() => show('alike')}>
+            <b>{grouped(alike)}</b> likely there already
+          </button>
+        ) : null}
       </div>
+      {onChoose && found > 0 ? (
+        <div className={styles.found}>
+          <p>
+            Tunings that stand in titles or notes are not taken unless you say so.{' '}
+            {`${grouped(taken)} of ${grouped(found)} taken.`}
+          </p>
+          <Button look="outline" onClick={() => onChoose(takeAllFound(choices, report, taken < found))}>
+            {taken < found ? 'Take all that were found' : 'Take none of them'}
+          </Button>
+        </div>
+      ) : null}
       {notes.length > 0 ? (
         <ul className={styles.notes}>
           {notes.map(({ line, message }) => (
@@ -89,6 +123,7 @@ export function ImportPreview({ report, tense }: ImportPreviewProps) {
                       {reason}
                     </span>
                   ))}
+                  {onChoose ? <Choices row={row} choices={choices} onChoose={onChoose} /> : null}
                 </td>
               </tr>
             ))}
@@ -98,4 +133,25 @@ export function ImportPreview({ report, tense }: ImportPreviewProps) {
       <Pager page={page} pageSize={ROWS_A_PAGE} total={shown.length} what="lines" onPage={setPage} />
     </div>
   );
+}
+
+interface ChoicesProps {
+  readonly row: ImportRow;
+  readonly choices: ImportChoices;
+  readonly onChoose: (choices: ImportChoices) => void;
+}
+
+function Choices({ row, choices, onChoose }: ChoicesProps) {
+  const said = { row, choice: choiceOf(choices, row.line) };
+  return (
+    <>
+      {row.found ? <FoundChoice {...said} onChoose={(choice) => onChoose(choose(choices, choice))} /> : null}
+      {row.alike ? <AlikeChoice {...said} onChoose={(choice) => onChoose(choose(choices, choice))} /> : null}
+    </>
+  );
+}
+
+function isShown(row: ImportRow, what: Shown): boolean {
+  if (what === 'found') return row.found !== undefined;
+  return what === 'alike' ? row.alike !== undefined : row.action === what;
 }

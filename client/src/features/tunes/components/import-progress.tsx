@@ -11,10 +11,12 @@ interface ImportProgressProps {
   readonly importId: string;
   /** How many tunes are to be written, as the preview had it, until the server says. */
   readonly expected: number;
+  /** Whether the connection broke: it is asked for again by itself. */
+  readonly lost: boolean;
 }
 
 /** Moves with the rows that are really written. */
-export function ImportProgress({ circleId, importId, expected }: ImportProgressProps) {
+export function ImportProgress({ circleId, importId, expected, lost }: ImportProgressProps) {
   const progress = useQuery({
     queryKey: ['import', circleId, importId],
     queryFn: ({ signal }) => getImportProgress(circleId, importId, signal),
@@ -36,7 +38,9 @@ export function ImportProgress({ circleId, importId, expected }: ImportProgressP
         }
       />
       <p style={{ marginTop: 8, color: 'var(--ink-2)' }}>
-        You can leave this page; the import goes on. All of it is kept, or nothing.
+        {lost
+          ? 'The connection broke. The import goes on, and this page asks for it again.'
+          : 'You can leave this page; the import goes on. All of it is kept, or nothing.'}
       </p>
     </div>
   );

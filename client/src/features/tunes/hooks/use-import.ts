@@ -3,53 +3,96 @@ import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 import { newId } from '../../../lib/new-id';
 import { ProblemError, sentenceOf } from '../../../lib/problem';
-import { importTunes } from '../api/import-tunes';
+import { importTunes, undoImport, type ImportSource } from '../api/import-tunes';
 import { libraryKey } from '../api/tune-list';
+import { NO_CHOICES, type ImportChoices } from '../import-choices';
 
 const TOO_LARGE = `A file of tunes is at most ${IMPORT_MAX_BYTES / 1024 / 1024} MB.`;
+/** How often an import is asked for again when the connection breaks, and after how many milliseconds. */
+const TRIES = 6;
+const pauseBefore = (tries: number) => Math.min(1_000 * 2 ** tries, 10_000);
 
-/** A file from being chosen to being written: what it would do first, then the doing. */
+const isLost = (error: unknown) => error instanceof ProblemError && error.status === 0;
+
+interface Writing {
+  readonly source: ImportSource;
+  readonly choices: ImportChoices;
+  readonly progress: string;
+}
+
+/** A file from being chosen to being written, and taken back: what it would do first, then the doing. */
 export function useImport(circleId: string, onWritten: (report: ImportReport) => void) {
   const client = useQueryClient();
-  const [file, setFile] = useState<File | null>(null);
+  const [source, setSource] = useState<ImportSource | null>(null);
+  const [choices, setChoices] = useState(NO_CHOICES);
+  const [round, setRound] = useState(0);
+  const renew = () => client.invalidateQueries({ queryKey: libraryKey(circleId) });
   const preview = useMutation({
-    mutationFn: (chosen: File) => {
+    mutationFn: (chosen: ImportSource) => {
       // A file that is refused anyway need not travel.
-      if (chosen.size > IMPORT_MAX_BYTES) throw tooLarge();
+      if (chosen.file.size > IMPORT_MAX_BYTES) throw tooLarge();
       return importTunes(circleId, chosen, { dryRun: true });
     },
   });
   const writing = useMutation({
-    mutationFn: ({ chosen, progress }: { chosen: File; progress: string }) =>
-      importTunes(circleId, chosen, { dryRun: false, progress }),
+    mutationFn: ({ source: sent, choices: said, progress }: Writing) =>
+      importTunes(circleId, sent, { dryRun: false, progress }, [...said.values()]),
+    // The same file under the same id: the server answers what it answered, or goes on.
+    retry: (tries, error) => tries < TRIES && isLost(error),
+    retryDelay: pauseBefore,
     // Also when the page was left meanwhile.
     onSuccess: async (report) => {
       onWritten(report);
-      await client.invalidateQueries({ queryKey: libraryKey(circleId) });
+      await renew();
     },
+  });
+  const undoing = useMutation({
+    mutationFn: (importId: string) => undoImport(circleId, importId),
+    onSuccess: renew,
   });
   const error = writing.error ?? preview.error;
   return {
-    file,
+    /** The chosen file; none for pasted words. */
+    file: source?.pasted ? null : (source?.file ?? null),
+    pasted: source?.pasted ?? false,
+    /** Another number for every file, so that its preview begins anew. */
+    round,
     /** What the file would do, once read. */
     preview: preview.data,
     reading: preview.isPending,
+    choices,
+    setChoices,
     /** Under which the writing can be watched; null while nothing is written. */
     progressId: writing.isPending ? writing.variables.progress : null,
+    /** Whether the connection broke while it is written; it is asked for again. */
+    lost: writing.isPending && writing.failureCount > 0,
     /** What was done. */
     done: writing.data,
     /** What is wrong with the file, or with the sending of it. */
     error: error ? sentenceAt('file', error) : undefined,
     /** Whether the writing failed, and the file was not read wrongly before. */
     failedToWrite: writing.isError,
-    choose: (chosen: File) => {
-      setFile(chosen);
+    choose: (chosen: ImportSource) => {
+      setSource(chosen);
+      setRound((before) => before + 1);
+      setChoices(NO_CHOICES);
       writing.reset();
+      undoing.reset();
       preview.mutate(chosen);
     },
     write: () => {
-      if (file && !writing.isPending) writing.mutate({ chosen: file, progress: newId() });
+      if (!source || writing.isPending) return;
+      // Once more after a failure: what is asked for is still the same.
+      const same = writing.isError && writing.variables.choices === choices;
+      const progress = same ? writing.variables.progress : newId();
+      writing.mutate({ source, choices, progress });
     },
+    undo: () => {
+      if (writing.data?.importId !== undefined) undoing.mutate(writing.data.importId);
+    },
+    undoing: undoing.isPending,
+    undone: undoing.data,
+    undoError: undoing.error ? sentenceOf(undoing.error) : undefined,
   };
 }
 
