@@ -116,6 +116,9 @@ export function openPagesOf({ coming }: DemoPlaces): readonly SeenPage[] {
     { name: 'follow-choose', path: `/f/${coming.code}`, phone: true },
     { name: 'follow', path: `/f/${coming.code}`, phone: true, doing: chooseFiddle },
     { name: 'room', path: `/f/${coming.code}/room`, phone: true },
+    { name: 'retune', path: '/retune?kind=fiddle&from=GDAE&to=AEAE', phone: true },
+    { name: 'retune-guitar', path: '/retune?kind=guitar&from=EADGBE&to=DADGAD', phone: true },
+    { name: 'retune-there', path: '/retune?kind=fiddle&from=GDAE&to=GDAE', phone: true },
   ];
 }
 

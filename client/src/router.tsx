@@ -8,6 +8,7 @@ import { Loading } from './ui/states';
 const CodePage = lazyPage(() => import('./routes/code-page'), 'CodePage');
 const FollowPage = lazyPage(() => import('./routes/follow-page'), 'FollowPage');
 const RoomPage = lazyPage(() => import('./routes/room-page'), 'RoomPage');
+const RetunePage = lazyPage(() => import('./routes/retune-page'), 'RetunePage');
 const DeskRoutes = lazyPage(() => import('./routes/desk-routes'), 'DeskRoutes');
 
 export function AppRoutes() {
@@ -19,6 +20,7 @@ export function AppRoutes() {
           <Route path="/f" element={<CodePage />} />
           <Route path="/f/:code" element={<FollowPage />} />
           <Route path="/f/:code/room" element={<RoomPage />} />
+          <Route path="/retune" element={<RetunePage />} />
           <Route path="*" element={<DeskRoutes />} />
         </Routes>
       </Suspense>

@@ -136,7 +136,7 @@ describe('a retune step by step', () => {
   // score.md, "Words of safety": the order. Spike fret = 5 + capo fret: F. Ford, frets.com (7 and 9 usual).
   it('takes the capo off first and puts it on last', () => {
     expect(retuneSteps(banjo, tuned('banjo', 'gDGBD capo 2'), tuned('banjo', 'gCGCD capo 4'))).toEqual([
-      'Capo off, fifth string out of its spike.',
+      'Capo off. Fifth string out of its spike.',
       'D peg (4th): down a whole step, from D to C. A little under, then up to pitch.',
       'B peg (2nd): up a half step, from B to C. Slowly, from below.',
       'See that the bridge stands upright, and check all strings again: one moves the others.',

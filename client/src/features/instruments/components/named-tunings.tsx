@@ -3,7 +3,9 @@ import type { InstrumentKind } from '@pegwell/shared/music/instrument';
 import { NAMED_TUNINGS, type NamedTuning } from '@pegwell/shared/music/named-tunings';
 import { showTuning } from '@pegwell/shared/music/tuning';
 import { retuneWords } from '@pegwell/shared/music/words';
+import { Link } from 'react-router-dom';
 import { useMedia } from '../../../lib/use-media';
+import { retuneAddress } from '../../../music/retune-address';
 import { PegStrip } from '../../../pictures/peg-strip';
 import { TuningText } from '../../../pictures/tuning-text';
 import styles from './named-tunings.module.css';
@@ -62,6 +64,11 @@ function NamedTuningRow({ kind, from, named }: NamedTuningsProps & { readonly na
       </div>
       <div className={styles.words}>
         <p>{words || 'Nothing to turn'}</p>
+        {words ? (
+          <p>
+            <Link to={retuneAddress(kind, { pitches: from, capo: 0 }, { pitches, capo: 0 })}>Peg by peg</Link>
+          </p>
+        ) : null}
         {toWatch.map(({ courseIndex, grade, sentence }) => (
           <p
             key={courseIndex}

@@ -21,7 +21,7 @@ export function FollowView({ follow, kind }: FollowViewProps) {
         {announcement(follow, kind)}
       </p>
       {now ? (
-        <NowSection now={now} kind={kind} inRoom={kinds.includes(kind.id)} />
+        <NowSection now={now} kind={kind} inRoom={kinds.includes(kind.id)} referenceA={follow.referenceA} />
       ) : (
         <section className={styles.plain}>
           <h1>{title}</h1>

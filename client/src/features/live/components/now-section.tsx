@@ -11,10 +11,12 @@ interface NowSectionProps {
   readonly kind: InstrumentKind;
   /** Whether the kind retunes with the room: the host waits for it. */
   readonly inRoom: boolean;
+  /** A4 of the room, in hertz. */
+  readonly referenceA: number;
 }
 
 /** The tune that is now, large, and what it asks of this player. */
-export function NowSection({ now, kind, inRoom }: NowSectionProps) {
+export function NowSection({ now, kind, inRoom, referenceA }: NowSectionProps) {
   const { phase, retune: move, pitches } = now;
   // The host does not wait for kinds that are not in the room: they have it to turn while others play.
   const turning = move !== null && (phase === 'tuning' || !inRoom);
@@ -38,17 +40,17 @@ export function NowSection({ now, kind, inRoom }: NowSectionProps) {
       {turning ? (
         <>
           <p className={styles.turn}>{turnNow(move)}</p>
-          <Turns kind={kind} move={move} when="now" />
+          <Turns {...{ kind, move, referenceA }} when="now" />
         </>
       ) : (
-        <Set now={now} kind={kind} />
+        <Set {...{ now, kind, referenceA }} />
       )}
     </section>
   );
 }
 
 /** Nothing to turn, or done already; with a way in for those who come late. */
-function Set({ now, kind }: Pick<NowSectionProps, 'now' | 'kind'>) {
+function Set({ now, kind, referenceA }: Omit<NowSectionProps, 'inRoom'>) {
   const { phase, retune: move, pitches } = now;
   const standard = standardPitches(kind);
   const { pegChanges, deltas } = pitches ? retune(kind, standard, pitches) : { pegChanges: 0, deltas: [] };
@@ -61,14 +63,14 @@ function Set({ now, kind }: Pick<NowSectionProps, 'now' | 'kind'>) {
       {move ? (
         <details className={styles.more}>
           <summary>Not there yet? What to turn</summary>
-          <Turns kind={kind} move={move} when="now" />
+          <Turns {...{ kind, move, referenceA }} when="now" />
         </details>
       ) : null}
       {!move && pitches && pegChanges > 0 ? (
         <details className={styles.more}>
           <summary>{`Just come in, tuned to ${stringLetters(kind, standard).join('')}?`}</summary>
           <Turns
-            kind={kind}
+            {...{ kind, referenceA }}
             when="now"
             move={{
               deltas: [...deltas],

@@ -4,8 +4,10 @@ import type { InstrumentKind } from '@pegwell/shared/music/instrument';
 import { retuneSteps, TURNING_HABITS } from '@pegwell/shared/music/retune-steps';
 import { capoWords, turns } from '@pegwell/shared/music/words';
 import { useState } from 'react';
+import { useParams } from 'react-router-dom';
+import { retuneAddress } from '../../../music/retune-address';
 import { PegStrip } from '../../../pictures/peg-strip';
-import { Button } from '../../../ui/button';
+import { Button, LinkButton } from '../../../ui/button';
 import { inOrder, sidesOf } from '../follow-words';
 import styles from './turns.module.css';
 
@@ -14,13 +16,16 @@ interface TurnsProps {
   readonly move: FollowMove;
   /** `now`: step by step with how to do it safely; `soon`: what will be turned. */
   readonly when: 'now' | 'soon';
+  /** A4 of the room, in hertz: leads to the card that goes through the turns one by one. */
+  readonly referenceA?: number;
 }
 
 /**
  * A retune peg by peg, with what to look out for. What the limits refuse is shown only to a player who
  * says to go on: nobody confirms it for another.
  */
-export function Turns({ kind, move, when }: TurnsProps) {
+export function Turns({ kind, move, when, referenceA }: TurnsProps) {
+  const { code } = useParams();
   const [goesOn, setGoesOn] = useState(false);
   const sides = sidesOf(move);
   if (!sides) return null;
@@ -46,6 +51,11 @@ export function Turns({ kind, move, when }: TurnsProps) {
         </ol>
       )}
       <Cautions found={found} gentler={move.gentler} />
+      {pegsTurn && referenceA !== undefined ? (
+        <LinkButton look="outline" to={retuneAddress(kind, from, to, { code, referenceA })}>
+          Peg by peg, with the sound
+        </LinkButton>
+      ) : null}
       {refused ? (
         <Button look="danger" onClick={() => setGoesOn(true)}>
           I know my strings. Show the turns

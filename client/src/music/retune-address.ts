@@ -1,0 +1,17 @@
+import type { InstrumentKind } from '@pegwell/shared/music/instrument';
+import { showTuned, type Tuned } from '@pegwell/shared/music/tuning';
+
+interface Room {
+  /** Of the evening to come back to. */
+  readonly code?: string | undefined;
+  /** A4 of the room, in hertz. */
+  readonly referenceA?: number | undefined;
+}
+
+/** Where the retune card of two tunings is: all that it shows stands in its address. */
+export function retuneAddress(kind: InstrumentKind, from: Tuned, to: Tuned, room: Room = {}): string {
+  const query = new URLSearchParams({ kind: kind.id, from: showTuned(kind, from), to: showTuned(kind, to) });
+  if (room.referenceA !== undefined && room.referenceA !== 440) query.set('a', `${room.referenceA}`);
+  if (room.code !== undefined) query.set('code', room.code);
+  return `/retune?${query.toString()}`;
+}
