@@ -1,4 +1,4 @@
-import { compare, getRounds, hash } from 'bcryptjs';
+import { compare, getRounds, hash, truncates } from 'bcryptjs';
 import { ProblemException } from '../common/problem';
 import { isCommonPassword } from './common-passwords';
 
@@ -14,10 +14,13 @@ export function hashPassword(password: string): Promise<string> {
   return hash(password, COST);
 }
 
-/** `stored` is null where nobody has the address: wrong, after the same time. */
+/**
+ * `stored` is null where nobody has the address: wrong, after the same time. bcrypt reads 72 bytes and no further:
+ * what is longer was never set, and is not let in for how it begins.
+ */
 export async function isPassword(password: string, stored: string | null): Promise<boolean> {
   const right = await compare(password, stored ?? NOBODY);
-  return right && stored !== null;
+  return right && stored !== null && !truncates(password);
 }
 
 /** Whether a stored password was hashed at another cost than new ones are. */

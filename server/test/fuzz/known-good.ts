@@ -65,6 +65,7 @@ const BODIES: Readonly<Record<string, fc.Arbitrary<unknown>>> = {
     password: fc.constant(PASSWORD),
     displayName: fc.constant('Ada'),
   }),
+  'post /api/auth/login': fc.constant({ email: '@email:0', password: PASSWORD }),
   'post /api/auth/forgot': fc.record({ email: newAddress }),
   'post /api/auth/password': fc.constant({ current: PASSWORD, password: 'another crooked tune' }),
   'post /api/auth/email': fc.record({ email: newAddress, current: fc.constant(PASSWORD) }),
@@ -73,6 +74,11 @@ const BODIES: Readonly<Record<string, fc.Arbitrary<unknown>>> = {
     { title: fc.constant('An evening'), startsAt: fc.constant('2027-01-14T19:30'), goal },
     { requiredKeys: ['title', 'startsAt'] },
   ),
+  'patch /api/sessions/@session:0': fc.record({ title: fc.constant('Another'), goal }, { requiredKeys: [] }),
+  'patch /api/circles/@circle:0/tunes/@tune:0': fc.record({
+    key: fc.constantFrom('A', 'D'),
+    rhythm: fc.constantFrom('reel', null),
+  }),
   'post /api/sessions/@session:0/racks': fc.record(rack),
   'post /api/score': stateless,
   'post /api/suggest': stateless,
@@ -114,5 +120,6 @@ export function expendable(path: string): CallerName | null {
 
 /** As the document writes it. */
 function operationOf(name: string): string {
-  return name.replace('@circle:0', '{circleId}').replace('@session:0', '{id}').replace('@rack:0', '{rackId}');
+  const parts = { circle: 'circleId', session: 'id', rack: 'rackId', tune: 'tuneId' };
+  return name.replace(/@(circle|session|rack|tune):0/g, (_, kind: keyof typeof parts) => `{${parts[kind]}}`);
 }
