@@ -1,5 +1,5 @@
 import type { ImportAction, ImportReport } from '@pegwell/shared/contract/tunes';
-import { useMemo, useState } from 'react';
+import { Fragment, useMemo, useState } from 'react';
 import { grouped } from '../../../lib/format';
 import { Button } from '../../../ui/button';
 import { Pager } from '../../../ui/pager';
@@ -113,19 +113,28 @@ export function ImportPreview({ report, tense, choices, onChoose }: ImportPrevie
           </thead>
           <tbody>
             {shown.slice((page - 1) * ROWS_A_PAGE, page * ROWS_A_PAGE).map((row) => (
-              <tr key={row.line} data-action={row.action}>
-                <td className={styles.line}>{row.line}</td>
-                <th scope="row">{row.title || 'without a title'}</th>
-                <td>
-                  <span className={styles.action}>{WORDS[row.action][tense]}</span>
-                  {row.reasons.map((reason) => (
-                    <span key={reason} className={styles.reason}>
-                      {reason}
-                    </span>
-                  ))}
-                  {onChoose ? <Choices row={row} choices={choices} onChoose={onChoose} /> : null}
-                </td>
-              </tr>
+              <Fragment key={row.line}>
+                <tr data-action={row.action}>
+                  <td className={styles.line}>{row.line}</td>
+                  <th scope="row">{row.title || 'without a title'}</th>
+                  <td>
+                    <span className={styles.action}>{WORDS[row.action][tense]}</span>
+                    {row.reasons.map((reason) => (
+                      <span key={reason} className={styles.reason}>
+                        {reason}
+                      </span>
+                    ))}
+                  </td>
+                </tr>
+                {onChoose && (row.found || row.alike) ? (
+                  <tr className={styles.choices}>
+                    <td />
+                    <td colSpan={2}>
+                      <Choices row={row} choices={choices} onChoose={onChoose} />
+                    </td>
+                  </tr>
+                ) : null}
+              </Fragment>
             ))}
           </tbody>
         </table>
