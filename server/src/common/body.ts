@@ -32,6 +32,13 @@ export function readBody(request: Request, response: Response, next: NextFunctio
     next();
     return;
   }
+  // RFC 8259, section 8.1: nothing else than UTF-8.
+  const charset = /;\s*charset\s*=\s*"?([^";\s]*)/i.exec(request.headers['content-type'] ?? '')?.[1];
+  if (charset !== undefined && !/^utf-?8$/i.test(charset)) {
+    request.bodyProblem = new ProblemException('wrong-media-type', 'JSON here is UTF-8.');
+    next();
+    return;
+  }
   parse(request, response, (error: unknown) => {
     const shape = error === undefined ? bodyShapeError(request.body) : null;
     if (shape) request.bodyProblem = new ProblemException('not-valid', shape.message, { errors: [shape] });
