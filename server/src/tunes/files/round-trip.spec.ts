@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import fc from 'fast-check';
 import { createTuneSchema } from '@pegwell/shared/contract/tunes';
 import { BUILT_IN_KINDS } from '@pegwell/shared/music/instrument';
@@ -5,6 +6,9 @@ import { MODES } from '@pegwell/shared/music/mode';
 import { midiOf, spell, type Accidental, type Letter } from '@pegwell/shared/music/pitch';
 import { sameTuned, type Tuned } from '@pegwell/shared/music/tuning';
 import type { Accepted } from '@pegwell/shared/tunes/kind-tunings';
+import { INVENTED, INVENTED_SOURCE } from '../../demo/invented-tunes';
+import { COMMON, COMMON_SOURCE, FROM_MEMORY, MEMORY_SOURCE } from '../../demo/traditional-tunes';
+import { writeTable } from '../../demo/tune-row';
 import type { StoredTune, TuneContent } from '../tune-content';
 import { planImport } from './plan-import';
 import { readAbc } from './read-abc';
@@ -101,8 +105,8 @@ const library: fc.Arbitrary<StoredTune[]> = fc
   );
 
 const FORMATS = {
-  csv: { write: writeCsv, read: (file: string) => readCsv(file, 1_000) },
-  abc: { write: writeAbc, read: (file: string) => readAbc(file, 1_000) },
+  csv: { write: writeCsv, read: (file: string) => readCsv(file, 5_000) },
+  abc: { write: writeAbc, read: (file: string) => readAbc(file, 5_000) },
 };
 
 describe.each(['csv', 'abc'] as const)('a library as %s', (format) => {
@@ -152,6 +156,52 @@ describe.each(['csv', 'abc'] as const)('a library as %s', (format) => {
       }),
       { numRuns: 100 },
     );
+  });
+});
+
+/** As a library stores it, each with an id of its own. */
+const storedAs = (tunes: readonly TuneContent[]): StoredTune[] =>
+  tunes.map((tune) => {
+    const id = randomUUID();
+    return { ...{ id, settingId: id, createdAt: new Date(0), updatedAt: new Date(0) }, ...tune };
+  });
+
+describe.each(['csv', 'abc'] as const)('a whole library as %s', (format) => {
+  const { write, read } = FORMATS[format];
+  const changes = (library: readonly StoredTune[]) => {
+    const file = read(write(library));
+    if ('reason' in file) throw new Error(file.reason);
+    const { tunes, problems } = planImport(file.tunes, library);
+    return {
+      problems: [...file.problems, ...problems],
+      actions: new Set(tunes.map(({ action }) => action)),
+      read: tunes.length,
+    };
+  };
+  const nothing = (count: number) => ({ problems: [], actions: new Set(['unchanged']), read: count });
+
+  it('of 2,000 generated tunes changes nothing when it is read again', () => {
+    const tunes = fc.array(content, { minLength: 2_000, maxLength: 2_000 });
+    fc.assert(
+      fc.property(tunes, (all) => expect(changes(storedAs(all))).toEqual(nothing(2_000))),
+      // Not shrunk, which would take an hour: the properties above find small ones.
+      { numRuns: 1, endOnFailure: true },
+    );
+  });
+
+  it('of the demo changes nothing', () => {
+    const tables = [
+      { source: COMMON_SOURCE, rows: COMMON },
+      { source: MEMORY_SOURCE, rows: FROM_MEMORY },
+      { source: INVENTED_SOURCE, rows: INVENTED },
+    ];
+    const file = readCsv(writeTable(tables).toString(), 1_000);
+    if ('reason' in file) throw new Error(file.reason);
+    const made = planImport(file.tunes, []).tunes;
+    const tunes = made.flatMap((tune) => (tune.action === 'create' ? [tune.content] : []));
+    expect(tunes).toHaveLength(file.tunes.length);
+    expect(tunes.length).toBeGreaterThan(50);
+    expect(changes(storedAs(tunes))).toEqual(nothing(tunes.length));
   });
 });
 
