@@ -1,8 +1,11 @@
 import AxeBuilder from '@axe-core/playwright';
 import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core';
 
-/** Debian's Chromium, kept from asking anything of the network. */
-export function startBrowser(): Promise<Browser> {
+/**
+ * Debian's Chromium, kept from asking anything of the network.
+ * @param more switches of its own
+ */
+export function startBrowser(more: readonly string[] = []): Promise<Browser> {
   return chromium.launch({
     executablePath: '/usr/bin/chromium',
     headless: true,
@@ -14,6 +17,7 @@ export function startBrowser(): Promise<Browser> {
       '--disable-background-networking',
       '--disable-component-update',
       '--disable-sync',
+      ...more,
     ],
   });
 }

@@ -1,11 +1,12 @@
 import { DEFERENCE } from '@pegwell/shared/music/caution';
 import type { InstrumentKind } from '@pegwell/shared/music/instrument';
-import { retunePlan } from '@pegwell/shared/music/retune-plan';
+import { retunePlan, type RetuneStep } from '@pegwell/shared/music/retune-plan';
 import { capoSentence, checkSentence } from '@pegwell/shared/music/retune-steps';
 import { showTuned, type Tuned } from '@pegwell/shared/music/tuning';
-import { useEffect, useRef, useState } from 'react';
+import { useCallback, useEffect, useRef, useState } from 'react';
 import { TuningText } from '../../../pictures/tuning-text';
 import { Button } from '../../../ui/button';
+import { useMicrophone } from '../hooks/use-microphone';
 import type { OwnStrings } from '../hooks/use-own-strings';
 import { AllStrings } from './all-strings';
 import { TurnOfCard } from './turn-of-card';
@@ -27,17 +28,19 @@ interface RetuneCardProps {
  */
 export function RetuneCard({ kind, from, to, referenceA, strings, onDone }: RetuneCardProps) {
   const plan = retunePlan(kind, from, to, { gut: strings.gut });
+  const microphone = useMicrophone();
   const [at, setAt] = useState(0);
   const heading = useRef<HTMLHeadingElement>(null);
   const moved = useRef(false);
   useEffect(() => {
     if (moved.current) heading.current?.focus({ preventScroll: true });
   }, [at]);
-  const goTo = (next: number) => {
+  const goTo = useCallback((next: number) => {
     moved.current = true;
     setAt(next);
     window.scrollTo(0, 0);
-  };
+  }, []);
+  const onInTune = useCallback(() => goTo(at + 1), [goTo, at]);
   const step = plan[at];
   const route = `${showTuned(kind, from)} to ${showTuned(kind, to)}`;
 
@@ -67,7 +70,12 @@ export function RetuneCard({ kind, from, to, referenceA, strings, onDone }: Retu
             <AllStrings {...{ kind, to, referenceA, strings }} />
           </>
         ) : step.type === 'turn' ? (
-          <TurnOfCard key={at} {...{ kind, step, referenceA, strings, heading }} />
+          <TurnOfCard
+            key={at}
+            {...{ kind, step, referenceA, strings, heading, microphone, onInTune }}
+            standing={standingBefore(from.pitches, plan.slice(0, at))}
+            capo={from.capo}
+          />
         ) : (
           <>
             <h1 ref={heading} tabIndex={-1}>
@@ -103,4 +111,11 @@ export function RetuneCard({ kind, from, to, referenceA, strings, onDone }: Retu
       </div>
     </>
   );
+}
+
+/** How the strings stand once those steps are done. */
+function standingBefore(pitches: readonly string[], done: readonly RetuneStep[]): readonly string[] {
+  const standing = [...pitches];
+  for (const step of done) if (step.type === 'turn') standing[step.courseIndex] = step.to;
+  return standing;
 }

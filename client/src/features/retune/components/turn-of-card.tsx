@@ -10,8 +10,13 @@ import { HeadPicture } from '../../../pictures/head-picture';
 import { Button } from '../../../ui/button';
 import { frequencyOfString } from '../frequency';
 import type { OwnStrings } from '../hooks/use-own-strings';
+import type { Microphone } from '../hooks/use-microphone';
 import { HearButtons } from './hear-buttons';
+import { TunerPanel } from './tuner-panel';
 import styles from './retune-card.module.css';
+
+/** So far over the higher of both ends a string is in danger: a half step. */
+const DANGER_CENTS = 100;
 
 interface TurnOfCardProps {
   readonly kind: InstrumentKind;
@@ -19,10 +24,17 @@ interface TurnOfCardProps {
   readonly referenceA: number;
   readonly strings: OwnStrings;
   readonly heading: Ref<HTMLHeadingElement>;
+  /** How all strings stand before this step, spelled. */
+  readonly standing: readonly string[];
+  /** The capo that came off before the pegs were turned; 0 for none. */
+  readonly capo: number;
+  readonly microphone: Microphone;
+  readonly onInTune: () => void;
 }
 
 /** One string: which peg, where it stands, which way, how far, and what to look out for. */
-export function TurnOfCard({ kind, step, referenceA, strings, heading }: TurnOfCardProps) {
+export function TurnOfCard(props: TurnOfCardProps) {
+  const { kind, step, referenceA, strings, heading, standing, capo, microphone, onInTune } = props;
   const [goesOn, setGoesOn] = useState(false);
   const { courseIndex, from, to, direction, caution } = step;
   const pegs = kind.courses[courseIndex]?.pegs ?? 1;
@@ -69,6 +81,19 @@ export function TurnOfCard({ kind, step, referenceA, strings, heading }: TurnOfC
           {caution.sentence}
         </p>
       ) : null}
+      <TunerPanel
+        {...{ microphone, from, to, onInTune }}
+        goal={{
+          strings: standing.map((pitch, index) => ({
+            peg: pegNameInFull(kind, index),
+            hertz: frequencyOfString(midiOf(pitch), referenceA, strings),
+          })),
+          index: courseIndex,
+          target: frequencyOfString(midiOf(to), referenceA, strings),
+          capo,
+          danger: DANGER_CENTS,
+        }}
+      />
       <HearButtons note={noteOf(to)} frequency={frequencyOfString(midiOf(to), referenceA, strings)} />
       <details className={styles.more}>
         <summary>In numbers</summary>
