@@ -47,6 +47,8 @@ export interface SiteOptions {
   readonly port?: number;
   /** Where mail goes; without it, none is sent. */
   readonly mailUrl?: string;
+  /** Is given all that the server writes, at the level that tells the most. */
+  readonly onLog?: (text: string) => void;
 }
 
 export async function startSite(databaseUrl: string, options: SiteOptions = {}): Promise<Site> {
@@ -58,14 +60,16 @@ export async function startSite(databaseUrl: string, options: SiteOptions = {}):
       NODE_ENV: 'production',
       PORT: String(port),
       PEGWELL_URL: url,
-      PEGWELL_LOG: 'error',
+      PEGWELL_LOG: options.onLog ? 'debug' : 'error',
       PEGWELL_SECRET: 'a secret of the journeys, long enough to be one',
       PEGWELL_DEMO: options.demo ? 'yes' : 'no',
       PEGWELL_MAIL_URL: options.mailUrl,
       DATABASE_URL: databaseUrl,
     },
-    stdio: ['ignore', 'inherit', 'inherit'],
+    stdio: ['ignore', options.onLog ? 'pipe' : 'inherit', options.onLog ? 'pipe' : 'inherit'],
   });
+  for (const stream of [child.stdout, child.stderr])
+    stream?.on('data', (text) => options.onLog?.(String(text)));
   await untilHealthy(url, child);
   return { url, databaseUrl, stop: () => end(child, 'SIGTERM'), kill: () => end(child, 'SIGKILL') };
 }
