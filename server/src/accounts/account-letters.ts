@@ -60,7 +60,7 @@ export class AccountLetters implements OnModuleInit {
     };
   }
 
-  /** Null where nobody has the address. The link has the mail's id: sent again, it is the same one. */
+  /** Null where nobody has the address. The link has the mail's id: tried again, it is the same one. */
   private async reset(email: string, mailId: string): Promise<Letter | null> {
     const row = await this.accounts.byEmailKey(this.db, emailKeyOf(email));
     if (!row) return null;

@@ -8,12 +8,16 @@ export type LinkPurpose = LinkRow['purpose'];
 
 @Injectable()
 export class LinksRepository {
-  /** False when a link with this id is there already. */
+  /** A link that is there already lives on from now; false when it was used. */
   async insert(db: Database, values: typeof accountLinks.$inferInsert): Promise<boolean> {
     const rows = await db
       .insert(accountLinks)
       .values(values)
-      .onConflictDoNothing({ target: accountLinks.id })
+      .onConflictDoUpdate({
+        target: accountLinks.id,
+        set: { expiresAt: values.expiresAt },
+        setWhere: isNull(accountLinks.usedAt),
+      })
       .returning({ id: accountLinks.id });
     return rows.length === 1;
   }

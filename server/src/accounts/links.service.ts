@@ -29,7 +29,8 @@ export class LinksService {
   ) {}
 
   /**
-   * Makes a link, and the account's older ones for the same purpose void. The same id again makes nothing.
+   * Makes a link, and the account's older ones for the same purpose void. The same id again, of a mail that could
+   * not go out before, is the same link; its time begins anew, unless it was used.
    * @returns the link's id
    */
   async issue(

@@ -23,8 +23,9 @@ export class MailRepository {
     return row ?? null;
   }
 
+  /** Nobody's address stays here longer than it is needed. */
   async done(tx: Database, mailId: string): Promise<void> {
-    await tx.update(mails).set({ doneAt: new Date() }).where(eq(mails.id, mailId));
+    await tx.update(mails).set({ doneAt: new Date(), details: {} }).where(eq(mails.id, mailId));
   }
 
   async later(tx: Database, mailId: string, tries: number, waitMs: number): Promise<void> {

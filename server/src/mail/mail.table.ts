@@ -10,7 +10,7 @@ export const mails = pgTable(
     id: id(),
     /** Who writes it: the name under which a feature taught the mail how. */
     letter: text().notNull(),
-    /** What the writer needs. Never a token or a password. */
+    /** What the writer needs; empty once it is done. Never a token or a password. */
     details: jsonb().notNull(),
     createdAt: createdAt(),
     /** Not before. */
