@@ -25,7 +25,8 @@ interface Entry<Tune> {
  */
 export class AlikeIndex<Tune> {
   private readonly entries = new Map<string, Entry<Tune>>();
-  private readonly pieces = new Map<string, Entry<Tune>[]>();
+  /** By what tells titles apart, their length and which piece of them it is; then by its letters. */
+  private readonly pieces = new Map<string, Map<string, Entry<Tune>[]>>();
 
   add(title: string, tune: Tune): void {
     const { letters, telling } = looseTitle(title);
@@ -38,10 +39,13 @@ export class AlikeIndex<Tune> {
     const entry: Entry<Tune> = { letters, tunes: [tune] };
     this.entries.set(name, entry);
     cut(letters.length).forEach(([from, to], piece) => {
-      const key = `${telling}\n${letters.length} ${piece} ${letters.slice(from, to)}`;
-      const list = this.pieces.get(key);
-      if (list) list.push(entry);
-      else this.pieces.set(key, [entry]);
+      const group = `${telling}\n${letters.length} ${piece}`;
+      const list = this.pieces.get(group) ?? new Map<string, Entry<Tune>[]>();
+      this.pieces.set(group, list);
+      const unharmed = letters.slice(from, to);
+      const entries = list.get(unharmed);
+      if (entries) entries.push(entry);
+      else list.set(unharmed, [entry]);
     });
   }
 
@@ -55,11 +59,12 @@ export class AlikeIndex<Tune> {
       const errors = Math.min(most, mostErrors(length));
       if (Math.abs(length - letters.length) > errors) continue;
       cut(length).forEach(([from, to], piece) => {
+        const group = this.pieces.get(`${telling}\n${length} ${piece}`);
+        if (!group) return;
         const first = Math.max(0, from - errors);
         const last = Math.min(letters.length - (to - from), from + errors);
         for (let start = first; start <= last; start++) {
-          const key = `${telling}\n${length} ${piece} ${letters.slice(start, start + to - from)}`;
-          for (const entry of this.pieces.get(key) ?? []) {
+          for (const entry of group.get(letters.slice(start, start + to - from)) ?? []) {
             if (compared.has(entry) || compared.size >= MOST_COMPARED) continue;
             compared.set(entry, distance(letters, entry.letters));
           }
@@ -74,11 +79,14 @@ export class AlikeIndex<Tune> {
   }
 }
 
+type Cut = readonly (readonly [from: number, to: number])[];
+const CUTS: Cut[] = [];
+
 /** Where a title of so many letters is cut: one piece more than it may have errors, as even as can be. */
-function cut(length: number): [from: number, to: number][] {
+function cut(length: number): Cut {
   const count = mostErrors(length) + 1;
-  return Array.from({ length: count }, (_, piece) => [
+  return (CUTS[length] ??= Array.from({ length: count }, (_, piece) => [
     Math.floor((length * piece) / count),
     Math.floor((length * (piece + 1)) / count),
-  ]);
+  ]));
 }

@@ -17,13 +17,14 @@ export function reportOf(
   plan: ImportPlan,
   made: { readonly importId: string; readonly ids: ReadonlyMap<number, string> } | null = null,
 ): ImportReport {
+  const cells: Cells = new Map();
   const tunes = plan.tunes.map((tune, at): ReportedTune => {
     const { line, title, action } = tune;
     const id = idOf(plan, at, made?.ids);
     return {
       ...{ line, title, action: action === 'merge' ? 'update' : action },
       ...(id !== undefined && { id }),
-      ...detailsOf(tune),
+      ...detailsOf(cells, tune),
     };
   });
   const count = (action: string) => tunes.filter((tune) => tune.action === action).length;
@@ -49,34 +50,42 @@ function idOf(plan: ImportPlan, at: number, ids?: ReadonlyMap<number, string>): 
 }
 
 /** What a host needs to see to choose; a tune that leaves no choice says no more than what becomes of it. */
-function detailsOf(tune: PlannedTune): Partial<ReportedTune> {
+function detailsOf(cells: Cells, tune: PlannedTune): Partial<ReportedTune> {
   const found = tune.found.map(({ kind, accepted, said }) => ({
     kind,
-    tuning: cellOf(kind, accepted),
+    tuning: cellOf(cells, kind, accepted),
     said,
   }));
   const isChoice = tune.action === 'create' && tune.alike.length > 0;
   return {
     ...(found.length > 0 && { found }),
     ...(isChoice && {
-      ...beside(tune.content),
+      ...beside(cells, tune.content),
       alike: tune.alike.map(({ id, line, title, ...content }) => ({
         ...(id !== undefined ? { id } : line !== undefined && { line }),
-        ...{ title, ...beside(content) },
+        ...{ title, ...beside(cells, content) },
       })),
     }),
   };
 }
 
-function beside({ key, mode, rhythm, stated }: Omit<TuneContent, 'title'>) {
+function beside(cells: Cells, { key, mode, rhythm, stated }: Omit<TuneContent, 'title'>) {
   const tunings = Object.entries(stated).map(([kind, accepted]) => ({
     kind,
-    tuning: cellOf(kind, accepted),
+    tuning: cellOf(cells, kind, accepted),
   }));
   return { key, mode, rhythm, tunings };
 }
 
-function cellOf(kind: string, accepted: Accepted[string]): string {
+/** Of thousands of tunes few differ in their tunings, and showing one means reading it back. */
+type Cells = Map<string, string>;
+
+function cellOf(cells: Cells, kind: string, accepted: Accepted[string]): string {
+  const key = JSON.stringify([kind, accepted]);
+  const shown = cells.get(key);
+  if (shown !== undefined) return shown;
   const known = builtInKind(kind);
-  return known ? showCell(known, accepted) : '';
+  const cell = known ? showCell(known, accepted) : '';
+  cells.set(key, cell);
+  return cell;
 }
