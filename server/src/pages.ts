@@ -13,8 +13,13 @@ const PAGES = join(__dirname, '../../client/dist');
 export function servePages(app: NestExpressApplication): void {
   const index = join(PAGES, 'index.html');
   if (!existsSync(index)) return;
-  app.use('/assets', express.static(join(PAGES, 'assets'), { immutable: true, maxAge: '365d' }), notThere);
-  const files = express.static(PAGES, { index: false, maxAge: 0 });
+  app.use(
+    '/assets',
+    express.static(join(PAGES, 'assets'), { immutable: true, redirect: false, maxAge: '365d' }),
+    notThere,
+  );
+  // A folder's address is no file either: nothing here sends anybody on to another address.
+  const files = express.static(PAGES, { index: false, redirect: false, maxAge: 0 });
   app.use((request: Request, response: Response, next: NextFunction) => {
     // The API is never a file: phones that poll do not make the disk look for one.
     if (isApi(request)) next();
