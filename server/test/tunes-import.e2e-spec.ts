@@ -3,7 +3,7 @@ import iconv from 'iconv-lite';
 import type { Circle } from '@pegwell/shared/contract/circles';
 import type { ImportChoice } from '@pegwell/shared/contract/import-choices';
 import type { Page } from '@pegwell/shared/contract/page';
-import type { ImportReport, ImportUndone, Tune } from '@pegwell/shared/contract/tunes';
+import type { ImportReport, ImportUndone, RecentImports, Tune } from '@pegwell/shared/contract/tunes';
 import { startApp, type TestApp } from './app';
 import { buildCircle, buildMember, buildTune, type Person } from './build';
 
@@ -232,6 +232,25 @@ describe('files of tunes as people have them', () => {
       expect(words(await list())).toEqual(before);
       // Asked twice, as after a lost answer.
       expect(await undo(importId!)).toEqual({ removed: 1, restored: 1, kept: [] });
+    });
+
+    it('is listed for a day, newest first, until it is undone', async () => {
+      const recent = async () => (await host.caller.get(path('/imports')).expect(200)).body as RecentImports;
+      expect(await recent()).toEqual({ items: [] });
+      const one = await take('title,key\nOne,A');
+      await take('title,key\nOne,A');
+      const two = await take('X:1\nT:One\nR:jig\nK:A\n\nX:2\nT:Two\nK:A\n', { name: 'two.abc' });
+      const at = expect.any(String) as string;
+      expect(await recent()).toEqual({
+        items: [
+          { id: two.importId, at, format: 'abc', created: 1, updated: 1 },
+          { id: one.importId, at, format: 'csv', created: 1, updated: 0 },
+        ],
+      });
+      await undo(two.importId!);
+      expect((await recent()).items.map(({ id }) => id)).toEqual([one.importId]);
+      const player = await buildMember(test, circle, host, 'player');
+      await player.caller.get(path('/imports')).expect(403);
     });
 
     it('keeps what was changed since, and lists it', async () => {

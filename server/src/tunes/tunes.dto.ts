@@ -5,6 +5,7 @@ import {
   importQuerySchema,
   importReportSchema,
   importUndoneSchema,
+  recentImportsSchema,
   tunePageSchema,
   tuneQuerySchema,
   tuneSchema,
@@ -20,5 +21,6 @@ export class UpdateTuneDto extends createZodDto(updateTuneSchema) {}
 export class ImportQueryDto extends createZodDto(importQuerySchema) {}
 export class ImportReportDto extends createZodDto(importReportSchema) {}
 export class ImportUndoneDto extends createZodDto(importUndoneSchema) {}
+export class RecentImportsDto extends createZodDto(recentImportsSchema) {}
 export class ImportProgressDto extends createZodDto(importProgressSchema) {}
 export class ExportQueryDto extends createZodDto(exportQuerySchema) {}

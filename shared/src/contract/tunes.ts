@@ -142,6 +142,20 @@ export const importQuerySchema = z.strictObject({
 });
 export type ImportQuery = z.infer<typeof importQuerySchema>;
 
+/** Imports of the last day that can be undone, newest first. */
+export const recentImportsSchema = z.object({
+  items: z.array(
+    z.object({
+      id: idSchema,
+      at: z.string(),
+      format: z.enum(['abc', 'csv', 'list']),
+      created: z.number().int(),
+      updated: z.number().int(),
+    }),
+  ),
+});
+export type RecentImports = z.infer<typeof recentImportsSchema>;
+
 /** What undoing an import did. */
 export const importUndoneSchema = z.object({
   /** New tunes that went. */

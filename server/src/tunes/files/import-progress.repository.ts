@@ -1,6 +1,11 @@
 import { Injectable } from '@nestjs/common';
-import { and, eq, lt, sql } from 'drizzle-orm';
-import { importReportSchema, type ImportProgress, type ImportReport } from '@pegwell/shared/contract/tunes';
+import { and, desc, eq, gt, lt, sql } from 'drizzle-orm';
+import {
+  importReportSchema,
+  type ImportProgress,
+  type ImportReport,
+  type RecentImports,
+} from '@pegwell/shared/contract/tunes';
 import type { Database } from '../../database/database';
 import { imports } from '../tunes.table';
 
@@ -35,6 +40,35 @@ export class ImportProgressRepository {
   async reportOf(db: Database, id: string): Promise<ImportReport | null> {
     const [row] = await db.select({ report: imports.report }).from(imports).where(eq(imports.id, id));
     return row?.report ? importReportSchema.parse(row.report) : null;
+  }
+
+  async markUndone(db: Database, id: string): Promise<void> {
+    await db
+      .update(imports)
+      .set({ report: sql`${imports.report} || '{"undone": true}'` })
+      .where(eq(imports.id, id));
+  }
+
+  /** Of the last day, newest first: what changed something, and was not undone. */
+  async recent(db: Database, circleId: string): Promise<RecentImports['items']> {
+    const { id, finishedAt, report } = imports;
+    const countOf = (field: string) => sql<number>`(${report}->>${field})::int`;
+    const rows = await db
+      .select({
+        ...{ id, at: finishedAt, created: countOf('created'), updated: countOf('updated') },
+        format: sql<RecentImports['items'][number]['format']>`${report}->>'format'`,
+      })
+      .from(imports)
+      .where(
+        and(
+          eq(imports.circleId, circleId),
+          gt(finishedAt, sql`now() - interval '1 day'`),
+          sql`not coalesce((${report}->>'undone')::boolean, false)`,
+          sql`${countOf('created')} + ${countOf('updated')} > 0`,
+        ),
+      )
+      .orderBy(desc(finishedAt));
+    return rows.map(({ at, ...row }) => ({ ...row, at: at?.toISOString() ?? '' }));
   }
 
   /** An import that failed leaves its id free. */

@@ -1,5 +1,5 @@
 import { Inject, Injectable } from '@nestjs/common';
-import { importUndoneSchema, type ImportUndone } from '@pegwell/shared/contract/tunes';
+import { importUndoneSchema, type ImportUndone, type RecentImports } from '@pegwell/shared/contract/tunes';
 import { HistoryService } from '../../circles/history.service';
 import type { Member } from '../../common/access';
 import { announceCircle } from '../../common/announce';
@@ -8,6 +8,7 @@ import { DATABASE, type RootDatabase } from '../../database/database';
 import { sameContent, type StoredTune, type TuneContent } from '../tune-content';
 import { TuneWritesRepository } from '../tune-writes.repository';
 import { TunesRepository } from '../tunes.repository';
+import { ImportProgressRepository } from './import-progress.repository';
 
 /** Milliseconds in which an import can be undone. */
 const A_DAY = 24 * 60 * 60 * 1_000;
@@ -22,7 +23,12 @@ export class ImportUndoService {
     private readonly tunes: TunesRepository,
     private readonly writes: TuneWritesRepository,
     private readonly history: HistoryService,
+    private readonly imports: ImportProgressRepository,
   ) {}
+
+  async recent(member: Member): Promise<RecentImports> {
+    return { items: await this.imports.recent(this.db, member.circleId) };
+  }
 
   /** Asked again it answers what it answered. @throws 404; 422 after a day */
   async undo(member: Member, importId: string): Promise<ImportUndone> {
@@ -49,6 +55,7 @@ export class ImportUndoService {
       await this.history.note(tx, member, {
         ...{ what: 'tunes.import-undone', subjectId: importId, after: answer },
       });
+      await this.imports.markUndone(tx, importId);
       await announceCircle(tx, member.circleId);
       return answer;
     });

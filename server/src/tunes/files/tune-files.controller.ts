@@ -11,7 +11,12 @@ import {
   UseInterceptors,
 } from '@nestjs/common';
 import { ApiBody, ApiConsumes, ApiParam, ApiProduces, ApiResponse, ApiTags } from '@nestjs/swagger';
-import type { ImportProgress, ImportReport, ImportUndone } from '@pegwell/shared/contract/tunes';
+import type {
+  ImportProgress,
+  ImportReport,
+  ImportUndone,
+  RecentImports,
+} from '@pegwell/shared/contract/tunes';
 import { AsMember, ForMembers, type Member } from '../../common/access';
 import { contentDisposition } from '../../common/content-disposition';
 import { PathIdPipe } from '../../common/path-id.pipe';
@@ -24,6 +29,7 @@ import {
   ImportQueryDto,
   ImportReportDto,
   ImportUndoneDto,
+  RecentImportsDto,
 } from '../tunes.dto';
 import { ExportService } from './export.service';
 import { readChoices } from './import-choices';
@@ -74,6 +80,13 @@ export class TuneFilesController {
     }
     const format = query.pasted ? null : formatOf(file.originalname);
     return this.imports.import(member, { format, bytes: file.buffer }, query, readChoices(choices));
+  }
+
+  @Get('imports')
+  @ForMembers('tunes.change')
+  @ApiResponse({ status: 200, type: RecentImportsDto.Output })
+  recent(@AsMember() member: Member): Promise<RecentImports> {
+    return this.undoing.recent(member);
   }
 
   @Get('imports/:importId')
