@@ -129,6 +129,24 @@ describe('one’s own account', () => {
       expect(await signInsOf(caller)).toHaveLength(1);
     });
 
+    it('are forgotten two months after they ended, at the next one', async () => {
+      const { caller, email, id } = await buildAccount(test);
+      await signIn(email, PASSWORD, 'over/1');
+      await signIn(email, PASSWORD, 'unused/1');
+      await sql.query(
+        `update sign_ins set ended_at = now() - interval '61 days' where account_id = $1 and user_agent = 'over/1'`,
+        [id],
+      );
+      await sql.query(
+        `update sign_ins set renewed_at = now() - interval '61 days' where account_id = $1 and user_agent = 'unused/1'`,
+        [id],
+      );
+      await signIn(email);
+      const { rows } = await sql.query('select 1 from sign_ins where account_id = $1', [id]);
+      expect(rows).toHaveLength(2);
+      expect(await isIn(caller)).toBe(true);
+    });
+
     it('say when they were last used, to ten minutes', async () => {
       const { caller, id } = await buildAccount(test);
       await sql.query(`update sign_ins set used_at = now() - interval '3 hours' where account_id = $1`, [id]);

@@ -6,17 +6,19 @@ import { sentenceOf } from '../lib/problem';
 import { Button, LinkButton } from '../ui/button';
 import { Page, PageHeading } from '../ui/page';
 import styles from './mailed-page.module.css';
+import { usePageTurned } from './use-page-turned';
 
 /** Where the link in a mail about an address leads. It takes a press: programs that look at links confirm nothing. */
 export function ConfirmPage() {
   const token = useLinkToken();
   const renewMe = useRenewMe();
   const confirm = useMutation({ mutationFn: () => confirmAddress(token), onSuccess: renewMe });
+  usePageTurned(confirm.isSuccess);
   if (confirm.data) {
     return (
       <Page narrow>
         <PageHeading title="Your address is confirmed" />
-        <p role="status">
+        <p>
           Mail to <b>{confirm.data.email}</b> reaches you.
         </p>
         <div className={styles.do}>

@@ -5,16 +5,18 @@ import { Button, LinkButton } from '../ui/button';
 import { Page, PageHeading } from '../ui/page';
 import { Failing, Loading } from '../ui/states';
 import styles from './mailed-page.module.css';
+import { usePageTurned } from './use-page-turned';
 
 /** For somebody who forgot the password: a link by mail. */
 export function ForgotPage() {
   const mail = useMailState();
   const [asked, setAsked] = useState<string | null>(null);
+  usePageTurned(asked !== null);
   if (asked) {
     return (
       <Page narrow>
         <PageHeading title="Look at your mail" />
-        <p role="status">
+        <p>
           If an account has the address <b>{asked}</b>, a mail is on its way. The link in it works once, for
           one hour.
         </p>

@@ -34,6 +34,8 @@ describe('the page for a forgotten password', () => {
     await userEvent.type(screen.getByLabelText('E-mail'), 'ada@example.org');
     await userEvent.click(screen.getByRole('button', { name: 'Send me a link' }));
     expect(await screen.findByRole('heading', { name: 'Look at your mail' })).toBeTruthy();
+    // Whoever hears the page hears it from its beginning.
+    expect(document.activeElement?.id).toBe('main');
     expect(screen.getByText(/If an account has the address/).textContent).toContain('ada@example.org');
     expect(sent).toEqual([{ email: 'ada@example.org' }]);
   });

@@ -5,17 +5,19 @@ import { useSignedOut } from '../features/accounts/hooks/use-signed-out';
 import { LinkButton } from '../ui/button';
 import { Page, PageHeading } from '../ui/page';
 import styles from './mailed-page.module.css';
+import { usePageTurned } from './use-page-turned';
 
 /** Where the link in a mail about a forgotten password leads. */
 export function ResetPage() {
   const token = useLinkToken();
   const signedOut = useSignedOut();
   const [done, setDone] = useState(false);
+  usePageTurned(done);
   if (done) {
     return (
       <Page narrow>
         <PageHeading title="Your password is the new one" />
-        <p role="status">All sign-ins have ended. Sign in with the new password.</p>
+        <p>All sign-ins have ended. Sign in with the new password.</p>
         <div className={styles.do}>
           <LinkButton to="/sign-in">Sign in</LinkButton>
         </div>

@@ -1,5 +1,5 @@
 import { Injectable } from '@nestjs/common';
-import { and, desc, eq, gt, isNull, lt, ne } from 'drizzle-orm';
+import { and, desc, eq, gt, isNull, lt, ne, or } from 'drizzle-orm';
 import type { Database } from '../database/database';
 import { accounts, signIns } from './accounts.table';
 import type { AccountRow } from './accounts.repository';
@@ -77,6 +77,15 @@ export class SignInsRepository {
       .where(and(eq(signIns.id, signInId), eq(signIns.accountId, accountId), isNull(signIns.endedAt)))
       .returning({ id: signIns.id });
     return rows.length === 1;
+  }
+
+  /** Forgets those of an account that ended, or could last be renewed, before a day. */
+  async removeOver(db: Database, accountId: string, before: Date): Promise<void> {
+    await db
+      .delete(signIns)
+      .where(
+        and(eq(signIns.accountId, accountId), or(lt(signIns.endedAt, before), lt(signIns.renewedAt, before))),
+      );
   }
 
   /** @param keep the one that goes on, if any */

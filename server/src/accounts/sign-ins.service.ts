@@ -18,6 +18,8 @@ const RENEW_AFTER_MS = 12 * 3_600_000;
 const GRACE_MS = 60_000;
 /** How exactly it is known when a sign-in was last used: writing it down at every request would cost more. */
 const USED_MS = 600_000;
+/** How long it is kept that somebody was signed in, and with what: longer than any cookie lives. */
+const KEEP_MS = 2 * SIGN_IN_DAYS * 86_400_000;
 
 const claimsSchema = z.object({ sid: z.guid(), gen: z.number().int(), iat: z.number().int() });
 
@@ -34,6 +36,7 @@ export class SignInsService {
   async begin(accountId: string, request: Request, response: Response): Promise<void> {
     const userAgent = request.headers['user-agent']?.slice(0, 300) ?? null;
     const row = await this.signIns.insert(this.db, accountId, userAgent);
+    await this.signIns.removeOver(this.db, accountId, new Date(Date.now() - KEEP_MS));
     this.setCookie(response, row.id, row.generation);
   }
 

@@ -19,7 +19,7 @@ export function UnconfirmedLine({ email }: { readonly email: string }) {
   return (
     <p className={styles.line}>
       <span>
-        A mail went to <b>{email}</b>: press the link in it, so that we know it reaches you.
+        <b>{email}</b> is not confirmed yet: press the link in our mail to it.
       </span>
       <Button look="plain" busy={again.isPending && 'Sending it'} onClick={() => again.mutate()}>
         Send it again
