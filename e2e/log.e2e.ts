@@ -93,7 +93,7 @@ describe('the log of a whole journey, at the level that tells the most', () => {
 
     const lines = log.split('\n').flatMap((line) => (line.startsWith('{') ? [JSON.parse(line) as Line] : []));
     const logged = lines.flatMap(({ req }) => req?.id ?? []);
-    expect(ids.length).toBeGreaterThan(15);
+    expect(ids).toHaveLength(15);
     expect(ids.filter((id) => !logged.includes(id))).toEqual([]);
     expect(lines.every(({ req }) => !req?.path.includes('?'))).toBe(true);
   });

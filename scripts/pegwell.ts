@@ -2,6 +2,8 @@
 import { createRequire } from 'node:module';
 import { end, endOnSignals, isEnding } from './ending';
 import { say, Sentence } from './sentence';
+import { admin } from './admin';
+import { backup, restore } from './backup/words';
 import { develop } from './develop';
 import type * as Pictures from './pictures';
 import { reset } from './reset';
@@ -13,6 +15,9 @@ const HELP = `./docker-free-dev.sh          develop: database, server and pages,
 ./docker-free-dev.sh start    built, as in production: one process for API and pages, no demo unless PEGWELL_DEMO=yes
 ./docker-free-dev.sh test     every check; "test --only lint,shared,client,build,server,e2e" for some
 ./docker-free-dev.sh pictures every page's picture in both lights, at 390 and 1360 px, into pictures/
+./docker-free-dev.sh backup   the database and the files into one archive, also while the site runs
+./docker-free-dev.sh restore  such an archive back into an empty place, compared row by row
+./docker-free-dev.sh admin    make the first account, or let a lost host in again
 ./docker-free-dev.sh stop     stop what runs, the database included
 ./docker-free-dev.sh reset    remove the database and everything else in .data/ (asks first)`;
 
@@ -28,6 +33,15 @@ async function main([word, ...words]: readonly string[]): Promise<number> {
       return stop();
     case 'reset':
       return reset();
+    case 'backup':
+      endOnSignals({ interrupted: 130, terminated: 143 });
+      return backup(words);
+    case 'restore':
+      endOnSignals({ interrupted: 130, terminated: 143 });
+      return restore(words);
+    case 'admin':
+      endOnSignals({ interrupted: 130, terminated: 143 });
+      return admin(words);
     case 'test':
       endOnSignals({ interrupted: 130, terminated: 143 });
       return test(words);

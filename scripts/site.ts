@@ -2,7 +2,7 @@
 import path from 'node:path';
 import { openDataFolder, secret } from './data-folder';
 import { atEnd } from './ending';
-import { ownDatabase } from './own-database';
+import { ownDatabase, runningDatabase } from './own-database';
 import { DATA } from './places';
 import { parsePort } from './ports';
 import { commands, forgetCommand, lives, noteCommand } from './running';
@@ -28,6 +28,20 @@ export async function openDatabase(): Promise<string> {
   if (given === undefined) return ownDatabase();
   say('Using the database of DATABASE_URL.');
   return given;
+}
+
+/** The same for a command that may run beside another one, whose database it then uses and leaves running. */
+export async function borrowDatabase(): Promise<string> {
+  await openDataFolder();
+  const running = setting('DATABASE_URL') === undefined ? await runningDatabase() : null;
+  if (running !== null) return running;
+  await claimSite();
+  return openDatabase();
+}
+
+/** Where uploaded files are. */
+export function dataFolder(): string {
+  return setting('PEGWELL_DATA_DIR') ?? path.join(DATA, 'files');
 }
 
 function refuseSecondRun(): void {
@@ -74,7 +88,7 @@ export function serverEnvironment({
     PEGWELL_HOST: host,
     PEGWELL_URL: url,
     PEGWELL_SECRET: setting('PEGWELL_SECRET') ?? secret('secret'),
-    PEGWELL_DATA_DIR: setting('PEGWELL_DATA_DIR') ?? path.join(DATA, 'files'),
+    PEGWELL_DATA_DIR: dataFolder(),
     PEGWELL_DEMO: setting('PEGWELL_DEMO') ?? demo,
     PEGWELL_MAIL_URL: setting('PEGWELL_MAIL_URL') ?? mailUrl,
     // Among three programs that speak at once, only what is wrong.

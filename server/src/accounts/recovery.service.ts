@@ -1,5 +1,6 @@
 import { Inject, Injectable } from '@nestjs/common';
 import type { Forgot, Reset } from '@pegwell/shared/contract/accounts';
+import { emailKeyOf } from '../common/email-key';
 import { ProblemException } from '../common/problem';
 import { DATABASE, type RootDatabase } from '../database/database';
 import { MailService } from '../mail/mail.service';
@@ -26,6 +27,15 @@ export class RecoveryService {
   async forgot({ email }: Forgot): Promise<void> {
     if (!this.mail.sends) throw new ProblemException('no-mail');
     await this.mail.post(this.db, 'reset-password', { email });
+  }
+
+  /** For whoever runs the server, who hands the link over; null where nobody has the address. */
+  async linkFor(address: string): Promise<string | null> {
+    const account = await this.accounts.byEmailKey(this.db, emailKeyOf(address));
+    if (!account) return null;
+    const id = await this.links.issue(this.db, 'reset', { accountId: account.id, email: account.email });
+    const link = await this.links.open(this.db, id);
+    return link && this.links.urlOf(link);
   }
 
   /** Ends all sign-ins. The link came by mail, so the address is confirmed as well. */
