@@ -43,6 +43,38 @@ describe('the tunings', () => {
     expect(within(calico).getByText('E peg down 1½ steps, to C#')).toBeTruthy();
   });
 
+  // Fiddle and banjo pairs, strings turned: double C to sawmill 1, open G to double C 2 (banjo); the others by hand
+  // from the same pitches, waxandwane.org and Wikipedia, "Cross tuning".
+  it.each([
+    ['fiddle', 'GDAE', 'DDAD', 2],
+    ['fiddle', 'AEAE', 'DDAD', 3],
+    ['fiddle', 'AEAE', 'GDGD', 4],
+    ['fiddle', 'AEAC#', 'AEAD', 1],
+    ['banjo', 'gDGBD', 'gCGCD', 2],
+    ['banjo', 'gDGBD', 'aDF#AD', 3],
+    ['banjo', 'gCGCD', 'aDF#AD', 4],
+  ])('count the pegs on a %s from %s to %s, and lead there', async (kind, from, to, pegs) => {
+    mockApi(circleAnswers('player'));
+    renderApp(at(`tunings?kind=${kind}`));
+    const table = within(await screen.findByRole('table'));
+    const texts = (cells: readonly Element[]) => cells.map((cell) => cell.textContent.replace(/\s/g, ''));
+    const column = texts(table.getAllByRole('columnheader')).indexOf(to);
+    const head = table.getAllByRole('rowheader').find((each) => texts([each])[0] === from)!;
+    const row = head.closest('tr')!;
+    const cell = within(row).getAllByRole('cell')[column]!;
+    expect(cell.textContent).toBe(`${pegs}`);
+    const address = within(cell).getByRole('link').getAttribute('href');
+    expect(address).toBe(`/retune?${new URLSearchParams({ kind, from, to }).toString()}`);
+  });
+
+  it('lead to the tunes of the circle that are played in them', async () => {
+    mockApi(circleAnswers('player'));
+    renderApp(at('tunings'));
+    const calico = (await screen.findByText('calico, open A')).closest('li')!;
+    const address = within(calico).getByRole('link', { name: 'Tunes in it' }).getAttribute('href');
+    expect(address).toMatch(/\/tunes\?kind=fiddle&tuning=AEAC%23$/);
+  });
+
   it('has the words of safety, and defers to the string maker and a luthier', async () => {
     mockApi(circleAnswers('player'));
     renderApp(at('tunings?kind=banjo'));

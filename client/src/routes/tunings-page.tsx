@@ -5,6 +5,7 @@ import { Link, useSearchParams } from 'react-router-dom';
 import { UsualSection } from '../features/circles/components/usual-section';
 import { NamedTunings } from '../features/instruments/components/named-tunings';
 import { Safety } from '../features/instruments/components/safety';
+import { TuningMatrix } from '../features/instruments/components/tuning-matrix';
 import { SelectField } from '../ui/fields';
 import { Page, PageHeading } from '../ui/page';
 import styles from './tunings-page.module.css';
@@ -58,8 +59,9 @@ export function TuningsPage() {
             </div>
           ) : null}
         </div>
-        <NamedTunings kind={kind} from={from} />
+        <NamedTunings kind={kind} from={from} circleId={circle.id} />
       </section>
+      <TuningMatrix kind={kind} />
       <Safety />
       <div className={styles.usual}>
         <UsualSection

@@ -14,15 +14,17 @@ interface NamedTuningsProps {
   readonly kind: InstrumentKind;
   /** How the strings stand now: every tuning is shown as the turns from there. */
   readonly from: readonly string[];
+  /** Whose tunes in a tuning it leads to. */
+  readonly circleId: string;
 }
 
 /** A kind's named tunings: letters, names and keys, and which pegs lead there. */
-export function NamedTunings({ kind, from }: NamedTuningsProps) {
+export function NamedTunings({ kind, from, circleId }: NamedTuningsProps) {
   return (
     <ul className={styles.tunings}>
       {(NAMED_TUNINGS[kind.id] ?? []).map((named) => (
         <li key={named.pitches.join()}>
-          <NamedTuningRow kind={kind} from={from} named={named} />
+          <NamedTuningRow {...{ kind, from, circleId, named }} />
         </li>
       ))}
     </ul>
@@ -35,7 +37,12 @@ function keyLine(keys: string): string {
   return keys.startsWith('sounds') ? keys : `for ${keys}`;
 }
 
-function NamedTuningRow({ kind, from, named }: NamedTuningsProps & { readonly named: NamedTuning }) {
+function NamedTuningRow({
+  kind,
+  from,
+  circleId,
+  named,
+}: NamedTuningsProps & { readonly named: NamedTuning }) {
   // Six doubled courses in large would not fit beside the words.
   const wide = useMedia('(min-width: 62rem)');
   const { pitches, names, keys, provenance } = named;
@@ -50,6 +57,13 @@ function NamedTuningRow({ kind, from, named }: NamedTuningsProps & { readonly na
         {names.length > 0 ? <p className={styles.names}>{names.join(', ')}</p> : null}
         {keys ? <p>{keyLine(keys)}</p> : null}
         <p className={styles.about}>{pitches.join(' ')}</p>
+        <p>
+          <Link
+            to={`/c/${circleId}/tunes?${new URLSearchParams({ kind: kind.id, tuning: showTuning(kind, pitches) }).toString()}`}
+          >
+            Tunes in it
+          </Link>
+        </p>
         <p className={styles.about}>{`Source: ${provenance}`}</p>
       </div>
       <div className={styles.strip}>
