@@ -33,6 +33,7 @@ const start = (answers: Answers) => {
   const asked = mockApi({
     ...circleAnswers('host'),
     [api('GET', '/tunes')]: ok(page([tune(1, 'A')])),
+    [api('GET', '/tunes/imports')]: ok({ items: [] }),
     ...answers,
   });
   renderApp(at('tunes/import'));
@@ -85,6 +86,7 @@ describe('importing a list', () => {
     const asked = mockApi({
       ...circleAnswers('host'),
       [api('GET', '/tunes')]: ok(page([tune(1, 'A')])),
+      [api('GET', '/tunes/imports')]: ok({ items: [] }),
       [post]: ok(report),
     });
     const answered = fetch;
@@ -281,6 +283,17 @@ describe('importing a list', () => {
     await userEvent.click(await screen.findByRole('button', { name: 'Undo this import' }));
     expect(await screen.findByText('Undone: 3 tunes taken out, 1 as before.')).toBeTruthy();
     expect(screen.getByText('Changed Since')).toBeTruthy();
+  });
+
+  it('lists what was imported within a day, to be undone', async () => {
+    const item = { id: id(41), at: '2026-11-30T19:30:00Z', format: 'list', created: 1_200, updated: 3 };
+    start({
+      [api('GET', '/tunes/imports')]: ok({ items: [item] }),
+      [api('POST', `/tunes/imports/${id(41)}/undo`)]: ok({ removed: 1, restored: 0, kept: [] }),
+    });
+    expect(await screen.findByText(/A pasted list: 1,200 added, 3 changed\./)).toBeTruthy();
+    await userEvent.click(screen.getByRole('button', { name: 'Undo this import' }));
+    expect(await screen.findByText('Undone: 1 tune taken out, 0 as before.')).toBeTruthy();
   });
 
   it('offers nothing to write where nothing would change', async () => {

@@ -4,6 +4,7 @@ import { ImportPreview } from '../features/tunes/components/import-preview';
 import { ImportProgress } from '../features/tunes/components/import-progress';
 import { ImportUndo } from '../features/tunes/components/import-undo';
 import { PasteField } from '../features/tunes/components/paste-field';
+import { RecentImports } from '../features/tunes/components/recent-imports';
 import { useImport } from '../features/tunes/hooks/use-import';
 import { countWrites } from '../features/tunes/import-choices';
 import { count, grouped } from '../lib/format';
@@ -67,7 +68,7 @@ export function ImportPage() {
                 {`${grouped(done.created)} added, ${grouped(done.updated)} changed, ${grouped(done.unchanged)} unchanged, ${grouped(done.skipped)} left out.`}
               </p>
               <LinkButton to={tunesPath}>To the tunes</LinkButton>
-              <ImportUndo undone={it.undone} busy={it.undoing} error={it.undoError} onUndo={it.undo} />
+              {done.importId ? <ImportUndo circleId={circle.id} importId={done.importId} /> : null}
             </div>
           ) : (
             <div className={styles.do}>
@@ -92,7 +93,7 @@ export function ImportPage() {
           />
         </section>
       ) : (
-        <Help circleId={circle.id} />
+        <Help circleId={circle.id} timeZone={circle.timeZone} />
       )}
     </Page>
   );
@@ -102,9 +103,10 @@ export function ImportPage() {
 const isGuessed = (encoding: string) => !encoding.startsWith('utf-');
 
 /** What a file looks like; stands there until one is read. */
-function Help({ circleId }: { readonly circleId: string }) {
+function Help({ circleId, timeZone }: { readonly circleId: string; readonly timeZone: string }) {
   return (
     <div className={styles.help}>
+      <RecentImports circleId={circleId} timeZone={timeZone} />
       <h2>A spreadsheet, saved as CSV</h2>
       <p>
         One tune a row, column names in the first: <code>title</code> and <code>key</code>, and where you have

@@ -1,5 +1,10 @@
 import type { ImportChoice } from '@pegwell/shared/contract/import-choices';
-import type { ImportProgress, ImportReport, ImportUndone } from '@pegwell/shared/contract/tunes';
+import type {
+  ImportProgress,
+  ImportReport,
+  ImportUndone,
+  RecentImports,
+} from '@pegwell/shared/contract/tunes';
 import { api } from '../../../lib/api';
 
 export interface ImportSource {
@@ -31,6 +36,11 @@ export function importTunes(
 
 export const undoImport = (circleId: string, importId: string) =>
   api.post<ImportUndone>(`/circles/${circleId}/tunes/imports/${importId}/undo`);
+
+export const recentImportsKey = (circleId: string) => ['imports', circleId] as const;
+
+export const getRecentImports = (circleId: string, signal?: AbortSignal) =>
+  api.get<RecentImports>(`/circles/${circleId}/tunes/imports`, signal ? { signal } : {});
 
 /** How many rows are written so far; 404 before the first is. */
 export const getImportProgress = (circleId: string, importId: string, signal?: AbortSignal) =>

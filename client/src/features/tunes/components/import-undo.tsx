@@ -1,36 +1,36 @@
-import type { ImportUndone } from '@pegwell/shared/contract/tunes';
 import { count } from '../../../lib/format';
 import { Button } from '../../../ui/button';
+import { useUndoImport } from '../hooks/use-undo-import';
+import styles from './import-undo.module.css';
 
 interface ImportUndoProps {
-  readonly undone: ImportUndone | undefined;
-  readonly busy: boolean;
-  readonly error: string | undefined;
-  readonly onUndo: () => void;
+  readonly circleId: string;
+  readonly importId: string;
 }
 
-/** Takes an import back as one step, and lists what stays because somebody changed it since. */
-export function ImportUndo({ undone, busy, error, onUndo }: ImportUndoProps) {
+/** Takes an import back, and lists what stays because somebody changed it since. */
+export function ImportUndo({ circleId, importId }: ImportUndoProps) {
+  const { undo, busy, undone, error } = useUndoImport(circleId, importId);
   if (!undone) {
     return (
       <div>
-        <Button look="outline" busy={busy && 'Undoing'} onClick={onUndo}>
+        <Button look="outline" busy={busy && 'Undoing'} onClick={undo}>
           Undo this import
         </Button>
-        <div role="alert">{error}</div>
+        <div role="alert" className={styles.error}>
+          {error}
+        </div>
       </div>
     );
   }
   const { removed, restored, kept } = undone;
   return (
     <div role="status">
-      <p>
-        <b>{`Undone: ${count(removed, 'tune')} taken out, ${restored} as before.`}</b>
-      </p>
+      <p className={styles.undone}>{`Undone: ${count(removed, 'tune')} taken out, ${restored} as before.`}</p>
       {kept.length > 0 ? (
         <>
           <p>{`${count(kept.length, 'tune')} changed since then and kept:`}</p>
-          <ul>
+          <ul className={styles.kept}>
             {kept.map(({ id, title }) => (
               <li key={id}>{title}</li>
             ))}

@@ -3,7 +3,7 @@ import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 import { newId } from '../../../lib/new-id';
 import { ProblemError, sentenceOf } from '../../../lib/problem';
-import { importTunes, undoImport, type ImportSource } from '../api/import-tunes';
+import { importTunes, type ImportSource } from '../api/import-tunes';
 import { libraryKey } from '../api/tune-list';
 import { NO_CHOICES, type ImportChoices } from '../import-choices';
 
@@ -26,7 +26,6 @@ export function useImport(circleId: string, onWritten: (report: ImportReport) =>
   const [source, setSource] = useState<ImportSource | null>(null);
   const [choices, setChoices] = useState(NO_CHOICES);
   const [round, setRound] = useState(0);
-  const renew = () => client.invalidateQueries({ queryKey: libraryKey(circleId) });
   const preview = useMutation({
     mutationFn: (chosen: ImportSource) => {
       // A file that is refused anyway need not travel.
@@ -43,12 +42,8 @@ export function useImport(circleId: string, onWritten: (report: ImportReport) =>
     // Also when the page was left meanwhile.
     onSuccess: async (report) => {
       onWritten(report);
-      await renew();
+      await client.invalidateQueries({ queryKey: libraryKey(circleId) });
     },
-  });
-  const undoing = useMutation({
-    mutationFn: (importId: string) => undoImport(circleId, importId),
-    onSuccess: renew,
   });
   const error = writing.error ?? preview.error;
   return {
@@ -77,7 +72,6 @@ export function useImport(circleId: string, onWritten: (report: ImportReport) =>
       setRound((before) => before + 1);
       setChoices(NO_CHOICES);
       writing.reset();
-      undoing.reset();
       preview.mutate(chosen);
     },
     write: () => {
@@ -87,12 +81,6 @@ export function useImport(circleId: string, onWritten: (report: ImportReport) =>
       const progress = same ? writing.variables.progress : newId();
       writing.mutate({ source, choices, progress });
     },
-    undo: () => {
-      if (writing.data?.importId !== undefined) undoing.mutate(writing.data.importId);
-    },
-    undoing: undoing.isPending,
-    undone: undoing.data,
-    undoError: undoing.error ? sentenceOf(undoing.error) : undefined,
   };
 }
 
