@@ -31,7 +31,9 @@ async function main([word, address, ...name]: readonly string[]): Promise<void> 
         displayName: name.join(' ') || address,
         password,
       });
-      await app.get(AccountsService).createConfirmed(app.get<RootDatabase>(DATABASE), values);
+      await app
+        .get(AccountsService)
+        .createConfirmed(app.get<RootDatabase>(DATABASE), [values], values.password);
     }
     const link = await app.get(RecoveryService).linkFor(address);
     if (link === null) throw new Error(`Nobody has an account with the address ${address}.`);

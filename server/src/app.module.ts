@@ -13,6 +13,7 @@ import { HealthController } from './health/health.controller';
 import { LimitsModule } from './limits/limits.module';
 import { LiveModule } from './live/live.module';
 import { logging } from './logging';
+import { MetricsModule } from './metrics/metrics.module';
 import { OrderingModule } from './ordering/ordering.module';
 import { RacksModule } from './racks/racks.module';
 import { SessionsModule } from './sessions/sessions.module';
@@ -42,6 +43,7 @@ export class AppModule {
         OrderingModule,
         RacksModule,
         LiveModule,
+        MetricsModule,
         SheetsModule,
         DemoModule,
         AccessModule,

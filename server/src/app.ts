@@ -9,6 +9,7 @@ import { readBody } from './common/body';
 import { answerHeaders, pageHeaders } from './common/headers';
 import { ownOrigin } from './common/origin';
 import type { Env } from './env';
+import { Metrics } from './metrics/metrics';
 import { serveOpenApi } from './openapi';
 import { servePages } from './pages';
 
@@ -26,7 +27,14 @@ export async function createApp(env: Env, controllers: Type[] = []): Promise<Nes
   app.use(pageHeaders(env));
   // A hall has poor signal: pages and answers go out compressed.
   app.use(compression());
-  app.use('/api', answerHeaders, ownOrigin(env.PEGWELL_URL), cookieParser(), readBody);
+  app.use(
+    '/api',
+    app.get(Metrics).measure,
+    answerHeaders,
+    ownOrigin(env.PEGWELL_URL),
+    cookieParser(),
+    readBody,
+  );
   app.setGlobalPrefix('api', { exclude: [{ path: '/', method: RequestMethod.GET }] });
   serveOpenApi(app);
   servePages(app);

@@ -26,6 +26,7 @@ describe('the configuration', () => {
     [{ DATABASE_URL, PEGWELL_URL: 'pegwell.example' }, /PEGWELL_URL is an address/],
     [{ DATABASE_URL, PEGWELL_URL: 'https://example.org/tunes' }, /without a path/],
     [{ DATABASE_URL, PEGWELL_SECRET: 'short' }, /at least 32/],
+    [{ DATABASE_URL, PEGWELL_METRICS_TOKEN: 'short' }, /at least 16/],
     [{ DATABASE_URL, PEGWELL_DEMO: 'maybe' }, /"yes" or "no"/],
     [{ DATABASE_URL, PEGWELL_MAIL_URL: 'mail.example' }, /smtp/],
   ])('refuses nonsense with a sentence: %j', (source, sentence) => {

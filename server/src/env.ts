@@ -49,6 +49,8 @@ const envSchema = z.object({
     .optional(),
   /** The address that mail comes from. */
   PEGWELL_MAIL_FROM: z.email('PEGWELL_MAIL_FROM is an e-mail address.').optional(),
+  /** Opens /api/metrics; without one, it opens on this machine alone. */
+  PEGWELL_METRICS_TOKEN: z.string().min(16, 'PEGWELL_METRICS_TOKEN has at least 16 characters.').optional(),
   PEGWELL_DEMO: yesNo('PEGWELL_DEMO'),
   PEGWELL_INSECURE_LAN: yesNo('PEGWELL_INSECURE_LAN'),
   PEGWELL_LOG: z.enum(['silent', 'error', 'warn', 'info', 'debug']).default('info'),
