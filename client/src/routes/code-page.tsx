@@ -3,15 +3,16 @@ import { CodeForm } from '../features/live/components/code-form';
 import styles from '../features/live/components/follow.module.css';
 import { useLight } from '../theme/light';
 import { Mark } from '../ui/mark';
+import phone from '../ui/phone.module.css';
 
 /** Where a code is typed in: for those who cannot scan it. */
 export function CodePage() {
   useLight('phone');
   const navigate = useNavigate();
   return (
-    <div className={styles.page}>
+    <div className={phone.page}>
       <title>Follow the evening · Pegwell</title>
-      <header className={styles.top}>
+      <header className={phone.top}>
         <Mark />
       </header>
       <main className={styles.plain}>

@@ -13,6 +13,7 @@ import { useWakeLock } from '../features/live/hooks/use-wake-lock';
 import { normalCode } from '../features/live/kept-answers';
 import { useLight } from '../theme/light';
 import { Loading } from '../ui/states';
+import phone from '../ui/phone.module.css';
 
 /** The phone on the music stand. Anyone with the code, no account. */
 export function FollowPage() {
@@ -27,9 +28,9 @@ export function FollowPage() {
   const place = follow?.now ?? follow?.next;
 
   return (
-    <div className={styles.page}>
+    <div className={phone.page}>
       <title>{`${follow?.now ? titleOf(follow.now) : (follow?.title ?? 'Follow the evening')} · Pegwell`}</title>
-      <header className={styles.top}>
+      <header className={phone.top}>
         <span>
           {place && follow ? `Tune ${place.position} of ${follow.total} · ${place.set}` : 'Pegwell'}
         </span>

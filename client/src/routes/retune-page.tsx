@@ -6,6 +6,7 @@ import styles from '../features/retune/components/retune-card.module.css';
 import { useOwnStrings, type OwnStrings } from '../features/retune/hooks/use-own-strings';
 import { useLight } from '../theme/light';
 import { Button } from '../ui/button';
+import phone from '../ui/phone.module.css';
 
 /**
  * The retune card of any tuning to any other, on the phone beside the instrument. Everything it needs stands in its
@@ -23,7 +24,7 @@ export function RetunePage() {
   const evening = code === undefined ? null : `/f/${code}`;
 
   return (
-    <div className={styles.page}>
+    <div className={phone.page}>
       <title>
         {kind && from?.ok && to?.ok
           ? `${showTuned(kind, from.value)} to ${showTuned(kind, to.value)} · Pegwell`

@@ -6,6 +6,7 @@ import { showTuned, type Tuned } from '@pegwell/shared/music/tuning';
 import { useCallback, useEffect, useRef, useState } from 'react';
 import { TuningText } from '../../../pictures/tuning-text';
 import { Button } from '../../../ui/button';
+import phone from '../../../ui/phone.module.css';
 import { useMicrophone } from '../hooks/use-microphone';
 import type { OwnStrings } from '../hooks/use-own-strings';
 import { AllStrings } from './all-strings';
@@ -46,7 +47,7 @@ export function RetuneCard({ kind, from, to, referenceA, strings, onDone }: Retu
 
   return (
     <>
-      <header className={styles.top}>
+      <header className={phone.top}>
         <span>
           {plan.length === 0 ? route : `${route} · step ${Math.min(at + 1, plan.length)} of ${plan.length}`}
         </span>
