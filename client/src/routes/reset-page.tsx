@@ -1,4 +1,5 @@
 import { useState } from 'react';
+import { useNavigate } from 'react-router-dom';
 import { ResetForm } from '../features/accounts/components/reset-form';
 import { useLinkToken } from '../features/accounts/hooks/use-link-token';
 import { useSignedOut } from '../features/accounts/hooks/use-signed-out';
@@ -11,6 +12,7 @@ import { usePageTurned } from './use-page-turned';
 export function ResetPage() {
   const token = useLinkToken();
   const signedOut = useSignedOut();
+  const navigate = useNavigate();
   const [done, setDone] = useState(false);
   usePageTurned(done);
   if (done) {
@@ -37,6 +39,8 @@ export function ResetPage() {
             onReset={() => {
               signedOut();
               setDone(true);
+              // Without the link, which is used up.
+              void navigate('/reset', { replace: true });
             }}
           />
         </div>

@@ -1,13 +1,14 @@
 import { useQueryClient } from '@tanstack/react-query';
 import { meKey } from '../api/me';
 
-/** Forgets everything that was loaded with a sign-in that has ended. */
+/**
+ * Forgets everything that was loaded with a sign-in that has ended. What is on the page now is not told, or it would
+ * lead to the sign-in page and from there back to itself: whoever calls this goes to another address.
+ */
 export function useSignedOut(): () => void {
   const client = useQueryClient();
   return () => {
-    // Not the query itself: a header that stays where it is would go on showing what it had.
+    client.clear();
     client.setQueryData(meKey, null);
-    client.removeQueries({ predicate: ({ queryKey }) => queryKey[0] !== meKey[0] });
-    client.getMutationCache().clear();
   };
 }
