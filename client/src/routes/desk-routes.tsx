@@ -24,6 +24,7 @@ const TuneEditPage = lazyPage(() => import('./tune-edit-page'), 'TuneEditPage');
 const ImportPage = lazyPage(() => import('./import-page'), 'ImportPage');
 const TuningsPage = lazyPage(() => import('./tunings-page'), 'TuningsPage');
 const PeoplePage = lazyPage(() => import('./people-page'), 'PeoplePage');
+const HistoryPage = lazyPage(() => import('./history-page'), 'HistoryPage');
 const RecordPage = lazyPage(() => import('./record-page'), 'RecordPage');
 
 /** Every page that is planned and read at a desk, inside the frame. */
@@ -53,6 +54,7 @@ export function DeskRoutes() {
             <Route path="tunes/import" element={<ImportPage />} />
             <Route path="tunings" element={<TuningsPage />} />
             <Route path="people" element={<PeoplePage />} />
+            <Route path="history" element={<HistoryPage />} />
             <Route path="record" element={<RecordPage />} />
           </Route>
         </Route>

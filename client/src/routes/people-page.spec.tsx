@@ -1,4 +1,4 @@
-import { screen } from '@testing-library/react';
+import { screen, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { describe, expect, it } from 'vitest';
 import { mockApi, ok } from '../lib/mock-api';
@@ -16,9 +16,9 @@ describe('people', () => {
     renderApp(at('people'));
     await screen.findByText('Rosa Lind');
     const rows = screen.getAllByRole('listitem').map((row) => row.textContent);
-    const ofAda = rows.indexOf('Ada Weir (you)ada@example.orghost');
+    const ofAda = rows.indexOf('Ada Weir (you)ada@example.orghostChange');
     expect(ofAda).toBeGreaterThanOrEqual(0);
-    expect(rows.indexOf('Rosa Lindrosa@example.orgplayer')).toBe(ofAda + 1);
+    expect(rows.indexOf('Rosa Lindrosa@example.orgplayerChange')).toBe(ofAda + 1);
   });
 
   it.each(['cohost', 'player'] as const)('lets no %s add anybody', async (role) => {
@@ -65,6 +65,32 @@ describe('people', () => {
     expect(await screen.findByText(sentence)).toBeTruthy();
     expect(field.getAttribute('aria-invalid')).toBe('true');
     expect(field.value).toBe('rosa@example.org');
+  });
+
+  it('gives somebody another role, and says why the last host keeps theirs', async () => {
+    const items = [ada, rosa];
+    const sent: unknown[] = [];
+    mockApi({
+      ...circleAnswers('host'),
+      [members]: () => ({ status: 200, body: { items } }),
+      [api('PATCH', `/members/${rosa.accountId}`)]: (body: unknown) => {
+        sent.push(body);
+        items[1] = { ...rosa, role: 'cohost' };
+        return { status: 200, body: items[1] };
+      },
+      [api('DELETE', `/members/${ada.accountId}`)]: () =>
+        refusal(422, 'cannot-be', { role: 'A circle keeps at least one host.' }),
+    });
+    renderApp(at('people'));
+    await userEvent.click(await screen.findByRole('button', { name: 'Change Rosa Lind' }));
+    const dialog = await screen.findByRole('dialog', { name: 'Rosa Lind' });
+    await userEvent.selectOptions(within(dialog).getByLabelText('As'), 'cohost');
+    await userEvent.click(within(dialog).getByRole('button', { name: 'Save' }));
+    expect(await screen.findByText('Rosa Lind is a cohost now.')).toBeTruthy();
+    expect(sent).toEqual([{ role: 'cohost' }]);
+    await userEvent.click(screen.getByRole('button', { name: 'Change Ada Weir' }));
+    await userEvent.click(await screen.findByRole('button', { name: 'Take out of the circle' }));
+    expect(await screen.findByText('A circle keeps at least one host.')).toBeTruthy();
   });
 
   it('asks for an address before sending', async () => {

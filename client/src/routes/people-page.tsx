@@ -1,7 +1,11 @@
+import type { CircleMember } from '@pegwell/shared/contract/circles';
 import { useQuery, useQueryClient } from '@tanstack/react-query';
+import { useState } from 'react';
+import { Link } from 'react-router-dom';
 import { useMe } from '../features/accounts/hooks/use-me';
-import { getMembers, membersKey } from '../features/circles/api/members';
+import { changeRole, getMembers, membersKey, removeMember } from '../features/circles/api/members';
 import { AddMemberForm } from '../features/circles/components/add-member-form';
+import { MemberDialog } from '../features/circles/components/member-dialog';
 import { MemberList } from '../features/circles/components/member-list';
 import { Page, PageHeading } from '../ui/page';
 import { Failing, Loading } from '../ui/states';
@@ -19,6 +23,7 @@ export function PeoplePage() {
     queryKey: membersKey(circle.id),
     queryFn: ({ signal }) => getMembers(circle.id, signal),
   });
+  const [changing, setChanging] = useState<CircleMember | null>(null);
   const mayChange = circle.may('members.change');
   const count = members.data?.items.length;
   return (
@@ -34,10 +39,36 @@ export function PeoplePage() {
           onRetry={() => void members.refetch()}
         />
       ) : members.data ? (
-        <MemberList members={members.data.items} ownId={me?.user.id} />
+        <MemberList
+          members={members.data.items}
+          ownId={me?.user.id}
+          onChange={mayChange ? setChanging : undefined}
+        />
       ) : (
         <Loading what="the people" />
       )}
+      {changing ? (
+        <MemberDialog
+          member={changing}
+          onClose={() => setChanging(null)}
+          onRole={async (role) => {
+            await changeRole(circle.id, changing.accountId, role);
+            say(`${changing.displayName} is a ${role} now.`);
+            // Of oneself, what one may do here changes with it.
+            await client.invalidateQueries({ queryKey: ['circle', circle.id] });
+          }}
+          onRemove={async () => {
+            await removeMember(circle.id, changing.accountId);
+            say(`${changing.displayName} is out of the circle.`);
+            await client.invalidateQueries({ queryKey: ['circle', circle.id] });
+          }}
+        />
+      ) : null}
+      {circle.may('history.read') ? (
+        <p className={styles.roles}>
+          <Link to={`/c/${circle.id}/history`}>What happened in the circle</Link>
+        </p>
+      ) : null}
       {mayChange ? (
         <section className={styles.add} aria-labelledby="add-member">
           <h2 id="add-member">Add somebody</h2>

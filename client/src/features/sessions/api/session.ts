@@ -14,6 +14,9 @@ export const putBoard = (sessionId: string, board: PutBoard) =>
 export const updateSession = (sessionId: string, changes: UpdateSession) =>
   api.patch<Session>(`/sessions/${sessionId}`, changes);
 
+/** Another code; the old one opens nothing from then on. */
+export const changeCode = (sessionId: string) => api.post<Session>(`/sessions/${sessionId}/code`);
+
 /** Takes an order of the board's own entries. */
 export const acceptOrder = (sessionId: string, order: AcceptSuggestion) =>
   api.post<Session>(`/sessions/${sessionId}/suggestion/accept`, order);

@@ -1,3 +1,4 @@
+import { useQueryClient } from '@tanstack/react-query';
 import type { ShownEntry, UpdateSession } from '@pegwell/shared/contract/sessions';
 import { setTitle, spotAt } from '@pegwell/shared/session/board';
 import type { BoardOperation } from '@pegwell/shared/session/board-operations';
@@ -8,6 +9,7 @@ import { moveToPosition } from '../card-menu';
 import { entryOfOpenPlace, type AssumedFor } from '../entries';
 import { entryTitle } from '../../../music/entry-title';
 import type { BoardInHand } from '../hooks/use-board';
+import { changeCode, sessionKey } from '../api/session';
 import { BeforeDialog } from './before-dialog';
 import { DetailsDialog } from './details-dialog';
 import { FollowDialog } from './follow-dialog';
@@ -41,6 +43,7 @@ interface BoardDialogsProps {
 export function BoardDialogs(props: BoardDialogsProps) {
   const { held, asking, onClose: close, act, firstFree, kinds, assumedFor, onUpdate, finder } = props;
   const { session, board } = held;
+  const queries = useQueryClient();
   return (
     <>
       {asking?.what === 'finder' ? (
@@ -51,7 +54,15 @@ export function BoardDialogs(props: BoardDialogsProps) {
       {asking?.what === 'details' ? (
         <DetailsDialog session={session} onSave={onUpdate} onClose={close} />
       ) : null}
-      {asking?.what === 'follow' ? <FollowDialog session={session} onClose={close} /> : null}
+      {asking?.what === 'follow' ? (
+        <FollowDialog
+          session={session}
+          onClose={close}
+          onNewCode={async () => {
+            queries.setQueryData(sessionKey(session.id), await changeCode(session.id));
+          }}
+        />
+      ) : null}
       {asking?.what === 'position' ? (
         <PositionDialog
           board={board}
