@@ -82,18 +82,19 @@ async function inLanes(
   work: (step: Step) => Promise<void>,
 ): Promise<void> {
   const waiting = [...steps];
-  let somethingEnded = Promise.resolve();
+  const underWay = new Set<Promise<void>>();
   const lane = async (): Promise<void> => {
     while (waiting.length > 0 && !isEnding()) {
       const at = waiting.findIndex((step) => (step.after ?? []).every((name) => over.has(name)));
       const [step] = at === -1 ? [] : waiting.splice(at, 1);
       if (!step) {
-        await somethingEnded;
+        // What is waited for is under way in the other lane. Only that: what is over would be awaited in a ring.
+        await Promise.race(underWay);
         continue;
       }
       const done = work(step);
-      somethingEnded = done;
-      await done;
+      underWay.add(done);
+      await done.finally(() => underWay.delete(done));
     }
   };
   await Promise.all(Array.from({ length: LANES }, lane));
