@@ -93,6 +93,20 @@ describe('people', () => {
     expect(await screen.findByText('A circle keeps at least one host.')).toBeTruthy();
   });
 
+  it('lets a player leave, after asking', async () => {
+    const asked = mockApi({
+      ...circleAnswers('player'),
+      [members]: ok({ items: [ada, rosa] }),
+      [api('DELETE', '/membership')]: () => ({ status: 204 }),
+    });
+    renderApp(at('people'));
+    await userEvent.click(await screen.findByRole('button', { name: 'Leave the circle' }));
+    expect(asked).not.toContain(api('DELETE', '/membership'));
+    await userEvent.click(await screen.findByRole('button', { name: 'Leave' }));
+    expect(await screen.findByText('You have left Heron Weir Circle.')).toBeTruthy();
+    expect(asked).toContain(api('DELETE', '/membership'));
+  });
+
   it('asks for an address before sending', async () => {
     const asked = mockApi({ ...circleAnswers('host'), [members]: ok({ items: [ada] }) });
     renderApp(at('people'));

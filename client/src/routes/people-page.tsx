@@ -1,10 +1,18 @@
 import type { CircleMember } from '@pegwell/shared/contract/circles';
 import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
-import { Link } from 'react-router-dom';
+import { Link, useNavigate } from 'react-router-dom';
+import { meKey } from '../features/accounts/api/me';
 import { useMe } from '../features/accounts/hooks/use-me';
-import { changeRole, getMembers, membersKey, removeMember } from '../features/circles/api/members';
+import {
+  changeRole,
+  getMembers,
+  leaveCircle,
+  membersKey,
+  removeMember,
+} from '../features/circles/api/members';
 import { AddMemberForm } from '../features/circles/components/add-member-form';
+import { LeaveCircle } from '../features/circles/components/leave-circle';
 import { MemberDialog } from '../features/circles/components/member-dialog';
 import { MemberList } from '../features/circles/components/member-list';
 import { Page, PageHeading } from '../ui/page';
@@ -19,6 +27,7 @@ export function PeoplePage() {
   const me = useMe().data;
   const client = useQueryClient();
   const say = useSay();
+  const navigate = useNavigate();
   const members = useQuery({
     queryKey: membersKey(circle.id),
     queryFn: ({ signal }) => getMembers(circle.id, signal),
@@ -85,6 +94,15 @@ export function PeoplePage() {
         Hosts and cohosts change tunes, tunings and evenings and run them; players read along and follow. Only
         a host adds people. Guests need none of this: they follow an evening by its code.
       </p>
+      <LeaveCircle
+        name={circle.name}
+        onLeave={async () => {
+          await leaveCircle(circle.id);
+          say(`You have left ${circle.name}.`);
+          await client.invalidateQueries({ queryKey: meKey });
+          void navigate('/');
+        }}
+      />
     </Page>
   );
 }

@@ -20,3 +20,5 @@ export const changeRole = (circleId: string, accountId: string, role: Role) =>
 
 export const removeMember = (circleId: string, accountId: string) =>
   api.delete(`/circles/${circleId}/members/${accountId}`);
+
+export const leaveCircle = (circleId: string) => api.delete(`/circles/${circleId}/membership`);
