@@ -80,7 +80,7 @@ describe('every page of the demo', () => {
       expect(await faults(page, pagesOf(places), foreign)).toEqual([]);
       await context.close();
     },
-    300_000,
+    600_000,
   );
 
   it('answers with a better order in under 300 ms, fewest pegs and stops proved', async () => {

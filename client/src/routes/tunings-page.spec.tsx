@@ -1,3 +1,5 @@
+import { builtInKind } from '@pegwell/shared/music/instrument';
+import { parseTuning } from '@pegwell/shared/music/tuning';
 import { screen, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { describe, expect, it } from 'vitest';
@@ -64,7 +66,12 @@ describe('the tunings', () => {
     const cell = within(row).getAllByRole('cell')[column]!;
     expect(cell.textContent).toBe(`${pegs}`);
     const address = within(cell).getByRole('link').getAttribute('href');
-    expect(address).toBe(`/retune?${new URLSearchParams({ kind, from, to }).toString()}`);
+    const inFull = (text: string) => {
+      const parsed = parseTuning(builtInKind(kind)!, text);
+      return parsed.ok ? parsed.value.pitches.join(' ') : parsed.reason;
+    };
+    const query = new URLSearchParams({ kind, from: inFull(from), to: inFull(to) });
+    expect(address).toBe(`/retune?${query.toString()}`);
   });
 
   it('lead to the tunes of the circle that are played in them', async () => {
