@@ -25,20 +25,26 @@ export interface Button {
 
 const hasNeckPeg = (head: Head): boolean => head.places.some(({ side }) => side === 'neck');
 
+const overNut = (head: Head): readonly number[] =>
+  head.places.filter(({ side }) => side !== 'neck').map((place) => place.courseIndex);
+
+/** The strings of the left pegs lie on the left: a head whose first string is on the right is a mirrored one. */
+const isMirrored = (head: Head): boolean =>
+  head.places.find(({ side }) => side === 'left')?.courseIndex !== Math.min(...overNut(head));
+
 /** The strings over the nut, in string order from the left; mirrored heads have them the other way round. */
 export function stringX(head: Head, courseIndex: number): number {
-  const over = head.places.filter(({ side }) => side !== 'neck').map((place) => place.courseIndex);
-  // The strings of the left pegs lie on the left.
-  const leftFirst = head.places.find(({ side }) => side === 'left')?.courseIndex === Math.min(...over);
+  const over = overNut(head);
   const at = over.indexOf(courseIndex);
-  const index = leftFirst ? at : over.length - 1 - at;
+  const index = isMirrored(head) ? over.length - 1 - at : at;
   return MIDDLE + (index - (over.length - 1) / 2) * (60 / (over.length - 1));
 }
 
 /** One for each peg of a course: two stand close, a row apart from the next. */
 export function buttonsOf(head: Head, place: PegPlace, pegs: number): readonly Button[] {
   if (place.side === 'neck') {
-    return [{ x: MIDDLE - 76, y: 284, out: -1, half: 22, ry: 22, post: MIDDLE - 36 }];
+    const out = isMirrored(head) ? 1 : -1;
+    return [{ x: MIDDLE + out * 76, y: 266, out, half: 22, ry: 22, post: MIDDLE + out * 36 }];
   }
   const out = place.side === 'left' ? -1 : 1;
   const rows = head.places.filter(({ side }) => side === place.side).length;

@@ -75,6 +75,10 @@ describe('the retune card', () => {
   it('takes the capo off first and says where the spike is', async () => {
     open({ kind: 'banjo', from: 'gDGBD capo 2', to: 'gCGCD capo 2' });
     expect((await heading()).textContent).toBe('Capo off. Fifth string out of its spike.');
+    expect(screen.getByText('Pegs are turned without a capo.')).toBeTruthy();
+    for (let step = 1; step < 5; step++) await next();
+    expect((await heading()).textContent).toMatch(/^Capo on at fret 2/);
+    expect(screen.queryByText('Pegs are turned without a capo.')).toBeNull();
   });
 
   it('says what it could not read', async () => {

@@ -3,7 +3,7 @@ import type { InstrumentKind } from './instrument';
 /** Where the peg or pegs of a course stand, seen from the front with the head up. */
 export interface PegPlace {
   readonly courseIndex: number;
-  /** `neck`: a banjo's fifth, on the left of the neck. */
+  /** `neck`: a banjo's fifth, on the neck beside the lowest of the other strings. */
   readonly side: 'left' | 'right' | 'neck';
   /** 1 is nearest the nut, counted per side. */
   readonly row: number;

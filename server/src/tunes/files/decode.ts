@@ -18,7 +18,7 @@ const NOT_TEXT = 'This file is not text.';
 /** ABC 2.1, section 3.1.17: a file may name its own character set; HTML's long names of them pass too. */
 const CHARSET = /^(?:I:|%%)\s*abc-charset\s+([\w-]{1,30})/m;
 /** Control characters without tab, line ends, form feed and the end mark of DOS files. */
-// eslint-disable-next-line no-control-regex
+// eslint-disable-next-line no-control-regex -- they are what is looked for
 const CONTROLS = /[\u0000-\u0008\u000b\u000e-\u0019\u001b-\u001f\u007f]/g;
 /** A stray one spoils its own tune, and no file; random bytes have one in nine. */
 const MOST_CONTROLS = 1 / 100;

@@ -87,9 +87,9 @@ export function RetuneCard({ kind, from, to, referenceA, strings, onDone }: Retu
                 <p>{checkSentence(step)}</p>
                 <AllStrings {...{ kind, to: { ...to, capo: 0 }, referenceA, strings }} />
               </>
-            ) : (
+            ) : step.to === 0 && at < plan.length - 1 ? (
               <p>Pegs are turned without a capo.</p>
-            )}
+            ) : null}
           </>
         )}
         {plan.some(({ type }) => type === 'turn') ? <p className={styles.limits}>{DEFERENCE}</p> : null}
